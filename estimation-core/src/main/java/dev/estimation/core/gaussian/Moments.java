@@ -1,0 +1,108 @@
+package dev.estimation.core.gaussian;
+
+import dev.estimation.core.internal.Checks;
+import dev.estimation.core.internal.LowerFactor;
+import dev.estimation.core.space.Space;
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * A mutable mean and covariance of fixed size, for the step path.
+ *
+ * <p>Shapes: mean of {@code space.storage()} numbers, covariance d x d with d = {@code
+ * space.dimension()}. The lower Cholesky factor of the covariance is kept once it has been asked
+ * for, so that the step that checks a covariance saves the next step the work.
+ *
+ * <p><i>Confined to one thread.</i> Allocates only when built. Cost of a factor: d^3 / 6
+ * multiplications, d square roots.
+ */
+public final class Moments {
+    private final Space space;
+    private final double[] mean;
+    private final DMatrixRMaj covariance;
+    private final LowerFactor factor;
+    private boolean factored;
+
+    /** Moments in the given space, all zero. */
+    public Moments(Space space) {
+        this.space = space;
+        this.mean = new double[space.storage()];
+        this.covariance = new DMatrixRMaj(space.dimension(), space.dimension());
+        this.factor = new LowerFactor(space.dimension());
+    }
+
+    /** Where the vector lives. */
+    public Space space() {
+        return space;
+    }
+
+    /** The mean: the array itself, to be read only, valid until the next change. */
+    public double[] mean() {
+        return mean;
+    }
+
+    /** The covariance: the matrix itself, to be read only, valid until the next change. */
+    public DMatrixRMaj covariance() {
+        return covariance;
+    }
+
+    /** The mean, to be filled. */
+    public double[] changeMean() {
+        return mean;
+    }
+
+    /** The covariance, to be filled entirely and symmetrically; forgets the factor. */
+    public DMatrixRMaj changeCovariance() {
+        factored = false;
+        return covariance;
+    }
+
+    /** Takes the values of a Gaussian of the same size. */
+    public void set(Gaussian value) {
+        Checks.length("mean", mean, value.dimension());
+        value.copyInto(mean, changeCovariance());
+    }
+
+    /** Takes the values of moments of the same size. */
+    public void set(Moments other) {
+        Checks.length("mean", other.mean, mean.length);
+        System.arraycopy(other.mean, 0, mean, 0, mean.length);
+        System.arraycopy(
+                other.covariance.data, 0, covariance.data, 0, covariance.getNumElements());
+        factored = other.factored;
+        if (factored) {
+            factor.set(other.factor);
+        }
+    }
+
+    /**
+     * Makes sure that the lower factor exists.
+     *
+     * @return false if the covariance is not finite or not positive semi-definite; {@link
+     *     #factorFailure()} then says where
+     */
+    public boolean factor() {
+        if (!factored) {
+            factored = factor.factorSemidefinite(covariance);
+        }
+        return factored;
+    }
+
+    /** The lower factor L, with covariance = L L'; read only, valid after {@link #factor()} was true. */
+    public DMatrixRMaj lowerFactor() {
+        return factor.columns();
+    }
+
+    /** Which pivot made the last {@link #factor()} fail, and its value. */
+    public String factorFailure() {
+        return factor.failure();
+    }
+
+    /**
+     * These moments as an immutable value.
+     *
+     * @throws IllegalArgumentException if they are not those of a Gaussian
+     */
+    public Gaussian toGaussian() {
+        return Gaussian.of(mean, covariance);
+    }
+}

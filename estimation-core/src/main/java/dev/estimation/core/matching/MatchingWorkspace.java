@@ -1,0 +1,49 @@
+package dev.estimation.core.matching;
+
+import dev.estimation.core.gaussian.Moments;
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * One thread's scratch and results for carrying moments through one function. <i>Confined to one
+ * thread</i>; allocates only when built.
+ *
+ * <p>With n the dimension of the input, k the number of active inputs and m the dimension of the
+ * output, the cross-covariance of input and output is the product of two small matrices, P_uz = B W:
+ * {@link #inputFactor()} B, n x k, and {@link #unitCrossCovariance()} W, k x m. B B' is the part of the
+ * input covariance that the active inputs carry. Gains and smoother gains are made from the two.
+ */
+public interface MatchingWorkspace {
+    /**
+     * Carries moments through the function.
+     *
+     * @param input read; its lower factor is made if it has none
+     * @param given read and handed to the function
+     * @param additiveNoise covariance added to the output's, m x m and symmetric, read; or null
+     * @return {@link MatchingStatus#MATCHED} if the results below are valid; otherwise they are not, and
+     *     {@link #failure()} says what was wrong
+     * @throws IllegalArgumentException if a shape is wrong
+     */
+    MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise);
+
+    /**
+     * Mean and covariance of the output, noise included; read only, valid until the next call. The
+     * covariance is symmetric and finite; whether it is positive semi-definite is for the caller to
+     * ask, since negative weights can undo that.
+     */
+    Moments output();
+
+    /** B, n x k; read only, valid until the input or the workspace is used again. */
+    DMatrixRMaj inputFactor();
+
+    /** W, k x m, with P_uz = B W; read only, valid until the next call. */
+    DMatrixRMaj unitCrossCovariance();
+
+    /** The function evaluations of the last call, those for numerical derivatives included. */
+    int evaluations();
+
+    /** The Jacobians formed in the last call, analytic or by differences. */
+    int jacobians();
+
+    /** What was wrong in the last call, in words; empty if nothing was. */
+    String failure();
+}

@@ -1,0 +1,42 @@
+package dev.estimation.core.matching;
+
+import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.points.PointRule;
+import dev.estimation.core.space.Space;
+
+/**
+ * Moments carried by points: u_i = m + L xi_i, with L the lower Cholesky factor of the covariance of
+ * the active inputs and xi_i the points of a rule.
+ *
+ * <p>With d_i = g(u_i) - g(m): delta = sum w_i d_i, mean = g(m) + delta, P_zz = sum w_i d_i d_i' +
+ * (wc_0 - wm_0 - 1) delta delta', W = sum w_i xi_i d_i'. Sums run over all points but the centre, whose
+ * deviation is zero, so a large negative centre weight costs no digits in them. Differences are those
+ * of the output space: angles are averaged around the centre's image, so deviations must stay within
+ * half a turn of it.
+ *
+ * <p>Zero variances give points that do not move along them. P_zz is positive semi-definite if the
+ * weights of all points but the centre are positive and wc_0 - wm_0 - 1 is not below -1 times the sum
+ * that they have; see the rules. The rounding of g itself is multiplied by {@code
+ * UnitPoints.weightAmplification()}.
+ *
+ * <p>Cost: the evaluations of the rule and one at the centre; about points * m^2 / 2 operations for
+ * the covariance, and points * (m + n) for each coordinate that is not zero. <i>Immutable.</i> Source:
+ * Sarkka and Svensson 2023, <i>Bayesian Filtering and Smoothing</i>, 2nd ed., chapters 8 and 9.
+ */
+public final class PointMatching implements MomentMatching {
+    private final PointRule rule;
+
+    private PointMatching(PointRule rule) {
+        this.rule = rule;
+    }
+
+    /** Matching by the points of a rule. */
+    public static PointMatching of(PointRule rule) {
+        return new PointMatching(rule);
+    }
+
+    @Override
+    public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
+        return new PointWorkspace(input, output, function, rule);
+    }
+}

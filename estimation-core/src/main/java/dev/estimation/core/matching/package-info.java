@@ -1,0 +1,22 @@
+/**
+ * The one question on which all else rests: given u with mean and covariance, and z = g(u), what are
+ * the mean and covariance of z and the cross-covariance of u and z?
+ *
+ * <p>A {@link dev.estimation.core.matching.MomentMatching} is a way of answering; it is immutable and
+ * shared by all threads. Its {@link dev.estimation.core.matching.MatchingWorkspace} belongs to one
+ * thread, owns all scratch, and allocates nothing after it is built.
+ *
+ * <table>
+ *   <caption>Which matching for which need (n: number of active inputs)</caption>
+ *   <tr><th>matching</th><th>evaluations</th><th>exact for</th><th>mind</th></tr>
+ *   <tr><td>{@code Linearisation.firstOrder()}</td><td>1 and a Jacobian</td><td>affine g</td>
+ *     <td>blind to curvature: bias and a covariance too small where g bends within the spread</td></tr>
+ *   <tr><td>{@code UnscentedRule}</td><td>2 n + 1</td><td>mean to degree 3</td>
+ *     <td>spread parameters; covariance may turn indefinite where beta is below alpha^2</td></tr>
+ *   <tr><td>{@code CubatureRule}</td><td>2 n + 1</td><td>mean to degree 3</td>
+ *     <td>points move out as sqrt(n); never indefinite</td></tr>
+ *   <tr><td>{@code GaussHermiteRule}</td><td>p^n</td><td>mean to degree 2 p - 1 an axis</td>
+ *     <td>cost grows exponentially in n; never indefinite</td></tr>
+ * </table>
+ */
+package dev.estimation.core.matching;

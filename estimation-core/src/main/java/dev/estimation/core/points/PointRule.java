@@ -1,0 +1,18 @@
+package dev.estimation.core.points;
+
+/**
+ * A way of standing for N(0, I) by weighted points, in any number of dimensions.
+ *
+ * <p>Its points must have weights that sum to 1, mean 0 and covariance I; a contract test holds every
+ * rule of this library to that. <i>Immutable.</i>
+ */
+@FunctionalInterface
+public interface PointRule {
+    /**
+     * The points in the given number of dimensions.
+     *
+     * @param dimension 1 or more
+     * @throws IllegalArgumentException if the rule does not exist there, or has too many points
+     */
+    UnitPoints points(int dimension);
+}

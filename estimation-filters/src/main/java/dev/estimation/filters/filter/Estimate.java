@@ -1,0 +1,75 @@
+package dev.estimation.filters.filter;
+
+import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.gaussian.Moments;
+import dev.estimation.core.internal.Checks;
+import dev.estimation.core.space.Space;
+
+/**
+ * The state of one track: a time, a mean and a covariance. Made by {@link FilterPlan#start}; changed
+ * only by a step that is applied. <i>Confined to one thread</i> at a time.
+ */
+public final class Estimate {
+    private final Moments moments;
+    private double time;
+
+    Estimate(Space space, double time, Gaussian initial) {
+        Checks.finite("time", time);
+        if (initial.dimension() != space.dimension()) {
+            throw new IllegalArgumentException(
+                    "initial estimate must have dimension " + space.dimension()
+                            + " to match the state, got " + initial.dimension());
+        }
+        this.time = time;
+        this.moments = new Moments(space);
+        moments.set(initial);
+        space.displace(moments.mean(), new double[space.dimension()], moments.changeMean());
+    }
+
+    /** The time (s) for which this estimate holds. */
+    public double time() {
+        return time;
+    }
+
+    /** The mean of one component. */
+    public double mean(int index) {
+        return moments.mean()[index];
+    }
+
+    /** The covariance of two components. */
+    public double covariance(int row, int column) {
+        return moments.covariance().get(row, column);
+    }
+
+    /** The standard deviation of one component. */
+    public double standardDeviation(int index) {
+        return Math.sqrt(covariance(index, index));
+    }
+
+    /** Mean and covariance as an immutable value. */
+    public Gaussian toGaussian() {
+        return moments.toGaussian();
+    }
+
+    Moments moments() {
+        return moments;
+    }
+
+    void requireSpace(Space wanted) {
+        Space space = moments.space();
+        if (space != wanted && !space.equals(wanted)) {
+            throw new IllegalArgumentException(
+                    "estimate must live in the state space " + wanted + " of the plan, got " + space);
+        }
+    }
+
+    void replace(double newTime, Moments newMoments) {
+        time = newTime;
+        moments.set(newMoments);
+    }
+
+    @Override
+    public String toString() {
+        return "Estimate[t = " + time + " s, " + toGaussian() + "]";
+    }
+}

@@ -1,0 +1,107 @@
+package dev.estimation.filters.filter;
+
+import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.matching.Linearisation;
+import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.core.matching.PointMatching;
+import dev.estimation.core.points.CubatureRule;
+import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.UnscentedRule;
+import dev.estimation.filters.consistency.ChiSquareBounds;
+import dev.estimation.filters.model.MotionModel;
+
+/**
+ * A Gaussian filter, ready to be run: a motion model, a matching for prediction and update, and a gate.
+ *
+ * <p>Prediction: mean and covariance of f(x) by the matching, plus Q. Update: with the innovation nu =
+ * z - mean of h(x), its covariance S, the cross-covariance C of x and z, and K = C S^-1: mean + K nu, P
+ * - K S K'. Points are drawn anew for each. The filter is the textbook one of its matching: linearisation
+ * gives the extended Kalman filter, sigma points the unscented one.
+ *
+ * <p><i>Immutable.</i> Share one plan among all threads; each takes its own workspace. Source: Ito and
+ * Xiong 2000, <i>Gaussian filters for nonlinear filtering problems</i>; Sarkka and Svensson 2023,
+ * chapter 8.
+ */
+public final class FilterPlan {
+    private final MotionModel motion;
+    private final MomentMatching matching;
+    private final double gateProbability;
+
+    private FilterPlan(MotionModel motion, MomentMatching matching, double gateProbability) {
+        this.motion = motion;
+        this.matching = matching;
+        this.gateProbability = gateProbability;
+    }
+
+    /**
+     * A filter on any matching, without a gate.
+     *
+     * @throws IllegalArgumentException if the matching cannot serve the model
+     */
+    public static FilterPlan of(MotionModel motion, MomentMatching matching) {
+        FilterPlan plan = new FilterPlan(motion, matching, Double.NaN);
+        plan.workspace(); // a model that the matching cannot serve is refused here, not at the first step
+        return plan;
+    }
+
+    /** The extended Kalman filter: first-order linearisation; models must know their Jacobians. */
+    public static FilterPlan extended(MotionModel motion) {
+        return of(motion, Linearisation.firstOrder());
+    }
+
+    /** The unscented Kalman filter with the scaled rule; see {@link UnscentedRule#scaled}. */
+    public static FilterPlan unscented(MotionModel motion, double alpha, double beta, double kappa) {
+        return of(motion, PointMatching.of(UnscentedRule.scaled(alpha, beta, kappa)));
+    }
+
+    /** The cubature Kalman filter of degree 3. */
+    public static FilterPlan cubature(MotionModel motion) {
+        return of(motion, PointMatching.of(CubatureRule.degreeThree()));
+    }
+
+    /** The Gauss-Hermite filter with a number of nodes on each axis. */
+    public static FilterPlan gaussHermite(MotionModel motion, int nodesPerAxis) {
+        return of(motion, PointMatching.of(GaussHermiteRule.product(nodesPerAxis)));
+    }
+
+    /**
+     * This plan with a gate on updates: a measurement whose normalised innovation squared is above the
+     * chi-square quantile of the given probability is rejected.
+     *
+     * @param probability of passing for an honest filter, in (0, 1), e.g. 0.999
+     */
+    public FilterPlan withGate(double probability) {
+        ChiSquareBounds.upperLimit(probability, 1);
+        return new FilterPlan(motion, matching, probability);
+    }
+
+    /** Scratch for one thread. */
+    public FilterWorkspace workspace() {
+        return new FilterWorkspace(this);
+    }
+
+    /**
+     * A new track.
+     *
+     * @param time of the estimate (s), finite
+     * @param initial mean and covariance; angles are brought into [-pi, pi)
+     */
+    public Estimate start(double time, Gaussian initial) {
+        return new Estimate(motion.stateSpace(), time, initial);
+    }
+
+    MotionModel motion() {
+        return motion;
+    }
+
+    MomentMatching matching() {
+        return matching;
+    }
+
+    /** The limit of the normalised innovation squared; infinite without a gate. */
+    double gateLimit(int degreesOfFreedom) {
+        return Double.isNaN(gateProbability)
+                ? Double.POSITIVE_INFINITY
+                : ChiSquareBounds.upperLimit(gateProbability, degreesOfFreedom);
+    }
+}

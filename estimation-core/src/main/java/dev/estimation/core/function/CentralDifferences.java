@@ -83,7 +83,7 @@ public final class CentralDifferences implements Jacobian {
         return tangent[j];
     }
 
-    /** The function evaluations that one Jacobian costs. */
+    /** {@return the function evaluations that one Jacobian costs} */
     public int evaluations() {
         return 2 * active.length;
     }

@@ -32,17 +32,22 @@ public final class Structure {
      * This structure with the inputs that the function reads.
      *
      * @param indices distinct, in the order in which points are to be drawn; copied
+     * @return a structure that says so
      */
     public Structure withActiveInputs(int... indices) {
         return new Structure(indices.clone(), jacobian);
     }
 
-    /** This structure with every input active. */
+    /** {@return this structure with every input active} */
     public Structure withAllInputsActive() {
         return new Structure(null, jacobian);
     }
 
-    /** This structure with a Jacobian. */
+    /**
+     * {@return this structure with a Jacobian}
+     *
+     * @param derivatives of the function, over all inputs
+     */
     public Structure withJacobian(Jacobian derivatives) {
         return new Structure(activeInputs, derivatives);
     }
@@ -51,6 +56,7 @@ public final class Structure {
      * The inputs that the function reads: all, unless it was said otherwise.
      *
      * @param dimension the dimension of the input space
+     * @return their indices, a copy
      * @throws IllegalArgumentException if an index is not below the dimension, or comes twice
      */
     public int[] activeInputs(int dimension) {
@@ -63,7 +69,7 @@ public final class Structure {
         return activeInputs.clone();
     }
 
-    /** The Jacobian, where one is known. */
+    /** {@return the Jacobian, where one is known} */
     public Optional<Jacobian> jacobian() {
         return Optional.ofNullable(jacobian);
     }

@@ -18,7 +18,7 @@ public interface VectorFunction {
      */
     void evaluate(double[] input, double[] given, double[] output);
 
-    /** What is known of this function; must not change over its life. */
+    /** {@return what is known of this function; must not change over its life} */
     default Structure structure() {
         return Structure.UNKNOWN;
     }

@@ -30,6 +30,7 @@ public final class Gaussian {
      *
      * @param mean n numbers, copied
      * @param covariance n rows of n numbers, copied
+     * @return the value
      * @throws IllegalArgumentException if shapes differ, a number is not finite, or the covariance is
      *     not symmetric or not positive semi-definite
      */
@@ -53,6 +54,7 @@ public final class Gaussian {
      *
      * @param mean n numbers, copied
      * @param covariance n x n, copied
+     * @return the value
      * @throws IllegalArgumentException as for {@link #of(double[], double[][])}
      */
     public static Gaussian of(double[] mean, DMatrixRMaj covariance) {
@@ -68,6 +70,7 @@ public final class Gaussian {
      *
      * @param mean n numbers, copied
      * @param standardDeviations n numbers, each 0 or more, in the units of the mean
+     * @return the value
      */
     public static Gaussian independent(double[] mean, double[] standardDeviations) {
         int n = mean.length;
@@ -128,32 +131,45 @@ public final class Gaussian {
         return largest;
     }
 
-    /** The number of components. */
+    /** {@return the number of components} */
     public int dimension() {
         return mean.length;
     }
 
-    /** The mean of one component. */
+    /**
+     * {@return the mean of one component}
+     *
+     * @param index from 0
+     */
     public double mean(int index) {
         return mean[index];
     }
 
-    /** The covariance of two components. */
+    /**
+     * {@return the covariance of two components}
+     *
+     * @param row from 0
+     * @param column from 0
+     */
     public double covariance(int row, int column) {
         return covariance.get(row, column);
     }
 
-    /** The standard deviation of one component. */
+    /**
+     * {@return the standard deviation of one component}
+     *
+     * @param index from 0
+     */
     public double standardDeviation(int index) {
         return Math.sqrt(covariance.get(index, index));
     }
 
-    /** A copy of the mean. */
+    /** {@return a copy of the mean} */
     public double[] mean() {
         return mean.clone();
     }
 
-    /** A copy of the covariance, n x n. */
+    /** {@return a copy of the covariance, n x n} */
     public DMatrixRMaj covariance() {
         return covariance.copy();
     }

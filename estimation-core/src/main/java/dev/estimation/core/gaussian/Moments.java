@@ -22,7 +22,11 @@ public final class Moments {
     private final LowerFactor factor;
     private boolean factored;
 
-    /** Moments in the given space, all zero. */
+    /**
+     * Moments in the given space, all zero.
+     *
+     * @param space where the vector lives
+     */
     public Moments(Space space) {
         this.space = space;
         this.mean = new double[space.storage()];
@@ -30,39 +34,47 @@ public final class Moments {
         this.factor = new LowerFactor(space.dimension());
     }
 
-    /** Where the vector lives. */
+    /** {@return where the vector lives} */
     public Space space() {
         return space;
     }
 
-    /** The mean: the array itself, to be read only, valid until the next change. */
+    /** {@return the mean: the array itself, to be read only, valid until the next change} */
     public double[] mean() {
         return mean;
     }
 
-    /** The covariance: the matrix itself, to be read only, valid until the next change. */
+    /** {@return the covariance: the matrix itself, to be read only, valid until the next change} */
     public DMatrixRMaj covariance() {
         return covariance;
     }
 
-    /** The mean, to be filled. */
+    /** {@return the mean, to be filled} */
     public double[] changeMean() {
         return mean;
     }
 
-    /** The covariance, to be filled entirely and symmetrically; forgets the factor. */
+    /** {@return the covariance, to be filled entirely and symmetrically; forgets the factor} */
     public DMatrixRMaj changeCovariance() {
         factored = false;
         return covariance;
     }
 
-    /** Takes the values of a Gaussian of the same size. */
+    /**
+     * Takes the values of a Gaussian of the same size.
+     *
+     * @param value copied from
+     */
     public void set(Gaussian value) {
         Checks.length("mean", mean, value.dimension());
         value.copyInto(mean, changeCovariance());
     }
 
-    /** Takes the values of moments of the same size. */
+    /**
+     * Takes the values of moments of the same size.
+     *
+     * @param other copied from
+     */
     public void set(Moments other) {
         Checks.length("mean", other.mean, mean.length);
         System.arraycopy(other.mean, 0, mean, 0, mean.length);
@@ -87,12 +99,12 @@ public final class Moments {
         return factored;
     }
 
-    /** The lower factor L, with covariance = L L'; read only, valid after {@link #factor()} was true. */
+    /** {@return the lower factor L, with covariance = L L'; read only, valid after {@link #factor()} was true} */
     public DMatrixRMaj lowerFactor() {
         return factor.columns();
     }
 
-    /** Which pivot made the last {@link #factor()} fail, and its value. */
+    /** {@return which pivot made the last {@link #factor()} fail, and its value} */
     public String factorFailure() {
         return factor.failure();
     }
@@ -100,6 +112,7 @@ public final class Moments {
     /**
      * These moments as an immutable value.
      *
+     * @return the value
      * @throws IllegalArgumentException if they are not those of a Gaussian
      */
     public Gaussian toGaussian() {

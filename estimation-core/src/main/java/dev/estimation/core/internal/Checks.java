@@ -6,7 +6,13 @@ import java.util.Arrays;
 public final class Checks {
     private Checks() {}
 
-    /** Fails unless {@code array} has {@code wanted} elements. */
+    /**
+     * Fails unless {@code array} has {@code wanted} elements.
+     *
+     * @param what the name in the message
+     * @param array checked
+     * @param wanted its length
+     */
     public static void length(String what, double[] array, int wanted) {
         if (array == null) {
             throw new NullPointerException(what + " must have length " + wanted + ", got null");
@@ -17,7 +23,12 @@ public final class Checks {
         }
     }
 
-    /** Fails unless every element is finite. */
+    /**
+     * Fails unless every element is finite.
+     *
+     * @param what the name in the message
+     * @param values checked
+     */
     public static void finite(String what, double... values) {
         for (int i = 0; i < values.length; i++) {
             if (!Double.isFinite(values[i])) {
@@ -27,12 +38,20 @@ public final class Checks {
         }
     }
 
-    /** Whether every element is finite. */
+    /**
+     * {@return whether every element is finite}
+     *
+     * @param values checked
+     */
     public static boolean allFinite(double[] values) {
         return firstNotFinite(values) < 0;
     }
 
-    /** The index of the first element that is not finite, or -1. */
+    /**
+     * {@return the index of the first element that is not finite, or -1}
+     *
+     * @param values checked
+     */
     public static int firstNotFinite(double[] values) {
         for (int i = 0; i < values.length; i++) {
             if (!Double.isFinite(values[i])) {
@@ -42,7 +61,13 @@ public final class Checks {
         return -1;
     }
 
-    /** Fails unless the indices are distinct and each lies in [0, size). */
+    /**
+     * Fails unless the indices are distinct and each lies in [0, size).
+     *
+     * @param what the name in the message
+     * @param indices checked
+     * @param size the limit, exclusive
+     */
     public static void distinctIndices(String what, int[] indices, int size) {
         boolean[] seen = new boolean[size];
         for (int index : indices) {

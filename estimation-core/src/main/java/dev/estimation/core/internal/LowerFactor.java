@@ -19,7 +19,11 @@ public final class LowerFactor {
     private int failedPivot = -1;
     private double failedValue;
 
-    /** Factors of matrices of the given size: L with P = L L', lower triangular. */
+    /**
+     * Factors of matrices of the given size: L with P = L L', lower triangular.
+     *
+     * @param size rows and columns
+     */
     public LowerFactor(int size) {
         this(naturalOrder(size), size);
     }
@@ -43,7 +47,7 @@ public final class LowerFactor {
         return order;
     }
 
-    /** The factor, or its first columns, of the last success. */
+    /** {@return the factor, or its first columns, of the last success} */
     public DMatrixRMaj columns() {
         return columns;
     }
@@ -51,6 +55,9 @@ public final class LowerFactor {
     /**
      * Factors a positive definite matrix, reading its lower triangle in natural order. A pivot not
      * above {@code n eps} times its diagonal entry fails; NaN and infinity fail.
+     *
+     * @param matrix n x n, read
+     * @return whether it is positive definite
      */
     public boolean factorDefinite(DMatrixRMaj matrix) {
         return factor(matrix, true);
@@ -60,6 +67,9 @@ public final class LowerFactor {
      * Factors a symmetric positive semi-definite matrix. A pivot within {@code n eps} of its diagonal
      * entry with an equally small column is a zero variance and gives a zero column; NaN and infinity
      * fail.
+     *
+     * @param matrix n x n, read
+     * @return whether it is positive semi-definite
      */
     public boolean factorSemidefinite(DMatrixRMaj matrix) {
         return factor(matrix, false);
@@ -122,19 +132,27 @@ public final class LowerFactor {
         return false;
     }
 
-    /** Says which pivot failed, e.g. "pivot 2 of 4 is -3.1E-9". */
+    /** {@return which pivot failed, in words: "pivot 2 of 4 is -3.1E-9"} */
     public String failure() {
         return "pivot " + (failedPivot + 1) + " of " + size + " is " + failedValue;
     }
 
-    /** Copies the factor of another of the same size and order. */
+    /**
+     * Copies the factor of another of the same size and order.
+     *
+     * @param other copied from
+     */
     public void set(LowerFactor other) {
         System.arraycopy(other.columns.data, 0, columns.data, 0, columns.getNumElements());
         failedPivot = other.failedPivot;
         failedValue = other.failedValue;
     }
 
-    /** Overwrites {@code b} with the solution y of L y = b. Wants a definite factor. */
+    /**
+     * Overwrites {@code b} with the solution y of L y = b. Wants a definite factor.
+     *
+     * @param b n numbers, updated
+     */
     public void solveLower(double[] b) {
         double[] l = columns.data;
         for (int r = 0; r < size; r++) {
@@ -146,7 +164,7 @@ public final class LowerFactor {
         }
     }
 
-    /** Twice the sum of the logarithms of the diagonal: ln det of the factored matrix. */
+    /** {@return twice the sum of the logarithms of the diagonal: ln det of the factored matrix} */
     public double logDeterminant() {
         double sum = 0;
         for (int i = 0; i < size; i++) {

@@ -12,7 +12,11 @@ public final class SymmetricMatrix {
 
     private SymmetricMatrix() {}
 
-    /** Copies the lower triangle over the upper one. */
+    /**
+     * Copies the lower triangle over the upper one.
+     *
+     * @param matrix square
+     */
     public static void mirrorLower(DMatrixRMaj matrix) {
         double[] data = matrix.data;
         int n = matrix.numRows;
@@ -23,7 +27,11 @@ public final class SymmetricMatrix {
         }
     }
 
-    /** The row-major index of the first entry that is not finite, or -1. */
+    /**
+     * {@return the row-major index of the first entry that is not finite, or -1}
+     *
+     * @param matrix square
+     */
     public static int firstNotFinite(DMatrixRMaj matrix) {
         int size = matrix.numRows * matrix.numCols;
         for (int i = 0; i < size; i++) {
@@ -34,7 +42,11 @@ public final class SymmetricMatrix {
         return -1;
     }
 
-    /** The row-major index of the first lower entry that differs from its mirror, or -1. */
+    /**
+     * {@return the row-major index of the first lower entry that differs from its mirror, or -1}
+     *
+     * @param matrix square
+     */
     public static int firstAsymmetric(DMatrixRMaj matrix) {
         double[] data = matrix.data;
         int n = matrix.numRows;

@@ -4,6 +4,7 @@ import dev.estimation.core.function.CentralDifferences;
 import dev.estimation.core.function.Jacobian;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.internal.Checks;
+import dev.estimation.core.internal.Products;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
 
@@ -44,7 +45,7 @@ final class LinearWorkspace extends BaseWorkspace {
             return MatchingStatus.JACOBIAN_NOT_FINITE;
         }
         fillCross();
-        fillCovariance(covariance);
+        Products.fillInnerProduct(cross.data, active.count(), outputSpace.dimension(), covariance);
         outputSpace.displace(centre, zero, outputMean); // brings angles into their range
         return MatchingStatus.MATCHED;
     }
@@ -63,22 +64,6 @@ final class LinearWorkspace extends BaseWorkspace {
                     sum += derivatives[r * n + row] * factor[row * k + c];
                 }
                 cross.data[c * m + r] = sum;
-            }
-        }
-    }
-
-    /** P_zz = W'W. */
-    private void fillCovariance(double[] covariance) {
-        int k = active.count();
-        int m = outputSpace.dimension();
-        double[] w = cross.data;
-        for (int r = 0; r < m; r++) {
-            for (int c = 0; c <= r; c++) {
-                double sum = 0;
-                for (int a = 0; a < k; a++) {
-                    sum += w[a * m + r] * w[a * m + c];
-                }
-                covariance[r * m + c] = sum;
             }
         }
     }

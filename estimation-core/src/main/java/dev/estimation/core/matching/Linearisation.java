@@ -24,7 +24,7 @@ public final class Linearisation implements MomentMatching {
         this.inputScales = inputScales;
     }
 
-    /** First-order linearisation of functions that have a Jacobian. */
+    /** {@return first-order linearisation of functions that have a Jacobian} */
     public static Linearisation firstOrder() {
         return new Linearisation(null);
     }
@@ -34,6 +34,7 @@ public final class Linearisation implements MomentMatching {
      *
      * @param inputScales for each input, a length over which the functions bend noticeably, in its
      *     unit; finite and above 0; copied. See {@code CentralDifferences}
+     * @return the matching
      */
     public Linearisation withInputScales(double... inputScales) {
         return new Linearisation(inputScales.clone());

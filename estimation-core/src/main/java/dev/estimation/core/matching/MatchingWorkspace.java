@@ -26,24 +26,25 @@ public interface MatchingWorkspace {
     MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise);
 
     /**
-     * Mean and covariance of the output, noise included; read only, valid until the next call. The
-     * covariance is symmetric and finite; whether it is positive semi-definite is for the caller to
-     * ask, since negative weights can undo that.
+     * The result. The covariance is symmetric and finite; whether it is positive semi-definite is for
+     * the caller to ask, since negative weights can undo that.
+     *
+     * @return mean and covariance of the output, noise included; read only, valid until the next call
      */
     Moments output();
 
-    /** B, n x k; read only, valid until the input or the workspace is used again. */
+    /** {@return B, n x k; read only, valid until the input or the workspace is used again} */
     DMatrixRMaj inputFactor();
 
-    /** W, k x m, with P_uz = B W; read only, valid until the next call. */
+    /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */
     DMatrixRMaj unitCrossCovariance();
 
-    /** The function evaluations of the last call, those for numerical derivatives included. */
+    /** {@return the function evaluations of the last call, those for numerical derivatives included} */
     int evaluations();
 
-    /** The Jacobians formed in the last call, analytic or by differences. */
+    /** {@return the Jacobians formed in the last call, analytic or by differences} */
     int jacobians();
 
-    /** What was wrong in the last call, in words; empty if nothing was. */
+    /** {@return what was wrong in the last call, in words; empty if nothing was} */
     String failure();
 }

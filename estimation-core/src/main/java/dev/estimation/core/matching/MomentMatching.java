@@ -16,6 +16,7 @@ public interface MomentMatching {
      * @param input where u lives
      * @param output where g(u) lives
      * @param function g
+     * @return the workspace
      * @throws IllegalArgumentException if this matching cannot serve the function: no Jacobian, too
      *     many points, active inputs that the space does not have
      */
@@ -24,6 +25,8 @@ public interface MomentMatching {
     /**
      * This matching over the whole input, also where the function reads a part of it. For comparison
      * with results that were made so; it costs more and is as a rule not more accurate.
+     *
+     * @return the matching over the whole input
      */
     default MomentMatching overWholeInput() {
         return (input, output, function) -> workspace(input, output, new WholeInput(function));

@@ -14,9 +14,9 @@ import dev.estimation.core.space.Space;
  * of the output space: angles are averaged around the centre's image, so deviations must stay within
  * half a turn of it.
  *
- * <p>Zero variances give points that do not move along them. P_zz is positive semi-definite if the
- * weights of all points but the centre are positive and wc_0 - wm_0 - 1 is not below -1 times the sum
- * that they have; see the rules. The rounding of g itself is multiplied by {@code
+ * <p>Zero variances give points that do not move along them. P_zz is positive semi-definite for every
+ * function if all weights w_i are positive and wc_0 is not negative, and for the scaled unscented rule
+ * whenever beta is at least alpha^2. The rounding of g itself is multiplied by {@code
  * UnitPoints.weightAmplification()}.
  *
  * <p>Cost: the evaluations of the rule and one at the centre; about points * m^2 / 2 operations for
@@ -30,7 +30,11 @@ public final class PointMatching implements MomentMatching {
         this.rule = rule;
     }
 
-    /** Matching by the points of a rule. */
+    /**
+     * {@return matching by the points of a rule}
+     *
+     * @param rule the points
+     */
     public static PointMatching of(PointRule rule) {
         return new PointMatching(rule);
     }

@@ -1,6 +1,7 @@
 package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.internal.Products;
 import dev.estimation.core.points.PointRule;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
@@ -40,7 +41,7 @@ final class PointWorkspace extends BaseWorkspace {
             addCross(i);
         }
         double centreFactor = points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
-        addSquare(centreFactor, shift, covariance);
+        Products.addSquare(centreFactor, shift, covariance);
         outputSpace.displace(centre, shift, outputMean);
         return MatchingStatus.MATCHED;
     }
@@ -64,17 +65,7 @@ final class PointWorkspace extends BaseWorkspace {
         for (int r = 0; r < deviation.length; r++) {
             shift[r] += weight * deviation[r];
         }
-        addSquare(weight, deviation, covariance);
-    }
-
-    private static void addSquare(double weight, double[] d, double[] covariance) {
-        int m = d.length;
-        for (int r = 0; r < m; r++) {
-            double weighted = weight * d[r];
-            for (int c = 0; c <= r; c++) {
-                covariance[r * m + c] += weighted * d[c];
-            }
-        }
+        Products.addSquare(weight, deviation, covariance);
     }
 
     private void addCross(int i) {

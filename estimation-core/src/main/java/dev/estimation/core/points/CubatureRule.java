@@ -14,7 +14,7 @@ package dev.estimation.core.points;
 public final class CubatureRule implements PointRule {
     private CubatureRule() {}
 
-    /** The rule of degree 3. */
+    /** {@return the rule of degree 3} */
     public static CubatureRule degreeThree() {
         return new CubatureRule();
     }

@@ -25,6 +25,7 @@ public final class GaussHermiteRule implements PointRule {
      * The product rule.
      *
      * @param nodesPerAxis p, from 2 to 100; one node alone would see no spread at all
+     * @return the rule
      */
     public static GaussHermiteRule product(int nodesPerAxis) {
         if (nodesPerAxis < 2 || nodesPerAxis > 100) {

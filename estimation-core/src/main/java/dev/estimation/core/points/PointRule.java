@@ -12,6 +12,7 @@ public interface PointRule {
      * The points in the given number of dimensions.
      *
      * @param dimension 1 or more
+     * @return the points
      * @throws IllegalArgumentException if the rule does not exist there, or has too many points
      */
     UnitPoints points(int dimension);

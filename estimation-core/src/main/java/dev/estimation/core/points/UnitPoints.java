@@ -42,6 +42,7 @@ public final class UnitPoints {
      * @param centreCovarianceWeight weight of the centre in covariances
      * @param points the points other than the centre, copied
      * @param weights one for each of them, for means and covariances alike, copied
+     * @return the points
      */
     public static UnitPoints of(
             int dimension,
@@ -90,47 +91,68 @@ public final class UnitPoints {
         }
     }
 
-    /** The number of coordinates of a point. */
+    /** {@return the number of coordinates of a point} */
     public int dimension() {
         return dimension;
     }
 
-    /** The number of points other than the centre. */
+    /** {@return the number of points other than the centre} */
     public int size() {
         return weights.length;
     }
 
-    /** The weight of the centre in means. */
+    /** {@return the weight of the centre in means} */
     public double centreMeanWeight() {
         return centreMeanWeight;
     }
 
-    /** The weight of the centre in covariances. */
+    /** {@return the weight of the centre in covariances} */
     public double centreCovarianceWeight() {
         return centreCovarianceWeight;
     }
 
-    /** The weight of a point, in means and covariances. */
+    /**
+     * {@return the weight of a point, in means and covariances}
+     *
+     * @param point from 0 to {@link #size()} - 1
+     */
     public double weight(int point) {
         return weights[point];
     }
 
-    /** Where the entries of a point begin; they end where those of the next begin. */
+    /**
+     * {@return where the entries of a point begin; they end where those of the next begin}
+     *
+     * @param point from 0 to {@link #size()} - 1
+     */
     public int start(int point) {
         return starts[point];
     }
 
-    /** The axis of an entry. */
+    /**
+     * {@return the axis of an entry}
+     *
+     * @param entry from {@code start(point)} to {@code start(point + 1)} - 1
+     */
     public int axis(int entry) {
         return axes[entry];
     }
 
-    /** The coordinate of an entry, not zero. */
+    /**
+     * {@return the coordinate of an entry, not zero}
+     *
+     * @param entry from {@code start(point)} to {@code start(point + 1)} - 1
+     */
     public double coordinate(int entry) {
         return coordinates[entry];
     }
 
-    /** The coordinate of a point along an axis. */
+    /**
+     * {@return the coordinate of a point along an axis}
+     *
+     * @param point from 0 to {@link #size()} - 1
+     * @param axis from 0
+     */
     public double coordinate(int point, int axis) {
         for (int entry = starts[point]; entry < starts[point + 1]; entry++) {
             if (axes[entry] == axis) {
@@ -143,6 +165,8 @@ public final class UnitPoints {
     /**
      * The sum of the absolute mean weights, centre included: by how much the rounding of the function
      * itself can be multiplied in the mean. 1 if no weight is negative.
+     *
+     * @return the sum
      */
     public double weightAmplification() {
         double sum = Math.abs(centreMeanWeight);

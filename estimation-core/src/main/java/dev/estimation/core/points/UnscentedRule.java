@@ -40,13 +40,20 @@ public final class UnscentedRule implements PointRule {
      * @param alpha spread, above 0
      * @param beta added to the covariance weight of the centre, any value
      * @param kappa n + kappa must be above 0 wherever the rule is used
+     * @return the rule
      */
     public static UnscentedRule scaled(double alpha, double beta, double kappa) {
         Checks.finite("kappa", kappa);
         return new UnscentedRule(alpha, beta, dimension -> kappa);
     }
 
-    /** A rule whose kappa depends on the dimension, e.g. {@code n -> 3 - n}. */
+    /**
+     * {@return a rule whose kappa depends on the dimension, e.g. {@code n -> 3 - n}}
+     *
+     * @param alpha spread, above 0
+     * @param beta added to the covariance weight of the centre
+     * @param kappa of the dimension n; n + kappa must be above 0 wherever the rule is used
+     */
     public static UnscentedRule scaled(double alpha, double beta, IntToDoubleFunction kappa) {
         return new UnscentedRule(alpha, beta, kappa);
     }

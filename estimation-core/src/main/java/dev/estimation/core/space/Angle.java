@@ -12,6 +12,7 @@ public final class Angle {
      * 2 pi times the number of turns, about 1e-16 rad a turn.
      *
      * @param angle rad
+     * @return rad, in [-pi, pi)
      */
     public static double wrap(double angle) {
         if (angle >= -Math.PI && angle < Math.PI) {

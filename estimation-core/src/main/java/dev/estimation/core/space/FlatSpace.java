@@ -33,14 +33,22 @@ public final class FlatSpace implements Space {
         return count;
     }
 
-    /** The components of this space followed by those of another. */
+    /**
+     * {@return the components of this space followed by those of another}
+     *
+     * @param next the components that follow
+     */
     public FlatSpace and(FlatSpace next) {
         boolean[] joined = Arrays.copyOf(angle, angle.length + next.angle.length);
         System.arraycopy(next.angle, 0, joined, angle.length, next.angle.length);
         return new FlatSpace(joined);
     }
 
-    /** Whether component {@code index} is an angle. */
+    /**
+     * {@return whether component {@code index} is an angle}
+     *
+     * @param index from 0
+     */
     public boolean isAngle(int index) {
         return angle[index];
     }

@@ -13,10 +13,10 @@ package dev.estimation.core.space;
  * <p>Implementations are <i>immutable</i>, keep no array and allocate nothing in their operations.
  */
 public interface Space {
-    /** How many numbers a point has. */
+    /** {@return how many numbers a point has} */
     int storage();
 
-    /** How many numbers a difference of two points has. */
+    /** {@return how many numbers a difference of two points has} */
     int dimension();
 
     /**
@@ -38,12 +38,20 @@ public interface Space {
      */
     void displace(double[] point, double[] tangent, double[] result);
 
-    /** The space of {@code count} real numbers. */
+    /**
+     * {@return the space of {@code count} real numbers}
+     *
+     * @param count 1 or more
+     */
     static FlatSpace reals(int count) {
         return FlatSpace.reals(count);
     }
 
-    /** The space of {@code count} angles (rad), each kept in [-pi, pi). */
+    /**
+     * {@return the space of {@code count} angles (rad), each kept in [-pi, pi)}
+     *
+     * @param count 1 or more
+     */
     static FlatSpace angles(int count) {
         return FlatSpace.angles(count);
     }

@@ -26,6 +26,7 @@ public final class ChiSquareBounds {
      *
      * @param probability of staying inside, in (0, 1); each side is left with half the rest
      * @param degreesOfFreedom 1 or more
+     * @return the bounds
      */
     public static ChiSquareBounds twoSided(double probability, int degreesOfFreedom) {
         return ofAverage(probability, degreesOfFreedom, 1);
@@ -37,6 +38,7 @@ public final class ChiSquareBounds {
      * @param probability of staying inside, in (0, 1)
      * @param degreesOfFreedom of each, 1 or more
      * @param count how many are averaged, 1 or more
+     * @return the bounds
      */
     public static ChiSquareBounds ofAverage(double probability, int degreesOfFreedom, int count) {
         if (degreesOfFreedom < 1 || count < 1) {
@@ -57,6 +59,7 @@ public final class ChiSquareBounds {
      *
      * @param probability in (0, 1)
      * @param degreesOfFreedom 1 or more
+     * @return the limit
      */
     public static double upperLimit(double probability, int degreesOfFreedom) {
         requireProbability(probability);
@@ -73,17 +76,21 @@ public final class ChiSquareBounds {
         return new ChiSquaredDistribution(null, degrees, 1e-14).inverseCumulativeProbability(probability);
     }
 
-    /** The lower bound. */
+    /** {@return the lower bound} */
     public double lower() {
         return lower;
     }
 
-    /** The upper bound. */
+    /** {@return the upper bound} */
     public double upper() {
         return upper;
     }
 
-    /** Whether a value lies inside, bounds included; NaN does not. */
+    /**
+     * {@return whether a value lies inside, bounds included; NaN does not}
+     *
+     * @param value a normalised squared error
+     */
     public boolean contains(double value) {
         return value >= lower && value <= upper;
     }

@@ -11,13 +11,21 @@ public final class ConsistencyTally {
     private long inside;
     private double sum;
 
-    /** A tally of values with the given degrees of freedom. */
+    /**
+     * A tally of values with the given degrees of freedom.
+     *
+     * @param degreesOfFreedom 1 or more
+     */
     public ConsistencyTally(int degreesOfFreedom) {
         this.degreesOfFreedom = degreesOfFreedom;
         this.bounds = ChiSquareBounds.twoSided(0.95, degreesOfFreedom);
     }
 
-    /** Counts one value; NaN lies outside and makes the mean NaN. */
+    /**
+     * Counts one value; NaN lies outside and makes the mean NaN.
+     *
+     * @param squared a normalised squared error or innovation
+     */
     public void add(double squared) {
         count++;
         sum += squared;
@@ -26,22 +34,22 @@ public final class ConsistencyTally {
         }
     }
 
-    /** The degrees of freedom of each value. */
+    /** {@return the degrees of freedom of each value} */
     public int degreesOfFreedom() {
         return degreesOfFreedom;
     }
 
-    /** How many values were counted. */
+    /** {@return how many values were counted} */
     public long count() {
         return count;
     }
 
-    /** Their mean; about the degrees of freedom if covariances are honest. NaN if there are none. */
+    /** {@return their mean; about the degrees of freedom if covariances are honest. NaN if there are none} */
     public double mean() {
         return sum / count;
     }
 
-    /** The share inside the two-sided 95 % bounds. NaN if there are none. */
+    /** {@return the share inside the two-sided 95 % bounds. NaN if there are none} */
     public double insideFraction() {
         return (double) inside / count;
     }

@@ -28,6 +28,7 @@ public final class NormalisedError {
      *
      * @param space where the state lives
      * @param components distinct indices of the components whose truth is known; copied
+     * @return the measure
      */
     public static NormalisedError of(FlatSpace space, int... components) {
         Checks.distinctIndices("components", components, space.dimension());
@@ -37,7 +38,7 @@ public final class NormalisedError {
         return new NormalisedError(space, components.clone());
     }
 
-    /** The number of components. */
+    /** {@return the number of components} */
     public int degreesOfFreedom() {
         return components.length;
     }
@@ -47,6 +48,7 @@ public final class NormalisedError {
      *
      * @param estimate of the whole state
      * @param truth of the chosen components, in their order
+     * @return e' P^-1 e
      * @throws IllegalArgumentException if shapes differ or the covariance of the components is not
      *     positive definite, where no normalised error exists
      */

@@ -26,27 +26,40 @@ public final class Estimate {
         space.displace(moments.mean(), new double[space.dimension()], moments.changeMean());
     }
 
-    /** The time (s) for which this estimate holds. */
+    /** {@return the time (s) for which this estimate holds} */
     public double time() {
         return time;
     }
 
-    /** The mean of one component. */
+    /**
+     * {@return the mean of one component}
+     *
+     * @param index from 0
+     */
     public double mean(int index) {
         return moments.mean()[index];
     }
 
-    /** The covariance of two components. */
+    /**
+     * {@return the covariance of two components}
+     *
+     * @param row from 0
+     * @param column from 0
+     */
     public double covariance(int row, int column) {
         return moments.covariance().get(row, column);
     }
 
-    /** The standard deviation of one component. */
+    /**
+     * {@return the standard deviation of one component}
+     *
+     * @param index from 0
+     */
     public double standardDeviation(int index) {
         return Math.sqrt(covariance(index, index));
     }
 
-    /** Mean and covariance as an immutable value. */
+    /** {@return mean and covariance as an immutable value} */
     public Gaussian toGaussian() {
         return moments.toGaussian();
     }

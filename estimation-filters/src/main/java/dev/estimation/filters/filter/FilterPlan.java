@@ -36,6 +36,9 @@ public final class FilterPlan {
     /**
      * A filter on any matching, without a gate.
      *
+     * @param motion how the state moves
+     * @param matching how moments are carried through both models
+     * @return the plan
      * @throws IllegalArgumentException if the matching cannot serve the model
      */
     public static FilterPlan of(MotionModel motion, MomentMatching matching) {
@@ -44,22 +47,42 @@ public final class FilterPlan {
         return plan;
     }
 
-    /** The extended Kalman filter: first-order linearisation; models must know their Jacobians. */
+    /**
+     * {@return the extended Kalman filter: first-order linearisation; models must know their Jacobians}
+     *
+     * @param motion how the state moves
+     */
     public static FilterPlan extended(MotionModel motion) {
         return of(motion, Linearisation.firstOrder());
     }
 
-    /** The unscented Kalman filter with the scaled rule; see {@link UnscentedRule#scaled}. */
+    /**
+     * {@return the unscented Kalman filter with the scaled rule; see {@link UnscentedRule#scaled}}
+     *
+     * @param motion how the state moves
+     * @param alpha spread, above 0
+     * @param beta added to the covariance weight of the centre
+     * @param kappa above -n
+     */
     public static FilterPlan unscented(MotionModel motion, double alpha, double beta, double kappa) {
         return of(motion, PointMatching.of(UnscentedRule.scaled(alpha, beta, kappa)));
     }
 
-    /** The cubature Kalman filter of degree 3. */
+    /**
+     * {@return the cubature Kalman filter of degree 3}
+     *
+     * @param motion how the state moves
+     */
     public static FilterPlan cubature(MotionModel motion) {
         return of(motion, PointMatching.of(CubatureRule.degreeThree()));
     }
 
-    /** The Gauss-Hermite filter with a number of nodes on each axis. */
+    /**
+     * {@return the Gauss-Hermite filter with a number of nodes on each axis}
+     *
+     * @param motion how the state moves
+     * @param nodesPerAxis p: a step costs p^k evaluations for k active inputs
+     */
     public static FilterPlan gaussHermite(MotionModel motion, int nodesPerAxis) {
         return of(motion, PointMatching.of(GaussHermiteRule.product(nodesPerAxis)));
     }
@@ -69,13 +92,14 @@ public final class FilterPlan {
      * chi-square quantile of the given probability is rejected.
      *
      * @param probability of passing for an honest filter, in (0, 1), e.g. 0.999
+     * @return the plan with a gate
      */
     public FilterPlan withGate(double probability) {
         ChiSquareBounds.upperLimit(probability, 1);
         return new FilterPlan(motion, matching, probability);
     }
 
-    /** Scratch for one thread. */
+    /** {@return scratch for one thread} */
     public FilterWorkspace workspace() {
         return new FilterWorkspace(this);
     }
@@ -85,6 +109,7 @@ public final class FilterPlan {
      *
      * @param time of the estimate (s), finite
      * @param initial mean and covariance; angles are brought into [-pi, pi)
+     * @return the estimate of the track
      */
     public Estimate start(double time, Gaussian initial) {
         return new Estimate(motion.stateSpace(), time, initial);

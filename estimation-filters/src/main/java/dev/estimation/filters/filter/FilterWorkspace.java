@@ -40,6 +40,8 @@ public final class FilterWorkspace {
     /**
      * A port for a sensor, with scratch of its own; belongs to the same thread as this workspace.
      *
+     * @param sensor the model of the sensor
+     * @return the port
      * @throws IllegalArgumentException if the plan's matching cannot serve the model
      */
     public SensorPort port(SensorModel sensor) {
@@ -52,6 +54,7 @@ public final class FilterWorkspace {
      * @param estimate updated if the status is {@code APPLIED}
      * @param time to predict to (s); the estimate's own time is a prediction over no time, which
      *     changes nothing
+     * @return how it ended
      */
     public StepStatus predict(Estimate estimate, double time) {
         return predict(estimate, time, nothing);
@@ -63,6 +66,7 @@ public final class FilterWorkspace {
      * @param estimate updated if the status is {@code APPLIED}
      * @param time to predict to (s)
      * @param control as many numbers as the motion model wants, read
+     * @return how it ended
      * @throws IllegalArgumentException if the control or the estimate has the wrong size
      */
     public StepStatus predict(Estimate estimate, double time, double[] control) {
@@ -110,17 +114,17 @@ public final class FilterWorkspace {
         return StepStatus.APPLIED;
     }
 
-    /** The function evaluations of the last prediction. */
+    /** {@return the function evaluations of the last prediction} */
     public int evaluations() {
         return evaluations;
     }
 
-    /** The Jacobians formed in the last prediction. */
+    /** {@return the Jacobians formed in the last prediction} */
     public int jacobians() {
         return jacobians;
     }
 
-    /** Why the last prediction was not applied, in words; empty if it was. */
+    /** {@return why the last prediction was not applied, in words; empty if it was} */
     public String failure() {
         if (status == StepStatus.APPLIED) {
             return "";

@@ -3,6 +3,7 @@ package dev.estimation.filters.filter;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.LowerFactor;
+import dev.estimation.core.internal.Products;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
@@ -67,6 +68,7 @@ public final class SensorPort {
      *
      * @param estimate updated if the status is {@code APPLIED}
      * @param measurement read
+     * @return how it ended
      */
     public StepStatus update(Estimate estimate, double[] measurement) {
         return update(estimate, measurement, nothing);
@@ -78,6 +80,7 @@ public final class SensorPort {
      * @param estimate updated if the status is {@code APPLIED}
      * @param measurement in the sensor's measurement space, read
      * @param given as many numbers as the sensor model wants, read
+     * @return how it ended
      * @throws IllegalArgumentException if an array or the estimate has the wrong size
      */
     public StepStatus update(Estimate estimate, double[] measurement, double[] given) {
@@ -139,22 +142,15 @@ public final class SensorPort {
         int d = correction.length;
         int m = innovation.length;
         double[] g = gainFactor.data;
-        double[] p = prior.covariance().data;
-        double[] result = posterior.changeCovariance().data;
         for (int r = 0; r < d; r++) {
             double shift = 0;
             for (int j = 0; j < m; j++) {
                 shift += g[r * m + j] * whitened[j];
             }
             correction[r] = shift;
-            for (int c = 0; c <= r; c++) {
-                double sum = p[r * d + c];
-                for (int j = 0; j < m; j++) {
-                    sum -= g[r * m + j] * g[c * m + j];
-                }
-                result[r * d + c] = sum;
-            }
         }
+        double[] lower = posterior.changeCovariance().data;
+        Products.fillDifference(prior.covariance().data, g, d, m, lower);
         SymmetricMatrix.mirrorLower(posterior.covariance());
         stateSpace.displace(prior.mean(), correction, posterior.changeMean());
         if (!Checks.allFinite(posterior.mean())
@@ -189,12 +185,12 @@ public final class SensorPort {
         }
     }
 
-    /** The innovation of the last update that was applied or gated; read only. */
+    /** {@return the innovation of the last update that was applied or gated; read only} */
     public double[] innovation() {
         return innovation;
     }
 
-    /** The covariance of the innovation of the last update that was applied or gated; read only. */
+    /** {@return the covariance of the innovation of the last update that was applied or gated; read only} */
     public DMatrixRMaj innovationCovariance() {
         return matching.output().covariance();
     }
@@ -202,6 +198,8 @@ public final class SensorPort {
     /**
      * The normalised innovation squared (NIS) nu' S^-1 nu of the last update, from the prediction; NaN
      * if the update did not come that far.
+     *
+     * @return the NIS
      */
     public double normalisedInnovationSquared() {
         return squared;
@@ -210,22 +208,24 @@ public final class SensorPort {
     /**
      * The logarithm of the density of the last measurement given all before it, -(NIS + ln det S + m ln 2
      * pi) / 2; NaN if the update did not come that far.
+     *
+     * @return the log-likelihood
      */
     public double logLikelihood() {
         return logLikelihood;
     }
 
-    /** The function evaluations of the last update. */
+    /** {@return the function evaluations of the last update} */
     public int evaluations() {
         return evaluations;
     }
 
-    /** The Jacobians formed in the last update. */
+    /** {@return the Jacobians formed in the last update} */
     public int jacobians() {
         return jacobians;
     }
 
-    /** Why the last update was not applied, in words; empty if it was. */
+    /** {@return why the last update was not applied, in words; empty if it was} */
     public String failure() {
         if (status == StepStatus.APPLIED) {
             return "";

@@ -10,10 +10,10 @@ import dev.estimation.core.space.Space;
  * state that changes. A model that also has a Jacobian is a {@link DifferentiableMotion}.
  */
 public interface MotionModel {
-    /** Where the state lives. */
+    /** {@return where the state lives} */
     Space stateSpace();
 
-    /** The number of controls that {@link #move} reads; 0 if there are none. */
+    /** {@return the number of controls that {@link #move} reads; 0 if there are none} */
     default int controlDimension() {
         return 0;
     }
@@ -41,7 +41,7 @@ public interface MotionModel {
      */
     void processNoise(double[] state, double[] control, double time, double dt, double[] covariance);
 
-    /** The components of the state that {@link #move} reads; all unless said otherwise. */
+    /** {@return the components of the state that {@link #move} reads; all unless said otherwise} */
     default Structure structure() {
         return Structure.UNKNOWN;
     }

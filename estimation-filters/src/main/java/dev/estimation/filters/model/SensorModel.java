@@ -11,10 +11,10 @@ import dev.estimation.core.space.Space;
  * not keep state that changes. A model that also has a Jacobian is a {@link DifferentiableSensor}.
  */
 public interface SensorModel {
-    /** Where measurements live: which components are angles. */
+    /** {@return where measurements live: which components are angles} */
     Space measurementSpace();
 
-    /** The length of {@code given}; 0 if nothing is. */
+    /** {@return the length of {@code given}; 0 if nothing is} */
     default int givenDimension() {
         return 0;
     }
@@ -38,7 +38,7 @@ public interface SensorModel {
      */
     void measurementNoise(double[] state, double[] given, double[] covariance);
 
-    /** The components of the state that {@link #measure} reads; all unless said otherwise. */
+    /** {@return the components of the state that {@link #measure} reads; all unless said otherwise} */
     default Structure structure() {
         return Structure.UNKNOWN;
     }

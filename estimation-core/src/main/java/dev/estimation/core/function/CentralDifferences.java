@@ -18,73 +18,74 @@ import java.util.Arrays;
  * <i>Confined to one thread</i>; allocates only when built.
  */
 public final class CentralDifferences implements Jacobian {
-    private static final double STEP = Math.cbrt(0x1p-52);
+  private static final double STEP = Math.cbrt(0x1p-52);
 
-    private final Space input;
-    private final Space output;
-    private final VectorFunction function;
-    private final int[] active;
-    private final double[] steps;
-    private final double[] tangent;
-    private final double[] moved;
-    private final double[] ahead;
-    private final double[] behind;
-    private final double[] difference;
+  private final Space input;
+  private final Space output;
+  private final VectorFunction function;
+  private final int[] active;
+  private final double[] steps;
+  private final double[] tangent;
+  private final double[] moved;
+  private final double[] ahead;
+  private final double[] behind;
+  private final double[] difference;
 
-    /**
-     * Differences of a function.
-     *
-     * @param input where u lives
-     * @param output where g(u) lives
-     * @param function the function
-     * @param scales one for each dimension of the input, finite and above 0, in its unit; copied
-     */
-    public CentralDifferences(Space input, Space output, VectorFunction function, double[] scales) {
-        Checks.length("input scales", scales, input.dimension());
-        for (int j = 0; j < scales.length; j++) {
-            if (!(scales[j] > 0 && scales[j] <= Double.MAX_VALUE)) {
-                throw new IllegalArgumentException(
-                        "input scales[" + j + "] must be finite and > 0, got " + scales[j]);
-            }
-        }
-        this.input = input;
-        this.output = output;
-        this.function = function;
-        this.active = function.structure().activeInputs(input.dimension());
-        this.steps = Arrays.stream(scales).map(scale -> STEP * scale).toArray();
-        this.tangent = new double[input.dimension()];
-        this.moved = new double[input.storage()];
-        this.ahead = new double[output.storage()];
-        this.behind = new double[output.storage()];
-        this.difference = new double[output.dimension()];
+  /**
+   * Differences of a function.
+   *
+   * @param input where u lives
+   * @param output where g(u) lives
+   * @param function the function
+   * @param scales one for each dimension of the input, finite and above 0, in its unit; copied
+   */
+  public CentralDifferences(Space input, Space output, VectorFunction function, double[] scales) {
+    Checks.length("input scales", scales, input.dimension());
+    for (int j = 0; j < scales.length; j++) {
+      if (!(scales[j] > 0 && scales[j] <= Double.MAX_VALUE)) {
+        throw new IllegalArgumentException(
+            "input scales[" + j + "] must be finite and > 0, got " + scales[j]);
+      }
     }
+    this.input = input;
+    this.output = output;
+    this.function = function;
+    this.active = function.structure().activeInputs(input.dimension());
+    this.steps = Arrays.stream(scales).map(scale -> STEP * scale).toArray();
+    this.tangent = new double[input.dimension()];
+    this.moved = new double[input.storage()];
+    this.ahead = new double[output.storage()];
+    this.behind = new double[output.storage()];
+    this.difference = new double[output.dimension()];
+  }
 
-    @Override
-    public void evaluate(double[] point, double[] given, double[] jacobian) {
-        int columns = input.dimension();
-        Arrays.fill(jacobian, 0);
-        for (int j : active) {
-            double width = image(point, given, j, steps[j], ahead) - image(point, given, j, -steps[j], behind);
-            output.difference(ahead, behind, difference);
-            for (int i = 0; i < difference.length; i++) {
-                jacobian[i * columns + j] = difference[i] / width;
-            }
-        }
+  @Override
+  public void evaluate(double[] point, double[] given, double[] jacobian) {
+    int columns = input.dimension();
+    Arrays.fill(jacobian, 0);
+    for (int j : active) {
+      double width =
+          image(point, given, j, steps[j], ahead) - image(point, given, j, -steps[j], behind);
+      output.difference(ahead, behind, difference);
+      for (int i = 0; i < difference.length; i++) {
+        jacobian[i * columns + j] = difference[i] / width;
+      }
     }
+  }
 
-    /** Evaluates g away from the point and returns the displacement, as rounded where that can be known. */
-    private double image(double[] point, double[] given, int j, double step, double[] result) {
-        Arrays.fill(tangent, 0);
-        tangent[j] = step;
-        input.displace(point, tangent, moved);
-        Arrays.fill(result, Double.NaN);
-        function.evaluate(moved, given, result);
-        input.difference(moved, point, tangent);
-        return tangent[j];
-    }
+  /** Evaluates g away from the point and returns the displacement, as rounded where that can be known. */
+  private double image(double[] point, double[] given, int j, double step, double[] result) {
+    Arrays.fill(tangent, 0);
+    tangent[j] = step;
+    input.displace(point, tangent, moved);
+    Arrays.fill(result, Double.NaN);
+    function.evaluate(moved, given, result);
+    input.difference(moved, point, tangent);
+    return tangent[j];
+  }
 
-    /** {@return the function evaluations that one Jacobian costs} */
-    public int evaluations() {
-        return 2 * active.length;
-    }
+  /** {@return the function evaluations that one Jacobian costs} */
+  public int evaluations() {
+    return 2 * active.length;
+  }
 }

@@ -17,60 +17,60 @@ import java.util.Optional;
  * <p><i>Immutable.</i> Start from {@link #UNKNOWN} and add what is known.
  */
 public final class Structure {
-    /** Nothing is known: every input may matter, and there is no Jacobian. */
-    public static final Structure UNKNOWN = new Structure(null, null);
+  /** Nothing is known: every input may matter, and there is no Jacobian. */
+  public static final Structure UNKNOWN = new Structure(null, null);
 
-    private final int[] activeInputs;
-    private final Jacobian jacobian;
+  private final int[] activeInputs;
+  private final Jacobian jacobian;
 
-    private Structure(int[] activeInputs, Jacobian jacobian) {
-        this.activeInputs = activeInputs;
-        this.jacobian = jacobian;
+  private Structure(int[] activeInputs, Jacobian jacobian) {
+    this.activeInputs = activeInputs;
+    this.jacobian = jacobian;
+  }
+
+  /**
+   * This structure with the inputs that the function reads.
+   *
+   * @param indices distinct, in the order in which points are to be drawn; copied
+   * @return a structure that says so
+   */
+  public Structure withActiveInputs(int... indices) {
+    return new Structure(indices.clone(), jacobian);
+  }
+
+  /** {@return this structure with every input active} */
+  public Structure withAllInputsActive() {
+    return new Structure(null, jacobian);
+  }
+
+  /**
+   * {@return this structure with a Jacobian}
+   *
+   * @param derivatives of the function, over all inputs
+   */
+  public Structure withJacobian(Jacobian derivatives) {
+    return new Structure(activeInputs, derivatives);
+  }
+
+  /**
+   * The inputs that the function reads: all, unless it was said otherwise.
+   *
+   * @param dimension the dimension of the input space
+   * @return their indices, a copy
+   * @throws IllegalArgumentException if an index is not below the dimension, or comes twice
+   */
+  public int[] activeInputs(int dimension) {
+    if (activeInputs == null) {
+      int[] all = new int[dimension];
+      Arrays.setAll(all, i -> i);
+      return all;
     }
+    Checks.distinctIndices("active inputs", activeInputs, dimension);
+    return activeInputs.clone();
+  }
 
-    /**
-     * This structure with the inputs that the function reads.
-     *
-     * @param indices distinct, in the order in which points are to be drawn; copied
-     * @return a structure that says so
-     */
-    public Structure withActiveInputs(int... indices) {
-        return new Structure(indices.clone(), jacobian);
-    }
-
-    /** {@return this structure with every input active} */
-    public Structure withAllInputsActive() {
-        return new Structure(null, jacobian);
-    }
-
-    /**
-     * {@return this structure with a Jacobian}
-     *
-     * @param derivatives of the function, over all inputs
-     */
-    public Structure withJacobian(Jacobian derivatives) {
-        return new Structure(activeInputs, derivatives);
-    }
-
-    /**
-     * The inputs that the function reads: all, unless it was said otherwise.
-     *
-     * @param dimension the dimension of the input space
-     * @return their indices, a copy
-     * @throws IllegalArgumentException if an index is not below the dimension, or comes twice
-     */
-    public int[] activeInputs(int dimension) {
-        if (activeInputs == null) {
-            int[] all = new int[dimension];
-            Arrays.setAll(all, i -> i);
-            return all;
-        }
-        Checks.distinctIndices("active inputs", activeInputs, dimension);
-        return activeInputs.clone();
-    }
-
-    /** {@return the Jacobian, where one is known} */
-    public Optional<Jacobian> jacobian() {
-        return Optional.ofNullable(jacobian);
-    }
+  /** {@return the Jacobian, where one is known} */
+  public Optional<Jacobian> jacobian() {
+    return Optional.ofNullable(jacobian);
+  }
 }

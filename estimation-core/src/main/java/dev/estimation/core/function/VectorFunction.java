@@ -8,18 +8,18 @@ package dev.estimation.core.function;
  */
 @FunctionalInterface
 public interface VectorFunction {
-    /**
-     * Fills {@code output} with g(input, given).
-     *
-     * @param input read, never kept
-     * @param given read, never kept
-     * @param output filled, never kept; arrives filled with NaN, so that a component left out is
-     *     noticed
-     */
-    void evaluate(double[] input, double[] given, double[] output);
+  /**
+   * Fills {@code output} with g(input, given).
+   *
+   * @param input read, never kept
+   * @param given read, never kept
+   * @param output filled, never kept; arrives filled with NaN, so that a component left out is
+   *     noticed
+   */
+  void evaluate(double[] input, double[] given, double[] output);
 
-    /** {@return what is known of this function; must not change over its life} */
-    default Structure structure() {
-        return Structure.UNKNOWN;
-    }
+  /** {@return what is known of this function; must not change over its life} */
+  default Structure structure() {
+    return Structure.UNKNOWN;
+  }
 }

@@ -16,106 +16,105 @@ import org.ejml.data.DMatrixRMaj;
  * multiplications, d square roots.
  */
 public final class Moments {
-    private final Space space;
-    private final double[] mean;
-    private final DMatrixRMaj covariance;
-    private final LowerFactor factor;
-    private boolean factored;
+  private final Space space;
+  private final double[] mean;
+  private final DMatrixRMaj covariance;
+  private final LowerFactor factor;
+  private boolean factored;
 
-    /**
-     * Moments in the given space, all zero.
-     *
-     * @param space where the vector lives
-     */
-    public Moments(Space space) {
-        this.space = space;
-        this.mean = new double[space.storage()];
-        this.covariance = new DMatrixRMaj(space.dimension(), space.dimension());
-        this.factor = new LowerFactor(space.dimension());
-    }
+  /**
+   * Moments in the given space, all zero.
+   *
+   * @param space where the vector lives
+   */
+  public Moments(Space space) {
+    this.space = space;
+    this.mean = new double[space.storage()];
+    this.covariance = new DMatrixRMaj(space.dimension(), space.dimension());
+    this.factor = new LowerFactor(space.dimension());
+  }
 
-    /** {@return where the vector lives} */
-    public Space space() {
-        return space;
-    }
+  /** {@return where the vector lives} */
+  public Space space() {
+    return space;
+  }
 
-    /** {@return the mean: the array itself, to be read only, valid until the next change} */
-    public double[] mean() {
-        return mean;
-    }
+  /** {@return the mean: the array itself, to be read only, valid until the next change} */
+  public double[] mean() {
+    return mean;
+  }
 
-    /** {@return the covariance: the matrix itself, to be read only, valid until the next change} */
-    public DMatrixRMaj covariance() {
-        return covariance;
-    }
+  /** {@return the covariance: the matrix itself, to be read only, valid until the next change} */
+  public DMatrixRMaj covariance() {
+    return covariance;
+  }
 
-    /** {@return the mean, to be filled} */
-    public double[] changeMean() {
-        return mean;
-    }
+  /** {@return the mean, to be filled} */
+  public double[] changeMean() {
+    return mean;
+  }
 
-    /** {@return the covariance, to be filled entirely and symmetrically; forgets the factor} */
-    public DMatrixRMaj changeCovariance() {
-        factored = false;
-        return covariance;
-    }
+  /** {@return the covariance, to be filled entirely and symmetrically; forgets the factor} */
+  public DMatrixRMaj changeCovariance() {
+    factored = false;
+    return covariance;
+  }
 
-    /**
-     * Takes the values of a Gaussian of the same size.
-     *
-     * @param value copied from
-     */
-    public void set(Gaussian value) {
-        Checks.length("mean", mean, value.dimension());
-        value.copyInto(mean, changeCovariance());
-    }
+  /**
+   * Takes the values of a Gaussian of the same size.
+   *
+   * @param value copied from
+   */
+  public void set(Gaussian value) {
+    Checks.length("mean", mean, value.dimension());
+    value.copyInto(mean, changeCovariance());
+  }
 
-    /**
-     * Takes the values of moments of the same size.
-     *
-     * @param other copied from
-     */
-    public void set(Moments other) {
-        Checks.length("mean", other.mean, mean.length);
-        System.arraycopy(other.mean, 0, mean, 0, mean.length);
-        System.arraycopy(
-                other.covariance.data, 0, covariance.data, 0, covariance.getNumElements());
-        factored = other.factored;
-        if (factored) {
-            factor.set(other.factor);
-        }
+  /**
+   * Takes the values of moments of the same size.
+   *
+   * @param other copied from
+   */
+  public void set(Moments other) {
+    Checks.length("mean", other.mean, mean.length);
+    System.arraycopy(other.mean, 0, mean, 0, mean.length);
+    System.arraycopy(other.covariance.data, 0, covariance.data, 0, covariance.getNumElements());
+    factored = other.factored;
+    if (factored) {
+      factor.set(other.factor);
     }
+  }
 
-    /**
-     * Makes sure that the lower factor exists.
-     *
-     * @return false if the covariance is not finite or not positive semi-definite; {@link
-     *     #factorFailure()} then says where
-     */
-    public boolean factor() {
-        if (!factored) {
-            factored = factor.factorSemidefinite(covariance);
-        }
-        return factored;
+  /**
+   * Makes sure that the lower factor exists.
+   *
+   * @return false if the covariance is not finite or not positive semi-definite; {@link
+   *     #factorFailure()} then says where
+   */
+  public boolean factor() {
+    if (!factored) {
+      factored = factor.factorSemidefinite(covariance);
     }
+    return factored;
+  }
 
-    /** {@return the lower factor L, with covariance = L L'; read only, valid after {@link #factor()} was true} */
-    public DMatrixRMaj lowerFactor() {
-        return factor.columns();
-    }
+  /** {@return the lower factor L, with covariance = L L'; read only, valid after {@link #factor()} was true} */
+  public DMatrixRMaj lowerFactor() {
+    return factor.columns();
+  }
 
-    /** {@return which pivot made the last {@link #factor()} fail, and its value} */
-    public String factorFailure() {
-        return factor.failure();
-    }
+  /** {@return which pivot made the last {@link #factor()} fail, and its value} */
+  public String factorFailure() {
+    return factor.failure();
+  }
 
-    /**
-     * These moments as an immutable value.
-     *
-     * @return the value
-     * @throws IllegalArgumentException if they are not those of a Gaussian
-     */
-    public Gaussian toGaussian() {
-        return Gaussian.of(mean, covariance);
-    }
+  /**
+   * These moments as an immutable value.
+   *
+   * @return the value
+   * @throws IllegalArgumentException if they are not those of a Gaussian
+   */
+  public Gaussian toGaussian() {
+    return Gaussian.of(mean, covariance);
+  }
 }

@@ -4,79 +4,77 @@ import java.util.Arrays;
 
 /** Argument checks whose messages say what, wanted and got. */
 public final class Checks {
-    private Checks() {}
+  private Checks() {}
 
-    /**
-     * Fails unless {@code array} has {@code wanted} elements.
-     *
-     * @param what the name in the message
-     * @param array checked
-     * @param wanted its length
-     */
-    public static void length(String what, double[] array, int wanted) {
-        if (array == null) {
-            throw new NullPointerException(what + " must have length " + wanted + ", got null");
-        }
-        if (array.length != wanted) {
-            throw new IllegalArgumentException(
-                    what + " must have length " + wanted + ", got " + array.length);
-        }
+  /**
+   * Fails unless {@code array} has {@code wanted} elements.
+   *
+   * @param what the name in the message
+   * @param array checked
+   * @param wanted its length
+   */
+  public static void length(String what, double[] array, int wanted) {
+    if (array == null) {
+      throw new NullPointerException(what + " must have length " + wanted + ", got null");
     }
+    if (array.length != wanted) {
+      throw new IllegalArgumentException(
+          what + " must have length " + wanted + ", got " + array.length);
+    }
+  }
 
-    /**
-     * Fails unless every element is finite.
-     *
-     * @param what the name in the message
-     * @param values checked
-     */
-    public static void finite(String what, double... values) {
-        for (int i = 0; i < values.length; i++) {
-            if (!Double.isFinite(values[i])) {
-                throw new IllegalArgumentException(
-                        what + "[" + i + "] must be finite, got " + values[i]);
-            }
-        }
+  /**
+   * Fails unless every element is finite.
+   *
+   * @param what the name in the message
+   * @param values checked
+   */
+  public static void finite(String what, double... values) {
+    for (int i = 0; i < values.length; i++) {
+      if (!Double.isFinite(values[i])) {
+        throw new IllegalArgumentException(what + "[" + i + "] must be finite, got " + values[i]);
+      }
     }
+  }
 
-    /**
-     * {@return whether every element is finite}
-     *
-     * @param values checked
-     */
-    public static boolean allFinite(double[] values) {
-        return firstNotFinite(values) < 0;
-    }
+  /**
+   * {@return whether every element is finite}
+   *
+   * @param values checked
+   */
+  public static boolean allFinite(double[] values) {
+    return firstNotFinite(values) < 0;
+  }
 
-    /**
-     * {@return the index of the first element that is not finite, or -1}
-     *
-     * @param values checked
-     */
-    public static int firstNotFinite(double[] values) {
-        for (int i = 0; i < values.length; i++) {
-            if (!Double.isFinite(values[i])) {
-                return i;
-            }
-        }
-        return -1;
+  /**
+   * {@return the index of the first element that is not finite, or -1}
+   *
+   * @param values checked
+   */
+  public static int firstNotFinite(double[] values) {
+    for (int i = 0; i < values.length; i++) {
+      if (!Double.isFinite(values[i])) {
+        return i;
+      }
     }
+    return -1;
+  }
 
-    /**
-     * Fails unless the indices are distinct and each lies in [0, size).
-     *
-     * @param what the name in the message
-     * @param indices checked
-     * @param size the limit, exclusive
-     */
-    public static void distinctIndices(String what, int[] indices, int size) {
-        boolean[] seen = new boolean[size];
-        for (int index : indices) {
-            if (index < 0 || index >= size || seen[index]) {
-                throw new IllegalArgumentException(
-                        what + " must be distinct and in 0.." + (size - 1) + ", got "
-                                + Arrays.toString(indices));
-            }
-            seen[index] = true;
-        }
+  /**
+   * Fails unless the indices are distinct and each lies in [0, size).
+   *
+   * @param what the name in the message
+   * @param indices checked
+   * @param size the limit, exclusive
+   */
+  public static void distinctIndices(String what, int[] indices, int size) {
+    boolean[] seen = new boolean[size];
+    for (int index : indices) {
+      if (index < 0 || index >= size || seen[index]) {
+        throw new IllegalArgumentException(what + " must be distinct and in 0.." + (size - 1)
+            + ", got " + Arrays.toString(indices));
+      }
+      seen[index] = true;
     }
+  }
 }

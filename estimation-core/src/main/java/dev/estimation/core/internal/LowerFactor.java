@@ -11,173 +11,173 @@ import org.ejml.data.DMatrixRMaj;
  * threshold is not relative to the matrix.
  */
 public final class LowerFactor {
-    private static final double EPSILON = 0x1p-52;
+  private static final double EPSILON = 0x1p-52;
 
-    private final int size;
-    private final int[] order;
-    private final DMatrixRMaj columns;
-    private int failedPivot = -1;
-    private double failedValue;
+  private final int size;
+  private final int[] order;
+  private final DMatrixRMaj columns;
+  private int failedPivot = -1;
+  private double failedValue;
 
-    /**
-     * Factors of matrices of the given size: L with P = L L', lower triangular.
-     *
-     * @param size rows and columns
-     */
-    public LowerFactor(int size) {
-        this(naturalOrder(size), size);
+  /**
+   * Factors of matrices of the given size: L with P = L L', lower triangular.
+   *
+   * @param size rows and columns
+   */
+  public LowerFactor(int size) {
+    this(naturalOrder(size), size);
+  }
+
+  /**
+   * The first columns of the factor that a matrix has when its rows and columns are taken in
+   * another order: B, n x k, rows in natural order, with P[:, a] = B B[a, :]' for a = order[0..k).
+   *
+   * @param order a permutation of 0..n-1, copied
+   * @param columnCount k, from 0 to n
+   */
+  public LowerFactor(int[] order, int columnCount) {
+    this.size = order.length;
+    this.order = order.clone();
+    this.columns = new DMatrixRMaj(size, columnCount);
+  }
+
+  private static int[] naturalOrder(int size) {
+    int[] order = new int[size];
+    Arrays.setAll(order, i -> i);
+    return order;
+  }
+
+  /** {@return the factor, or its first columns, of the last success} */
+  public DMatrixRMaj columns() {
+    return columns;
+  }
+
+  /**
+   * Factors a positive definite matrix, reading its lower triangle in natural order. A pivot not
+   * above {@code n eps} times its diagonal entry fails; NaN and infinity fail.
+   *
+   * @param matrix n x n, read
+   * @return whether it is positive definite
+   */
+  public boolean factorDefinite(DMatrixRMaj matrix) {
+    return factor(matrix, true);
+  }
+
+  /**
+   * Factors a symmetric positive semi-definite matrix. A pivot within {@code n eps} of its diagonal
+   * entry with an equally small column is a zero variance and gives a zero column; NaN and infinity
+   * fail.
+   *
+   * @param matrix n x n, read
+   * @return whether it is positive semi-definite
+   */
+  public boolean factorSemidefinite(DMatrixRMaj matrix) {
+    return factor(matrix, false);
+  }
+
+  private boolean factor(DMatrixRMaj matrix, boolean definite) {
+    double[] p = matrix.data;
+    double[] b = columns.data;
+    int n = size;
+    int k = columns.numCols;
+    for (int c = 0; c < k; c++) {
+      int row = order[c];
+      double variance = p[row * n + row];
+      double threshold = n * EPSILON * variance;
+      double pivot = variance - dot(b, row * k, row * k, c);
+      if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE)
+          || (definite && !(pivot > threshold))) {
+        return fail(c, pivot);
+      }
+      for (int q = 0; q < c; q++) {
+        b[order[q] * k + c] = 0;
+      }
+      for (int q = c + 1; q < n; q++) {
+        int r = order[q];
+        b[r * k + c] = p[r * n + row] - dot(b, r * k, row * k, c);
+      }
+      double scale;
+      if (pivot <= threshold && columnVanishes(p, c)) {
+        scale = 0;
+      } else if (pivot > 0) {
+        scale = 1 / Math.sqrt(pivot);
+      } else {
+        return fail(c, pivot);
+      }
+      b[row * k + c] = pivot * scale;
+      for (int q = c + 1; q < n; q++) {
+        b[order[q] * k + c] *= scale;
+      }
     }
+    failedPivot = -1;
+    return true;
+  }
 
-    /**
-     * The first columns of the factor that a matrix has when its rows and columns are taken in
-     * another order: B, n x k, rows in natural order, with P[:, a] = B B[a, :]' for a = order[0..k).
-     *
-     * @param order a permutation of 0..n-1, copied
-     * @param columnCount k, from 0 to n
-     */
-    public LowerFactor(int[] order, int columnCount) {
-        this.size = order.length;
-        this.order = order.clone();
-        this.columns = new DMatrixRMaj(size, columnCount);
-    }
-
-    private static int[] naturalOrder(int size) {
-        int[] order = new int[size];
-        Arrays.setAll(order, i -> i);
-        return order;
-    }
-
-    /** {@return the factor, or its first columns, of the last success} */
-    public DMatrixRMaj columns() {
-        return columns;
-    }
-
-    /**
-     * Factors a positive definite matrix, reading its lower triangle in natural order. A pivot not
-     * above {@code n eps} times its diagonal entry fails; NaN and infinity fail.
-     *
-     * @param matrix n x n, read
-     * @return whether it is positive definite
-     */
-    public boolean factorDefinite(DMatrixRMaj matrix) {
-        return factor(matrix, true);
-    }
-
-    /**
-     * Factors a symmetric positive semi-definite matrix. A pivot within {@code n eps} of its diagonal
-     * entry with an equally small column is a zero variance and gives a zero column; NaN and infinity
-     * fail.
-     *
-     * @param matrix n x n, read
-     * @return whether it is positive semi-definite
-     */
-    public boolean factorSemidefinite(DMatrixRMaj matrix) {
-        return factor(matrix, false);
-    }
-
-    private boolean factor(DMatrixRMaj matrix, boolean definite) {
-        double[] p = matrix.data;
-        double[] b = columns.data;
-        int n = size;
-        int k = columns.numCols;
-        for (int c = 0; c < k; c++) {
-            int row = order[c];
-            double variance = p[row * n + row];
-            double threshold = n * EPSILON * variance;
-            double pivot = variance - dot(b, row * k, row * k, c);
-            if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE)
-                    || (definite && !(pivot > threshold))) {
-                return fail(c, pivot);
-            }
-            for (int q = 0; q < c; q++) {
-                b[order[q] * k + c] = 0;
-            }
-            for (int q = c + 1; q < n; q++) {
-                int r = order[q];
-                b[r * k + c] = p[r * n + row] - dot(b, r * k, row * k, c);
-            }
-            double scale;
-            if (pivot <= threshold && columnVanishes(p, c)) {
-                scale = 0;
-            } else if (pivot > 0) {
-                scale = 1 / Math.sqrt(pivot);
-            } else {
-                return fail(c, pivot);
-            }
-            b[row * k + c] = pivot * scale;
-            for (int q = c + 1; q < n; q++) {
-                b[order[q] * k + c] *= scale;
-            }
-        }
-        failedPivot = -1;
-        return true;
-    }
-
-    private boolean columnVanishes(double[] p, int c) {
-        int n = size;
-        double unit = n * EPSILON * Math.sqrt(p[order[c] * (n + 1)]);
-        for (int q = c + 1; q < n; q++) {
-            int r = order[q];
-            double residual = columns.data[r * columns.numCols + c];
-            if (!(Math.abs(residual) <= unit * Math.sqrt(p[r * (n + 1)]))) {
-                return false;
-            }
-        }
-        return true;
-    }
-
-    private boolean fail(int pivot, double value) {
-        failedPivot = pivot;
-        failedValue = value;
+  private boolean columnVanishes(double[] p, int c) {
+    int n = size;
+    double unit = n * EPSILON * Math.sqrt(p[order[c] * (n + 1)]);
+    for (int q = c + 1; q < n; q++) {
+      int r = order[q];
+      double residual = columns.data[r * columns.numCols + c];
+      if (!(Math.abs(residual) <= unit * Math.sqrt(p[r * (n + 1)]))) {
         return false;
+      }
     }
+    return true;
+  }
 
-    /** {@return which pivot failed, in words: "pivot 2 of 4 is -3.1E-9"} */
-    public String failure() {
-        return "pivot " + (failedPivot + 1) + " of " + size + " is " + failedValue;
-    }
+  private boolean fail(int pivot, double value) {
+    failedPivot = pivot;
+    failedValue = value;
+    return false;
+  }
 
-    /**
-     * Copies the factor of another of the same size and order.
-     *
-     * @param other copied from
-     */
-    public void set(LowerFactor other) {
-        System.arraycopy(other.columns.data, 0, columns.data, 0, columns.getNumElements());
-        failedPivot = other.failedPivot;
-        failedValue = other.failedValue;
-    }
+  /** {@return which pivot failed, in words: "pivot 2 of 4 is -3.1E-9"} */
+  public String failure() {
+    return "pivot " + (failedPivot + 1) + " of " + size + " is " + failedValue;
+  }
 
-    /**
-     * Overwrites {@code b} with the solution y of L y = b. Wants a definite factor.
-     *
-     * @param b n numbers, updated
-     */
-    public void solveLower(double[] b) {
-        double[] l = columns.data;
-        for (int r = 0; r < size; r++) {
-            double sum = b[r];
-            for (int c = 0; c < r; c++) {
-                sum -= l[r * size + c] * b[c];
-            }
-            b[r] = sum / l[r * size + r];
-        }
-    }
+  /**
+   * Copies the factor of another of the same size and order.
+   *
+   * @param other copied from
+   */
+  public void set(LowerFactor other) {
+    System.arraycopy(other.columns.data, 0, columns.data, 0, columns.getNumElements());
+    failedPivot = other.failedPivot;
+    failedValue = other.failedValue;
+  }
 
-    /** {@return twice the sum of the logarithms of the diagonal: ln det of the factored matrix} */
-    public double logDeterminant() {
-        double sum = 0;
-        for (int i = 0; i < size; i++) {
-            sum += Math.log(columns.data[i * (size + 1)]);
-        }
-        return 2 * sum;
+  /**
+   * Overwrites {@code b} with the solution y of L y = b. Wants a definite factor.
+   *
+   * @param b n numbers, updated
+   */
+  public void solveLower(double[] b) {
+    double[] l = columns.data;
+    for (int r = 0; r < size; r++) {
+      double sum = b[r];
+      for (int c = 0; c < r; c++) {
+        sum -= l[r * size + c] * b[c];
+      }
+      b[r] = sum / l[r * size + r];
     }
+  }
 
-    private static double dot(double[] data, int a, int b, int length) {
-        double sum = 0;
-        for (int i = 0; i < length; i++) {
-            sum += data[a + i] * data[b + i];
-        }
-        return sum;
+  /** {@return twice the sum of the logarithms of the diagonal: ln det of the factored matrix} */
+  public double logDeterminant() {
+    double sum = 0;
+    for (int i = 0; i < size; i++) {
+      sum += Math.log(columns.data[i * (size + 1)]);
     }
+    return 2 * sum;
+  }
+
+  private static double dot(double[] data, int a, int b, int length) {
+    double sum = 0;
+    for (int i = 0; i < length; i++) {
+      sum += data[a + i] * data[b + i];
+    }
+    return sum;
+  }
 }

@@ -10,59 +10,59 @@ import org.ejml.data.DMatrixRMaj;
  * factor of the moments themselves.
  */
 final class ActiveFactor {
-    private final int[] active;
-    private final boolean whole;
-    private final LowerFactor ordered;
-    private DMatrixRMaj columns;
+  private final int[] active;
+  private final boolean whole;
+  private final LowerFactor ordered;
+  private DMatrixRMaj columns;
 
-    ActiveFactor(int[] active, int dimension) {
-        this.active = active;
-        int[] order = new int[dimension];
-        boolean[] taken = new boolean[dimension];
-        int next = 0;
-        boolean natural = true;
-        for (int index : active) {
-            natural &= index == next;
-            order[next++] = index;
-            taken[index] = true;
-        }
-        this.whole = natural && next == dimension;
-        for (int index = 0; index < dimension; index++) {
-            if (!taken[index]) {
-                order[next++] = index;
-            }
-        }
-        this.ordered = whole ? null : new LowerFactor(order, active.length);
-        this.columns = whole ? new DMatrixRMaj(dimension, dimension) : ordered.columns();
+  ActiveFactor(int[] active, int dimension) {
+    this.active = active;
+    int[] order = new int[dimension];
+    boolean[] taken = new boolean[dimension];
+    int next = 0;
+    boolean natural = true;
+    for (int index : active) {
+      natural &= index == next;
+      order[next++] = index;
+      taken[index] = true;
     }
+    this.whole = natural && next == dimension;
+    for (int index = 0; index < dimension; index++) {
+      if (!taken[index]) {
+        order[next++] = index;
+      }
+    }
+    this.ordered = whole ? null : new LowerFactor(order, active.length);
+    this.columns = whole ? new DMatrixRMaj(dimension, dimension) : ordered.columns();
+  }
 
-    /** Makes B; false if the covariance is not positive semi-definite. */
-    boolean factor(Moments input) {
-        if (!input.factor()) {
-            return false;
-        }
-        if (whole) {
-            columns = input.lowerFactor();
-            return true;
-        }
-        return ordered.factorSemidefinite(input.covariance());
+  /** Makes B; false if the covariance is not positive semi-definite. */
+  boolean factor(Moments input) {
+    if (!input.factor()) {
+      return false;
     }
+    if (whole) {
+      columns = input.lowerFactor();
+      return true;
+    }
+    return ordered.factorSemidefinite(input.covariance());
+  }
 
-    /** What was wrong when {@link #factor} was false. */
-    String failure(Moments input) {
-        return input.factor() ? ordered.failure() : input.factorFailure();
-    }
+  /** What was wrong when {@link #factor} was false. */
+  String failure(Moments input) {
+    return input.factor() ? ordered.failure() : input.factorFailure();
+  }
 
-    DMatrixRMaj columns() {
-        return columns;
-    }
+  DMatrixRMaj columns() {
+    return columns;
+  }
 
-    int count() {
-        return active.length;
-    }
+  int count() {
+    return active.length;
+  }
 
-    /** The input of an active index. */
-    int input(int index) {
-        return active[index];
-    }
+  /** The input of an active index. */
+  int input(int index) {
+    return active[index];
+  }
 }

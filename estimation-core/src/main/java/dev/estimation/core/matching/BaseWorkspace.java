@@ -9,140 +9,137 @@ import org.ejml.data.DMatrixRMaj;
 
 /** What all matchings share: checks, the factor of the input, the image of the centre, the results. */
 abstract class BaseWorkspace implements MatchingWorkspace {
-    final Space inputSpace;
-    final Space outputSpace;
-    final ActiveFactor active;
-    final GuardedFunction function;
-    final DMatrixRMaj cross;
-    final double[] centre;
-    int jacobians;
-    private final Moments output;
-    private MatchingStatus status = MatchingStatus.MATCHED;
-    private Moments failedInput;
+  final Space inputSpace;
+  final Space outputSpace;
+  final ActiveFactor active;
+  final GuardedFunction function;
+  final DMatrixRMaj cross;
+  final double[] centre;
+  int jacobians;
+  private final Moments output;
+  private MatchingStatus status = MatchingStatus.MATCHED;
+  private Moments failedInput;
 
-    BaseWorkspace(Space inputSpace, Space outputSpace, VectorFunction function) {
-        this.inputSpace = inputSpace;
-        this.outputSpace = outputSpace;
-        int dimension = inputSpace.dimension();
-        this.active = new ActiveFactor(function.structure().activeInputs(dimension), dimension);
-        this.function = new GuardedFunction(function);
-        this.cross = new DMatrixRMaj(active.count(), outputSpace.dimension());
-        this.centre = new double[outputSpace.storage()];
-        this.output = new Moments(outputSpace);
+  BaseWorkspace(Space inputSpace, Space outputSpace, VectorFunction function) {
+    this.inputSpace = inputSpace;
+    this.outputSpace = outputSpace;
+    int dimension = inputSpace.dimension();
+    this.active = new ActiveFactor(function.structure().activeInputs(dimension), dimension);
+    this.function = new GuardedFunction(function);
+    this.cross = new DMatrixRMaj(active.count(), outputSpace.dimension());
+    this.centre = new double[outputSpace.storage()];
+    this.output = new Moments(outputSpace);
+  }
+
+  @Override
+  public final MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise) {
+    checkShapes(input, additiveNoise);
+    function.reset();
+    jacobians = 0;
+    status = MatchingStatus.MATCHED;
+    failedInput = input;
+    status = carryChecked(input, given, additiveNoise);
+    return status;
+  }
+
+  private MatchingStatus carryChecked(Moments input, double[] given, DMatrixRMaj additiveNoise) {
+    if (!Checks.allFinite(input.mean())) {
+      return MatchingStatus.INPUT_NOT_FINITE;
     }
-
-    @Override
-    public final MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise) {
-        checkShapes(input, additiveNoise);
-        function.reset();
-        jacobians = 0;
-        status = MatchingStatus.MATCHED;
-        failedInput = input;
-        status = carryChecked(input, given, additiveNoise);
-        return status;
+    if (!active.factor(input)) {
+      return MatchingStatus.INPUT_NOT_DEFINITE;
     }
-
-    private MatchingStatus carryChecked(Moments input, double[] given, DMatrixRMaj additiveNoise) {
-        if (!Checks.allFinite(input.mean())) {
-            return MatchingStatus.INPUT_NOT_FINITE;
-        }
-        if (!active.factor(input)) {
-            return MatchingStatus.INPUT_NOT_DEFINITE;
-        }
-        if (!function.evaluate(input.mean(), given, centre)) {
-            return MatchingStatus.FUNCTION_NOT_FINITE;
-        }
-        double[] mean = output.changeMean();
-        DMatrixRMaj covariance = output.changeCovariance();
-        MatchingStatus matched = match(input.mean(), given, mean, covariance.data);
-        if (matched != MatchingStatus.MATCHED) {
-            return matched;
-        }
-        addNoise(covariance, additiveNoise);
-        return Checks.allFinite(mean) && SymmetricMatrix.firstNotFinite(covariance) < 0
-                ? MatchingStatus.MATCHED
-                : MatchingStatus.OUTPUT_NOT_FINITE;
+    if (!function.evaluate(input.mean(), given, centre)) {
+      return MatchingStatus.FUNCTION_NOT_FINITE;
     }
-
-    /**
-     * Finds the moments of the output, given the image of the mean in {@link #centre}.
-     *
-     * @param outputMean filled
-     * @param outputCovariance lower triangle filled, row by row
-     */
-    abstract MatchingStatus match(
-            double[] mean, double[] given, double[] outputMean, double[] outputCovariance);
-
-    private void checkShapes(Moments input, DMatrixRMaj noise) {
-        if (input.mean().length != inputSpace.storage()
-                || input.covariance().numRows != inputSpace.dimension()) {
-            throw new IllegalArgumentException(
-                    "input must have dimension " + inputSpace.dimension() + ", got "
-                            + input.covariance().numRows);
-        }
-        int m = outputSpace.dimension();
-        if (noise != null && (noise.numRows != m || noise.numCols != m)) {
-            throw new IllegalArgumentException(
-                    "additive noise must be " + m + " x " + m + " to match the output, got "
-                            + noise.numRows + " x " + noise.numCols);
-        }
+    double[] mean = output.changeMean();
+    DMatrixRMaj covariance = output.changeCovariance();
+    MatchingStatus matched = match(input.mean(), given, mean, covariance.data);
+    if (matched != MatchingStatus.MATCHED) {
+      return matched;
     }
+    addNoise(covariance, additiveNoise);
+    return Checks.allFinite(mean) && SymmetricMatrix.firstNotFinite(covariance) < 0
+        ? MatchingStatus.MATCHED
+        : MatchingStatus.OUTPUT_NOT_FINITE;
+  }
 
-    private static void addNoise(DMatrixRMaj covariance, DMatrixRMaj noise) {
-        if (noise != null) {
-            int size = covariance.numRows * covariance.numRows;
-            for (int i = 0; i < size; i++) {
-                covariance.data[i] += noise.data[i];
-            }
-        }
-        SymmetricMatrix.mirrorLower(covariance);
-    }
+  /**
+   * Finds the moments of the output, given the image of the mean in {@link #centre}.
+   *
+   * @param outputMean filled
+   * @param outputCovariance lower triangle filled, row by row
+   */
+  abstract MatchingStatus match(
+      double[] mean, double[] given, double[] outputMean, double[] outputCovariance);
 
-    @Override
-    public final Moments output() {
-        return output;
+  private void checkShapes(Moments input, DMatrixRMaj noise) {
+    if (input.mean().length != inputSpace.storage()
+        || input.covariance().numRows != inputSpace.dimension()) {
+      throw new IllegalArgumentException("input must have dimension " + inputSpace.dimension()
+          + ", got " + input.covariance().numRows);
     }
+    int m = outputSpace.dimension();
+    if (noise != null && (noise.numRows != m || noise.numCols != m)) {
+      throw new IllegalArgumentException("additive noise must be " + m + " x " + m
+          + " to match the output, got " + noise.numRows + " x " + noise.numCols);
+    }
+  }
 
-    @Override
-    public final DMatrixRMaj inputFactor() {
-        return active.columns();
+  private static void addNoise(DMatrixRMaj covariance, DMatrixRMaj noise) {
+    if (noise != null) {
+      int size = covariance.numRows * covariance.numRows;
+      for (int i = 0; i < size; i++) {
+        covariance.data[i] += noise.data[i];
+      }
     }
+    SymmetricMatrix.mirrorLower(covariance);
+  }
 
-    @Override
-    public final DMatrixRMaj unitCrossCovariance() {
-        return cross;
-    }
+  @Override
+  public final Moments output() {
+    return output;
+  }
 
-    @Override
-    public final int evaluations() {
-        return function.evaluations();
-    }
+  @Override
+  public final DMatrixRMaj inputFactor() {
+    return active.columns();
+  }
 
-    @Override
-    public final int jacobians() {
-        return jacobians;
-    }
+  @Override
+  public final DMatrixRMaj unitCrossCovariance() {
+    return cross;
+  }
 
-    @Override
-    public final String failure() {
-        switch (status) {
-            case INPUT_NOT_FINITE:
-                int bad = Checks.firstNotFinite(failedInput.mean());
-                return "mean[" + bad + "] must be finite, got " + failedInput.mean()[bad];
-            case INPUT_NOT_DEFINITE:
-                return "covariance is not positive semi-definite: " + active.failure(failedInput);
-            case FUNCTION_NOT_FINITE:
-                return function.failure();
-            case JACOBIAN_NOT_FINITE:
-                return jacobianFailure();
-            case OUTPUT_NOT_FINITE:
-                return "moments of the output are not finite: the deviations overflow";
-            default:
-                return "";
-        }
-    }
+  @Override
+  public final int evaluations() {
+    return function.evaluations();
+  }
 
-    String jacobianFailure() {
-        return "";
-    }
+  @Override
+  public final int jacobians() {
+    return jacobians;
+  }
+
+  @Override
+  public final String failure() {
+    return switch (status) {
+      case MATCHED -> "";
+      case INPUT_NOT_FINITE -> meanFailure();
+      case INPUT_NOT_DEFINITE ->
+        "covariance is not positive semi-definite: " + active.failure(failedInput);
+      case FUNCTION_NOT_FINITE -> function.failure();
+      case JACOBIAN_NOT_FINITE -> jacobianFailure();
+      case OUTPUT_NOT_FINITE -> "moments of the output are not finite: the deviations overflow";
+    };
+  }
+
+  private String meanFailure() {
+    int bad = Checks.firstNotFinite(failedInput.mean());
+    return "mean[" + bad + "] must be finite, got " + failedInput.mean()[bad];
+  }
+
+  String jacobianFailure() {
+    return "";
+  }
 }

@@ -10,68 +10,67 @@ import java.util.Arrays;
 
 /** Carries moments by the Jacobian at the mean; see {@link Linearisation}. */
 final class LinearWorkspace extends BaseWorkspace {
-    private final Jacobian jacobian;
-    private final double[] derivatives;
-    private final double[] zero;
-    private final int differenceEvaluations;
+  private final Jacobian jacobian;
+  private final double[] derivatives;
+  private final double[] zero;
+  private final int differenceEvaluations;
 
-    LinearWorkspace(Space input, Space output, VectorFunction function, double[] inputScales) {
-        super(input, output, function);
-        Jacobian analytic = function.structure().jacobian().orElse(null);
-        this.jacobian =
-                analytic != null ? analytic : differences(input, output, function, inputScales);
-        this.differenceEvaluations = analytic != null ? 0 : 2 * active.count();
-        this.derivatives = new double[output.dimension() * input.dimension()];
-        this.zero = new double[output.dimension()];
+  LinearWorkspace(Space input, Space output, VectorFunction function, double[] inputScales) {
+    super(input, output, function);
+    Jacobian analytic = function.structure().jacobian().orElse(null);
+    this.jacobian = analytic != null ? analytic : differences(input, output, function, inputScales);
+    this.differenceEvaluations = analytic != null ? 0 : 2 * active.count();
+    this.derivatives = new double[output.dimension() * input.dimension()];
+    this.zero = new double[output.dimension()];
+  }
+
+  private static Jacobian differences(
+      Space input, Space output, VectorFunction function, double[] inputScales) {
+    if (inputScales == null) {
+      throw new IllegalArgumentException(
+          "linearisation wants a Jacobian and the function offers none; add one to its"
+              + " structure, or give input scales for central differences");
     }
+    return new CentralDifferences(input, output, function, inputScales);
+  }
 
-    private static Jacobian differences(
-            Space input, Space output, VectorFunction function, double[] inputScales) {
-        if (inputScales == null) {
-            throw new IllegalArgumentException(
-                    "linearisation wants a Jacobian and the function offers none; add one to its"
-                            + " structure, or give input scales for central differences");
+  @Override
+  MatchingStatus match(double[] mean, double[] given, double[] outputMean, double[] covariance) {
+    Arrays.fill(derivatives, 0);
+    jacobian.evaluate(mean, given, derivatives);
+    jacobians++;
+    function.count(differenceEvaluations);
+    if (!Checks.allFinite(derivatives)) {
+      return MatchingStatus.JACOBIAN_NOT_FINITE;
+    }
+    fillCross();
+    Products.fillInnerProduct(cross.data, active.count(), outputSpace.dimension(), covariance);
+    outputSpace.displace(centre, zero, outputMean); // brings angles into their range
+    return MatchingStatus.MATCHED;
+  }
+
+  /** W = (G B)', over active inputs. */
+  private void fillCross() {
+    double[] factor = active.columns().data;
+    int k = active.count();
+    int n = inputSpace.dimension();
+    int m = outputSpace.dimension();
+    for (int c = 0; c < k; c++) {
+      for (int r = 0; r < m; r++) {
+        double sum = 0;
+        for (int a = 0; a < k; a++) {
+          int row = active.input(a);
+          sum += derivatives[r * n + row] * factor[row * k + c];
         }
-        return new CentralDifferences(input, output, function, inputScales);
+        cross.data[c * m + r] = sum;
+      }
     }
+  }
 
-    @Override
-    MatchingStatus match(double[] mean, double[] given, double[] outputMean, double[] covariance) {
-        Arrays.fill(derivatives, 0);
-        jacobian.evaluate(mean, given, derivatives);
-        jacobians++;
-        function.count(differenceEvaluations);
-        if (!Checks.allFinite(derivatives)) {
-            return MatchingStatus.JACOBIAN_NOT_FINITE;
-        }
-        fillCross();
-        Products.fillInnerProduct(cross.data, active.count(), outputSpace.dimension(), covariance);
-        outputSpace.displace(centre, zero, outputMean); // brings angles into their range
-        return MatchingStatus.MATCHED;
-    }
-
-    /** W = (G B)', over active inputs. */
-    private void fillCross() {
-        double[] factor = active.columns().data;
-        int k = active.count();
-        int n = inputSpace.dimension();
-        int m = outputSpace.dimension();
-        for (int c = 0; c < k; c++) {
-            for (int r = 0; r < m; r++) {
-                double sum = 0;
-                for (int a = 0; a < k; a++) {
-                    int row = active.input(a);
-                    sum += derivatives[r * n + row] * factor[row * k + c];
-                }
-                cross.data[c * m + r] = sum;
-            }
-        }
-    }
-
-    @Override
-    String jacobianFailure() {
-        int n = inputSpace.dimension();
-        int bad = Checks.firstNotFinite(derivatives);
-        return "Jacobian[" + bad / n + "][" + bad % n + "] must be finite, got " + derivatives[bad];
-    }
+  @Override
+  String jacobianFailure() {
+    int n = inputSpace.dimension();
+    int bad = Checks.firstNotFinite(derivatives);
+    return "Jacobian[" + bad / n + "][" + bad % n + "] must be finite, got " + derivatives[bad];
+  }
 }

@@ -18,30 +18,30 @@ import dev.estimation.core.space.Space;
  * 8.3 (from memory).
  */
 public final class Linearisation implements MomentMatching {
-    private final double[] inputScales;
+  private final double[] inputScales;
 
-    private Linearisation(double[] inputScales) {
-        this.inputScales = inputScales;
-    }
+  private Linearisation(double[] inputScales) {
+    this.inputScales = inputScales;
+  }
 
-    /** {@return first-order linearisation of functions that have a Jacobian} */
-    public static Linearisation firstOrder() {
-        return new Linearisation(null);
-    }
+  /** {@return first-order linearisation of functions that have a Jacobian} */
+  public static Linearisation firstOrder() {
+    return new Linearisation(null);
+  }
 
-    /**
-     * The same, with central differences for functions that have no Jacobian of their own.
-     *
-     * @param inputScales for each input, a length over which the functions bend noticeably, in its
-     *     unit; finite and above 0; copied. See {@code CentralDifferences}
-     * @return the matching
-     */
-    public Linearisation withInputScales(double... inputScales) {
-        return new Linearisation(inputScales.clone());
-    }
+  /**
+   * The same, with central differences for functions that have no Jacobian of their own.
+   *
+   * @param inputScales for each input, a length over which the functions bend noticeably, in its
+   *     unit; finite and above 0; copied. See {@code CentralDifferences}
+   * @return the matching
+   */
+  public Linearisation withInputScales(double... inputScales) {
+    return new Linearisation(inputScales.clone());
+  }
 
-    @Override
-    public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
-        return new LinearWorkspace(input, output, function, inputScales);
-    }
+  @Override
+  public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
+    return new LinearWorkspace(input, output, function, inputScales);
+  }
 }

@@ -2,22 +2,22 @@ package dev.estimation.core.matching;
 
 /** How a call of {@link MatchingWorkspace#carry} ended. */
 public enum MatchingStatus {
-    /** The moments of the output are there. */
-    MATCHED,
-    /** The mean of the input is NaN or infinite. Usual cause: an earlier failure that was ignored. */
-    INPUT_NOT_FINITE,
-    /**
-     * The covariance of the input is not positive semi-definite, or not finite. Usual causes: rounding
-     * after many updates of very different accuracy, a covariance set by hand.
-     */
-    INPUT_NOT_DEFINITE,
-    /**
-     * The function gave NaN or infinity, or left a component out. Usual causes: a point outside its
-     * domain (try a smaller spread), too few outputs filled.
-     */
-    FUNCTION_NOT_FINITE,
-    /** The Jacobian has NaN or infinity. Usual causes: a singular point such as zero range. */
-    JACOBIAN_NOT_FINITE,
-    /** The moments of the output overflow. Usual cause: a variance far outside the model's units. */
-    OUTPUT_NOT_FINITE
+  /** The moments of the output are there. */
+  MATCHED,
+  /** The mean of the input is NaN or infinite. Usual cause: an earlier failure that was ignored. */
+  INPUT_NOT_FINITE,
+  /**
+   * The covariance of the input is not positive semi-definite, or not finite. Usual causes: rounding
+   * after many updates of very different accuracy, a covariance set by hand.
+   */
+  INPUT_NOT_DEFINITE,
+  /**
+   * The function gave NaN or infinity, or left a component out. Usual causes: a point outside its
+   * domain (try a smaller spread), too few outputs filled.
+   */
+  FUNCTION_NOT_FINITE,
+  /** The Jacobian has NaN or infinity. Usual causes: a singular point such as zero range. */
+  JACOBIAN_NOT_FINITE,
+  /** The moments of the output overflow. Usual cause: a variance far outside the model's units. */
+  OUTPUT_NOT_FINITE
 }

@@ -13,38 +13,38 @@ import org.ejml.data.DMatrixRMaj;
  * input covariance that the active inputs carry. Gains and smoother gains are made from the two.
  */
 public interface MatchingWorkspace {
-    /**
-     * Carries moments through the function.
-     *
-     * @param input read; its lower factor is made if it has none
-     * @param given read and handed to the function
-     * @param additiveNoise covariance added to the output's, m x m and symmetric, read; or null
-     * @return {@link MatchingStatus#MATCHED} if the results below are valid; otherwise they are not, and
-     *     {@link #failure()} says what was wrong
-     * @throws IllegalArgumentException if a shape is wrong
-     */
-    MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise);
+  /**
+   * Carries moments through the function.
+   *
+   * @param input read; its lower factor is made if it has none
+   * @param given read and handed to the function
+   * @param additiveNoise covariance added to the output's, m x m and symmetric, read; or null
+   * @return {@link MatchingStatus#MATCHED} if the results below are valid; otherwise they are not, and
+   *     {@link #failure()} says what was wrong
+   * @throws IllegalArgumentException if a shape is wrong
+   */
+  MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise);
 
-    /**
-     * The result. The covariance is symmetric and finite; whether it is positive semi-definite is for
-     * the caller to ask, since negative weights can undo that.
-     *
-     * @return mean and covariance of the output, noise included; read only, valid until the next call
-     */
-    Moments output();
+  /**
+   * The result. The covariance is symmetric and finite; whether it is positive semi-definite is for
+   * the caller to ask, since negative weights can undo that.
+   *
+   * @return mean and covariance of the output, noise included; read only, valid until the next call
+   */
+  Moments output();
 
-    /** {@return B, n x k; read only, valid until the input or the workspace is used again} */
-    DMatrixRMaj inputFactor();
+  /** {@return B, n x k; read only, valid until the input or the workspace is used again} */
+  DMatrixRMaj inputFactor();
 
-    /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */
-    DMatrixRMaj unitCrossCovariance();
+  /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */
+  DMatrixRMaj unitCrossCovariance();
 
-    /** {@return the function evaluations of the last call, those for numerical derivatives included} */
-    int evaluations();
+  /** {@return the function evaluations of the last call, those for numerical derivatives included} */
+  int evaluations();
 
-    /** {@return the Jacobians formed in the last call, analytic or by differences} */
-    int jacobians();
+  /** {@return the Jacobians formed in the last call, analytic or by differences} */
+  int jacobians();
 
-    /** {@return what was wrong in the last call, in words; empty if nothing was} */
-    String failure();
+  /** {@return what was wrong in the last call, in words; empty if nothing was} */
+  String failure();
 }

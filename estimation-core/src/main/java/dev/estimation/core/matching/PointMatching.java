@@ -24,23 +24,23 @@ import dev.estimation.core.space.Space;
  * Sarkka and Svensson 2023, <i>Bayesian Filtering and Smoothing</i>, 2nd ed., chapters 8 and 9.
  */
 public final class PointMatching implements MomentMatching {
-    private final PointRule rule;
+  private final PointRule rule;
 
-    private PointMatching(PointRule rule) {
-        this.rule = rule;
-    }
+  private PointMatching(PointRule rule) {
+    this.rule = rule;
+  }
 
-    /**
-     * {@return matching by the points of a rule}
-     *
-     * @param rule the points
-     */
-    public static PointMatching of(PointRule rule) {
-        return new PointMatching(rule);
-    }
+  /**
+   * {@return matching by the points of a rule}
+   *
+   * @param rule the points
+   */
+  public static PointMatching of(PointRule rule) {
+    return new PointMatching(rule);
+  }
 
-    @Override
-    public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
-        return new PointWorkspace(input, output, function, rule);
-    }
+  @Override
+  public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
+    return new PointWorkspace(input, output, function, rule);
+  }
 }

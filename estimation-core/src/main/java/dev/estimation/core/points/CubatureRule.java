@@ -12,15 +12,15 @@ package dev.estimation.core.points;
  * Transactions on Automatic Control 54(6).
  */
 public final class CubatureRule implements PointRule {
-    private CubatureRule() {}
+  private CubatureRule() {}
 
-    /** {@return the rule of degree 3} */
-    public static CubatureRule degreeThree() {
-        return new CubatureRule();
-    }
+  /** {@return the rule of degree 3} */
+  public static CubatureRule degreeThree() {
+    return new CubatureRule();
+  }
 
-    @Override
-    public UnitPoints points(int dimension) {
-        return AxisPoints.of(dimension, Math.sqrt(dimension), 0, 0, 0.5 / dimension);
-    }
+  @Override
+  public UnitPoints points(int dimension) {
+    return AxisPoints.of(dimension, Math.sqrt(dimension), 0, 0, 0.5 / dimension);
+  }
 }

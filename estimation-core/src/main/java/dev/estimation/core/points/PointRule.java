@@ -8,12 +8,12 @@ package dev.estimation.core.points;
  */
 @FunctionalInterface
 public interface PointRule {
-    /**
-     * The points in the given number of dimensions.
-     *
-     * @param dimension 1 or more
-     * @return the points
-     * @throws IllegalArgumentException if the rule does not exist there, or has too many points
-     */
-    UnitPoints points(int dimension);
+  /**
+   * The points in the given number of dimensions.
+   *
+   * @param dimension 1 or more
+   * @return the points
+   * @throws IllegalArgumentException if the rule does not exist there, or has too many points
+   */
+  UnitPoints points(int dimension);
 }

@@ -12,167 +12,170 @@ import dev.estimation.core.internal.Checks;
  * <p><i>Immutable.</i> Memory: 12 bytes a coordinate that is not zero, 12 a point.
  */
 public final class UnitPoints {
-    /** The most points that a rule may have; more are refused, as one call would take seconds. */
-    public static final int LARGEST_SIZE = 100_000;
+  /** The most points that a rule may have; more are refused, as one call would take seconds. */
+  public static final int LARGEST_SIZE = 100_000;
 
-    private final int dimension;
-    private final double centreMeanWeight;
-    private final double centreCovarianceWeight;
-    private final double[] weights;
-    private final int[] starts;
-    private final int[] axes;
-    private final double[] coordinates;
+  private final int dimension;
+  private final double centreMeanWeight;
+  private final double centreCovarianceWeight;
+  private final double[] weights;
+  private final int[] starts;
+  private final int[] axes;
+  private final double[] coordinates;
 
-    private UnitPoints(
-            int dimension, double centreMeanWeight, double centreCovarianceWeight, double[] weights, int entries) {
-        this.dimension = dimension;
-        this.centreMeanWeight = centreMeanWeight;
-        this.centreCovarianceWeight = centreCovarianceWeight;
-        this.weights = weights;
-        this.starts = new int[weights.length + 1];
-        this.axes = new int[entries];
-        this.coordinates = new double[entries];
+  private UnitPoints(
+      int dimension,
+      double centreMeanWeight,
+      double centreCovarianceWeight,
+      double[] weights,
+      int entries) {
+    this.dimension = dimension;
+    this.centreMeanWeight = centreMeanWeight;
+    this.centreCovarianceWeight = centreCovarianceWeight;
+    this.weights = weights;
+    this.starts = new int[weights.length + 1];
+    this.axes = new int[entries];
+    this.coordinates = new double[entries];
+  }
+
+  /**
+   * Points and their weights.
+   *
+   * @param dimension the number of coordinates of a point
+   * @param centreMeanWeight weight of the centre in means
+   * @param centreCovarianceWeight weight of the centre in covariances
+   * @param points the points other than the centre, copied
+   * @param weights one for each of them, for means and covariances alike, copied
+   * @return the points
+   */
+  public static UnitPoints of(
+      int dimension,
+      double centreMeanWeight,
+      double centreCovarianceWeight,
+      double[][] points,
+      double[] weights) {
+    Checks.length("weights", weights, points.length);
+    Checks.finite("weights", weights);
+    Checks.finite("centre weights", centreMeanWeight, centreCovarianceWeight);
+    int entries = 0;
+    for (double[] point : points) {
+      Checks.length("a point", point, dimension);
+      Checks.finite("a point", point);
+      for (double coordinate : point) {
+        entries += coordinate == 0 ? 0 : 1;
+      }
     }
+    UnitPoints result = new UnitPoints(
+        dimension, centreMeanWeight, centreCovarianceWeight, weights.clone(), entries);
+    result.fill(points);
+    return result;
+  }
 
-    /**
-     * Points and their weights.
-     *
-     * @param dimension the number of coordinates of a point
-     * @param centreMeanWeight weight of the centre in means
-     * @param centreCovarianceWeight weight of the centre in covariances
-     * @param points the points other than the centre, copied
-     * @param weights one for each of them, for means and covariances alike, copied
-     * @return the points
-     */
-    public static UnitPoints of(
-            int dimension,
-            double centreMeanWeight,
-            double centreCovarianceWeight,
-            double[][] points,
-            double[] weights) {
-        Checks.length("weights", weights, points.length);
-        Checks.finite("weights", weights);
-        Checks.finite("centre weights", centreMeanWeight, centreCovarianceWeight);
-        int entries = 0;
-        for (double[] point : points) {
-            Checks.length("a point", point, dimension);
-            Checks.finite("a point", point);
-            for (double coordinate : point) {
-                entries += coordinate == 0 ? 0 : 1;
-            }
+  private void fill(double[][] points) {
+    int entry = 0;
+    for (int i = 0; i < points.length; i++) {
+      for (int axis = 0; axis < dimension; axis++) {
+        if (points[i][axis] != 0) {
+          axes[entry] = axis;
+          coordinates[entry++] = points[i][axis];
         }
-        UnitPoints result =
-                new UnitPoints(
-                        dimension, centreMeanWeight, centreCovarianceWeight, weights.clone(), entries);
-        result.fill(points);
-        return result;
+      }
+      starts[i + 1] = entry;
     }
+  }
 
-    private void fill(double[][] points) {
-        int entry = 0;
-        for (int i = 0; i < points.length; i++) {
-            for (int axis = 0; axis < dimension; axis++) {
-                if (points[i][axis] != 0) {
-                    axes[entry] = axis;
-                    coordinates[entry++] = points[i][axis];
-                }
-            }
-            starts[i + 1] = entry;
-        }
+  /** Refuses a rule of more than {@link #LARGEST_SIZE} points, naming the count. */
+  static void refuseAbove(String rule, double count) {
+    if (count > LARGEST_SIZE) {
+      throw new IllegalArgumentException(
+          rule + " has " + (count < 1e15 ? Long.toString((long) count) : Double.toString(count))
+              + " points, more than the " + LARGEST_SIZE
+              + " allowed; declare active inputs, or take a rule with fewer points");
     }
+  }
 
-    /** Refuses a rule of more than {@link #LARGEST_SIZE} points, naming the count. */
-    static void refuseAbove(String rule, double count) {
-        if (count > LARGEST_SIZE) {
-            throw new IllegalArgumentException(
-                    rule + " has " + (count < 1e15 ? Long.toString((long) count) : Double.toString(count))
-                            + " points, more than the " + LARGEST_SIZE
-                            + " allowed; declare active inputs, or take a rule with fewer points");
-        }
-    }
+  /** {@return the number of coordinates of a point} */
+  public int dimension() {
+    return dimension;
+  }
 
-    /** {@return the number of coordinates of a point} */
-    public int dimension() {
-        return dimension;
-    }
+  /** {@return the number of points other than the centre} */
+  public int size() {
+    return weights.length;
+  }
 
-    /** {@return the number of points other than the centre} */
-    public int size() {
-        return weights.length;
-    }
+  /** {@return the weight of the centre in means} */
+  public double centreMeanWeight() {
+    return centreMeanWeight;
+  }
 
-    /** {@return the weight of the centre in means} */
-    public double centreMeanWeight() {
-        return centreMeanWeight;
-    }
+  /** {@return the weight of the centre in covariances} */
+  public double centreCovarianceWeight() {
+    return centreCovarianceWeight;
+  }
 
-    /** {@return the weight of the centre in covariances} */
-    public double centreCovarianceWeight() {
-        return centreCovarianceWeight;
-    }
+  /**
+   * {@return the weight of a point, in means and covariances}
+   *
+   * @param point from 0 to {@link #size()} - 1
+   */
+  public double weight(int point) {
+    return weights[point];
+  }
 
-    /**
-     * {@return the weight of a point, in means and covariances}
-     *
-     * @param point from 0 to {@link #size()} - 1
-     */
-    public double weight(int point) {
-        return weights[point];
-    }
+  /**
+   * {@return where the entries of a point begin; they end where those of the next begin}
+   *
+   * @param point from 0 to {@link #size()} - 1
+   */
+  public int start(int point) {
+    return starts[point];
+  }
 
-    /**
-     * {@return where the entries of a point begin; they end where those of the next begin}
-     *
-     * @param point from 0 to {@link #size()} - 1
-     */
-    public int start(int point) {
-        return starts[point];
-    }
+  /**
+   * {@return the axis of an entry}
+   *
+   * @param entry from {@code start(point)} to {@code start(point + 1)} - 1
+   */
+  public int axis(int entry) {
+    return axes[entry];
+  }
 
-    /**
-     * {@return the axis of an entry}
-     *
-     * @param entry from {@code start(point)} to {@code start(point + 1)} - 1
-     */
-    public int axis(int entry) {
-        return axes[entry];
-    }
+  /**
+   * {@return the coordinate of an entry, not zero}
+   *
+   * @param entry from {@code start(point)} to {@code start(point + 1)} - 1
+   */
+  public double coordinate(int entry) {
+    return coordinates[entry];
+  }
 
-    /**
-     * {@return the coordinate of an entry, not zero}
-     *
-     * @param entry from {@code start(point)} to {@code start(point + 1)} - 1
-     */
-    public double coordinate(int entry) {
+  /**
+   * {@return the coordinate of a point along an axis}
+   *
+   * @param point from 0 to {@link #size()} - 1
+   * @param axis from 0
+   */
+  public double coordinate(int point, int axis) {
+    for (int entry = starts[point]; entry < starts[point + 1]; entry++) {
+      if (axes[entry] == axis) {
         return coordinates[entry];
+      }
     }
+    return 0;
+  }
 
-    /**
-     * {@return the coordinate of a point along an axis}
-     *
-     * @param point from 0 to {@link #size()} - 1
-     * @param axis from 0
-     */
-    public double coordinate(int point, int axis) {
-        for (int entry = starts[point]; entry < starts[point + 1]; entry++) {
-            if (axes[entry] == axis) {
-                return coordinates[entry];
-            }
-        }
-        return 0;
+  /**
+   * The sum of the absolute mean weights, centre included: by how much the rounding of the function
+   * itself can be multiplied in the mean. 1 if no weight is negative.
+   *
+   * @return the sum
+   */
+  public double weightAmplification() {
+    double sum = Math.abs(centreMeanWeight);
+    for (double weight : weights) {
+      sum += Math.abs(weight);
     }
-
-    /**
-     * The sum of the absolute mean weights, centre included: by how much the rounding of the function
-     * itself can be multiplied in the mean. 1 if no weight is negative.
-     *
-     * @return the sum
-     */
-    public double weightAmplification() {
-        double sum = Math.abs(centreMeanWeight);
-        for (double weight : weights) {
-            sum += Math.abs(weight);
-        }
-        return sum;
-    }
+    return sum;
+  }
 }

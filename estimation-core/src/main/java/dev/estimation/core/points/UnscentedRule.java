@@ -20,59 +20,58 @@ import java.util.function.IntToDoubleFunction;
  * transformation</i>; van der Merwe and Wan 2001.
  */
 public final class UnscentedRule implements PointRule {
-    private final double alpha;
-    private final double beta;
-    private final IntToDoubleFunction kappa;
+  private final double alpha;
+  private final double beta;
+  private final IntToDoubleFunction kappa;
 
-    private UnscentedRule(double alpha, double beta, IntToDoubleFunction kappa) {
-        Checks.finite("alpha and beta", alpha, beta);
-        if (!(alpha > 0)) {
-            throw new IllegalArgumentException("alpha must be > 0, got " + alpha);
-        }
-        this.alpha = alpha;
-        this.beta = beta;
-        this.kappa = kappa;
+  private UnscentedRule(double alpha, double beta, IntToDoubleFunction kappa) {
+    Checks.finite("alpha and beta", alpha, beta);
+    if (!(alpha > 0)) {
+      throw new IllegalArgumentException("alpha must be > 0, got " + alpha);
     }
+    this.alpha = alpha;
+    this.beta = beta;
+    this.kappa = kappa;
+  }
 
-    /**
-     * A rule with one kappa for all dimensions.
-     *
-     * @param alpha spread, above 0
-     * @param beta added to the covariance weight of the centre, any value
-     * @param kappa n + kappa must be above 0 wherever the rule is used
-     * @return the rule
-     */
-    public static UnscentedRule scaled(double alpha, double beta, double kappa) {
-        Checks.finite("kappa", kappa);
-        return new UnscentedRule(alpha, beta, dimension -> kappa);
-    }
+  /**
+   * A rule with one kappa for all dimensions.
+   *
+   * @param alpha spread, above 0
+   * @param beta added to the covariance weight of the centre, any value
+   * @param kappa n + kappa must be above 0 wherever the rule is used
+   * @return the rule
+   */
+  public static UnscentedRule scaled(double alpha, double beta, double kappa) {
+    Checks.finite("kappa", kappa);
+    return new UnscentedRule(alpha, beta, dimension -> kappa);
+  }
 
-    /**
-     * {@return a rule whose kappa depends on the dimension, e.g. {@code n -> 3 - n}}
-     *
-     * @param alpha spread, above 0
-     * @param beta added to the covariance weight of the centre
-     * @param kappa of the dimension n; n + kappa must be above 0 wherever the rule is used
-     */
-    public static UnscentedRule scaled(double alpha, double beta, IntToDoubleFunction kappa) {
-        return new UnscentedRule(alpha, beta, kappa);
-    }
+  /**
+   * {@return a rule whose kappa depends on the dimension, e.g. {@code n -> 3 - n}}
+   *
+   * @param alpha spread, above 0
+   * @param beta added to the covariance weight of the centre
+   * @param kappa of the dimension n; n + kappa must be above 0 wherever the rule is used
+   */
+  public static UnscentedRule scaled(double alpha, double beta, IntToDoubleFunction kappa) {
+    return new UnscentedRule(alpha, beta, kappa);
+  }
 
-    @Override
-    public UnitPoints points(int dimension) {
-        double k = kappa.applyAsDouble(dimension);
-        if (!(dimension + k > 0 && Double.isFinite(k))) {
-            throw new IllegalArgumentException(
-                    "n + kappa must be > 0, got n = " + dimension + " and kappa = " + k
-                            + " (unscented rule)");
-        }
-        double spreadSquared = alpha * alpha * (dimension + k);
-        double centre = (spreadSquared - dimension) / spreadSquared;
-        return AxisPoints.of(
-                dimension,
-                Math.sqrt(spreadSquared),
-                centre,
-                centre + 1 - alpha * alpha + beta,
-                0.5 / spreadSquared);
+  @Override
+  public UnitPoints points(int dimension) {
+    double k = kappa.applyAsDouble(dimension);
+    if (!(dimension + k > 0 && Double.isFinite(k))) {
+      throw new IllegalArgumentException("n + kappa must be > 0, got n = " + dimension
+          + " and kappa = " + k + " (unscented rule)");
     }
+    double spreadSquared = alpha * alpha * (dimension + k);
+    double centre = (spreadSquared - dimension) / spreadSquared;
+    return AxisPoints.of(
+        dimension,
+        Math.sqrt(spreadSquared),
+        centre,
+        centre + 1 - alpha * alpha + beta,
+        0.5 / spreadSquared);
+  }
 }

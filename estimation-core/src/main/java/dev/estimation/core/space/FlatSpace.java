@@ -10,91 +10,91 @@ import java.util.Arrays;
  * [-pi, pi). Points given to it need not be wrapped. <i>Immutable.</i>
  */
 public final class FlatSpace implements Space {
-    private final boolean[] angle;
+  private final boolean[] angle;
 
-    private FlatSpace(boolean[] angle) {
-        this.angle = angle;
-    }
+  private FlatSpace(boolean[] angle) {
+    this.angle = angle;
+  }
 
-    static FlatSpace reals(int count) {
-        return new FlatSpace(new boolean[checked(count)]);
-    }
+  static FlatSpace reals(int count) {
+    return new FlatSpace(new boolean[checked(count)]);
+  }
 
-    static FlatSpace angles(int count) {
-        boolean[] angle = new boolean[checked(count)];
-        Arrays.fill(angle, true);
-        return new FlatSpace(angle);
-    }
+  static FlatSpace angles(int count) {
+    boolean[] angle = new boolean[checked(count)];
+    Arrays.fill(angle, true);
+    return new FlatSpace(angle);
+  }
 
-    private static int checked(int count) {
-        if (count < 1) {
-            throw new IllegalArgumentException("a space must have at least 1 component, got " + count);
-        }
-        return count;
+  private static int checked(int count) {
+    if (count < 1) {
+      throw new IllegalArgumentException("a space must have at least 1 component, got " + count);
     }
+    return count;
+  }
 
-    /**
-     * {@return the components of this space followed by those of another}
-     *
-     * @param next the components that follow
-     */
-    public FlatSpace and(FlatSpace next) {
-        boolean[] joined = Arrays.copyOf(angle, angle.length + next.angle.length);
-        System.arraycopy(next.angle, 0, joined, angle.length, next.angle.length);
-        return new FlatSpace(joined);
-    }
+  /**
+   * {@return the components of this space followed by those of another}
+   *
+   * @param next the components that follow
+   */
+  public FlatSpace and(FlatSpace next) {
+    boolean[] joined = Arrays.copyOf(angle, angle.length + next.angle.length);
+    System.arraycopy(next.angle, 0, joined, angle.length, next.angle.length);
+    return new FlatSpace(joined);
+  }
 
-    /**
-     * {@return whether component {@code index} is an angle}
-     *
-     * @param index from 0
-     */
-    public boolean isAngle(int index) {
-        return angle[index];
-    }
+  /**
+   * {@return whether component {@code index} is an angle}
+   *
+   * @param index from 0
+   */
+  public boolean isAngle(int index) {
+    return angle[index];
+  }
 
-    @Override
-    public int storage() {
-        return angle.length;
-    }
+  @Override
+  public int storage() {
+    return angle.length;
+  }
 
-    @Override
-    public int dimension() {
-        return angle.length;
-    }
+  @Override
+  public int dimension() {
+    return angle.length;
+  }
 
-    @Override
-    public void difference(double[] a, double[] b, double[] tangent) {
-        for (int i = 0; i < angle.length; i++) {
-            double difference = a[i] - b[i];
-            tangent[i] = angle[i] ? Angle.wrap(difference) : difference;
-        }
+  @Override
+  public void difference(double[] a, double[] b, double[] tangent) {
+    for (int i = 0; i < angle.length; i++) {
+      double difference = a[i] - b[i];
+      tangent[i] = angle[i] ? Angle.wrap(difference) : difference;
     }
+  }
 
-    @Override
-    public void displace(double[] point, double[] tangent, double[] result) {
-        for (int i = 0; i < angle.length; i++) {
-            double moved = point[i] + tangent[i];
-            result[i] = angle[i] ? Angle.wrap(moved) : moved;
-        }
+  @Override
+  public void displace(double[] point, double[] tangent, double[] result) {
+    for (int i = 0; i < angle.length; i++) {
+      double moved = point[i] + tangent[i];
+      result[i] = angle[i] ? Angle.wrap(moved) : moved;
     }
+  }
 
-    @Override
-    public boolean equals(Object other) {
-        return other instanceof FlatSpace && Arrays.equals(angle, ((FlatSpace) other).angle);
-    }
+  @Override
+  public boolean equals(Object other) {
+    return other instanceof FlatSpace that && Arrays.equals(angle, that.angle);
+  }
 
-    @Override
-    public int hashCode() {
-        return Arrays.hashCode(angle);
-    }
+  @Override
+  public int hashCode() {
+    return Arrays.hashCode(angle);
+  }
 
-    @Override
-    public String toString() {
-        StringBuilder text = new StringBuilder("(");
-        for (int i = 0; i < angle.length; i++) {
-            text.append(i == 0 ? "" : ", ").append(angle[i] ? "angle" : "real");
-        }
-        return text.append(')').toString();
+  @Override
+  public String toString() {
+    StringBuilder text = new StringBuilder("(");
+    for (int i = 0; i < angle.length; i++) {
+      text.append(i == 0 ? "" : ", ").append(angle[i] ? "angle" : "real");
     }
+    return text.append(')').toString();
+  }
 }

@@ -15,75 +15,75 @@ import org.ejml.data.DMatrixRMaj;
  * path. Source: Bar-Shalom, Li and Kirubarajan 2001, section 5.4.2.
  */
 public final class NormalisedError {
-    private final FlatSpace space;
-    private final int[] components;
+  private final FlatSpace space;
+  private final int[] components;
 
-    private NormalisedError(FlatSpace space, int[] components) {
-        this.space = space;
-        this.components = components;
-    }
+  private NormalisedError(FlatSpace space, int[] components) {
+    this.space = space;
+    this.components = components;
+  }
 
-    /**
-     * The error of some components of a state.
-     *
-     * @param space where the state lives
-     * @param components distinct indices of the components whose truth is known; copied
-     * @return the measure
-     */
-    public static NormalisedError of(FlatSpace space, int... components) {
-        Checks.distinctIndices("components", components, space.dimension());
-        if (components.length == 0) {
-            throw new IllegalArgumentException("components must not be empty");
-        }
-        return new NormalisedError(space, components.clone());
+  /**
+   * The error of some components of a state.
+   *
+   * @param space where the state lives
+   * @param components distinct indices of the components whose truth is known; copied
+   * @return the measure
+   */
+  public static NormalisedError of(FlatSpace space, int... components) {
+    Checks.distinctIndices("components", components, space.dimension());
+    if (components.length == 0) {
+      throw new IllegalArgumentException("components must not be empty");
     }
+    return new NormalisedError(space, components.clone());
+  }
 
-    /** {@return the number of components} */
-    public int degreesOfFreedom() {
-        return components.length;
-    }
+  /** {@return the number of components} */
+  public int degreesOfFreedom() {
+    return components.length;
+  }
 
-    /**
-     * The normalised error squared of an estimate.
-     *
-     * @param estimate of the whole state
-     * @param truth of the chosen components, in their order
-     * @return e' P^-1 e
-     * @throws IllegalArgumentException if shapes differ or the covariance of the components is not
-     *     positive definite, where no normalised error exists
-     */
-    public double squared(Gaussian estimate, double[] truth) {
-        int k = components.length;
-        Checks.length("truth", truth, k);
-        if (estimate.dimension() != space.dimension()) {
-            throw new IllegalArgumentException(
-                    "estimate must have dimension " + space.dimension() + ", got " + estimate.dimension());
-        }
-        double[] mean = estimate.mean();
-        double[] actual = mean.clone();
-        DMatrixRMaj covariance = new DMatrixRMaj(k, k);
-        for (int i = 0; i < k; i++) {
-            actual[components[i]] = truth[i];
-            for (int j = 0; j < k; j++) {
-                covariance.set(i, j, estimate.covariance(components[i], components[j]));
-            }
-        }
-        LowerFactor factor = new LowerFactor(k);
-        if (!factor.factorDefinite(covariance)) {
-            throw new IllegalArgumentException(
-                    "covariance of the components is not positive definite: " + factor.failure());
-        }
-        double[] error = new double[space.dimension()];
-        space.difference(mean, actual, error);
-        double[] chosen = new double[k];
-        for (int i = 0; i < k; i++) {
-            chosen[i] = error[components[i]];
-        }
-        factor.solveLower(chosen);
-        double sum = 0;
-        for (double value : chosen) {
-            sum += value * value;
-        }
-        return sum;
+  /**
+   * The normalised error squared of an estimate.
+   *
+   * @param estimate of the whole state
+   * @param truth of the chosen components, in their order
+   * @return e' P^-1 e
+   * @throws IllegalArgumentException if shapes differ or the covariance of the components is not
+   *     positive definite, where no normalised error exists
+   */
+  public double squared(Gaussian estimate, double[] truth) {
+    int k = components.length;
+    Checks.length("truth", truth, k);
+    if (estimate.dimension() != space.dimension()) {
+      throw new IllegalArgumentException(
+          "estimate must have dimension " + space.dimension() + ", got " + estimate.dimension());
     }
+    double[] mean = estimate.mean();
+    double[] actual = mean.clone();
+    DMatrixRMaj covariance = new DMatrixRMaj(k, k);
+    for (int i = 0; i < k; i++) {
+      actual[components[i]] = truth[i];
+      for (int j = 0; j < k; j++) {
+        covariance.set(i, j, estimate.covariance(components[i], components[j]));
+      }
+    }
+    LowerFactor factor = new LowerFactor(k);
+    if (!factor.factorDefinite(covariance)) {
+      throw new IllegalArgumentException(
+          "covariance of the components is not positive definite: " + factor.failure());
+    }
+    double[] error = new double[space.dimension()];
+    space.difference(mean, actual, error);
+    double[] chosen = new double[k];
+    for (int i = 0; i < k; i++) {
+      chosen[i] = error[components[i]];
+    }
+    factor.solveLower(chosen);
+    double sum = 0;
+    for (double value : chosen) {
+      sum += value * value;
+    }
+    return sum;
+  }
 }

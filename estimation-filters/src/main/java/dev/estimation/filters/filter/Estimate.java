@@ -10,79 +10,78 @@ import dev.estimation.core.space.Space;
  * only by a step that is applied. <i>Confined to one thread</i> at a time.
  */
 public final class Estimate {
-    private final Moments moments;
-    private double time;
+  private final Moments moments;
+  private double time;
 
-    Estimate(Space space, double time, Gaussian initial) {
-        Checks.finite("time", time);
-        if (initial.dimension() != space.dimension()) {
-            throw new IllegalArgumentException(
-                    "initial estimate must have dimension " + space.dimension()
-                            + " to match the state, got " + initial.dimension());
-        }
-        this.time = time;
-        this.moments = new Moments(space);
-        moments.set(initial);
-        space.displace(moments.mean(), new double[space.dimension()], moments.changeMean());
+  Estimate(Space space, double time, Gaussian initial) {
+    Checks.finite("time", time);
+    if (initial.dimension() != space.dimension()) {
+      throw new IllegalArgumentException("initial estimate must have dimension " + space.dimension()
+          + " to match the state, got " + initial.dimension());
     }
+    this.time = time;
+    this.moments = new Moments(space);
+    moments.set(initial);
+    space.displace(moments.mean(), new double[space.dimension()], moments.changeMean());
+  }
 
-    /** {@return the time (s) for which this estimate holds} */
-    public double time() {
-        return time;
-    }
+  /** {@return the time (s) for which this estimate holds} */
+  public double time() {
+    return time;
+  }
 
-    /**
-     * {@return the mean of one component}
-     *
-     * @param index from 0
-     */
-    public double mean(int index) {
-        return moments.mean()[index];
-    }
+  /**
+   * {@return the mean of one component}
+   *
+   * @param index from 0
+   */
+  public double mean(int index) {
+    return moments.mean()[index];
+  }
 
-    /**
-     * {@return the covariance of two components}
-     *
-     * @param row from 0
-     * @param column from 0
-     */
-    public double covariance(int row, int column) {
-        return moments.covariance().get(row, column);
-    }
+  /**
+   * {@return the covariance of two components}
+   *
+   * @param row from 0
+   * @param column from 0
+   */
+  public double covariance(int row, int column) {
+    return moments.covariance().get(row, column);
+  }
 
-    /**
-     * {@return the standard deviation of one component}
-     *
-     * @param index from 0
-     */
-    public double standardDeviation(int index) {
-        return Math.sqrt(covariance(index, index));
-    }
+  /**
+   * {@return the standard deviation of one component}
+   *
+   * @param index from 0
+   */
+  public double standardDeviation(int index) {
+    return Math.sqrt(covariance(index, index));
+  }
 
-    /** {@return mean and covariance as an immutable value} */
-    public Gaussian toGaussian() {
-        return moments.toGaussian();
-    }
+  /** {@return mean and covariance as an immutable value} */
+  public Gaussian toGaussian() {
+    return moments.toGaussian();
+  }
 
-    Moments moments() {
-        return moments;
-    }
+  Moments moments() {
+    return moments;
+  }
 
-    void requireSpace(Space wanted) {
-        Space space = moments.space();
-        if (space != wanted && !space.equals(wanted)) {
-            throw new IllegalArgumentException(
-                    "estimate must live in the state space " + wanted + " of the plan, got " + space);
-        }
+  void requireSpace(Space wanted) {
+    Space space = moments.space();
+    if (space != wanted && !space.equals(wanted)) {
+      throw new IllegalArgumentException(
+          "estimate must live in the state space " + wanted + " of the plan, got " + space);
     }
+  }
 
-    void replace(double newTime, Moments newMoments) {
-        time = newTime;
-        moments.set(newMoments);
-    }
+  void replace(double newTime, Moments newMoments) {
+    time = newTime;
+    moments.set(newMoments);
+  }
 
-    @Override
-    public String toString() {
-        return "Estimate[t = " + time + " s, " + toGaussian() + "]";
-    }
+  @Override
+  public String toString() {
+    return "Estimate[t = " + time + " s, " + toGaussian() + "]";
+  }
 }

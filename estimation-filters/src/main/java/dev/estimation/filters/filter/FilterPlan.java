@@ -23,110 +23,111 @@ import dev.estimation.filters.model.MotionModel;
  * chapter 8.
  */
 public final class FilterPlan {
-    private final MotionModel motion;
-    private final MomentMatching matching;
-    private final double gateProbability;
+  private final MotionModel motion;
+  private final MomentMatching matching;
+  private final double gateProbability;
 
-    private FilterPlan(MotionModel motion, MomentMatching matching, double gateProbability) {
-        this.motion = motion;
-        this.matching = matching;
-        this.gateProbability = gateProbability;
-    }
+  private FilterPlan(MotionModel motion, MomentMatching matching, double gateProbability) {
+    this.motion = motion;
+    this.matching = matching;
+    this.gateProbability = gateProbability;
+  }
 
-    /**
-     * A filter on any matching, without a gate.
-     *
-     * @param motion how the state moves
-     * @param matching how moments are carried through both models
-     * @return the plan
-     * @throws IllegalArgumentException if the matching cannot serve the model
-     */
-    public static FilterPlan of(MotionModel motion, MomentMatching matching) {
-        FilterPlan plan = new FilterPlan(motion, matching, Double.NaN);
-        plan.workspace(); // a model that the matching cannot serve is refused here, not at the first step
-        return plan;
-    }
+  /**
+   * A filter on any matching, without a gate.
+   *
+   * @param motion how the state moves
+   * @param matching how moments are carried through both models
+   * @return the plan
+   * @throws IllegalArgumentException if the matching cannot serve the model
+   */
+  public static FilterPlan of(MotionModel motion, MomentMatching matching) {
+    FilterPlan plan = new FilterPlan(motion, matching, Double.NaN);
+    plan.workspace(); // a model that the matching cannot serve is refused here, not at the first
+    // step
+    return plan;
+  }
 
-    /**
-     * {@return the extended Kalman filter: first-order linearisation; models must know their Jacobians}
-     *
-     * @param motion how the state moves
-     */
-    public static FilterPlan extended(MotionModel motion) {
-        return of(motion, Linearisation.firstOrder());
-    }
+  /**
+   * {@return the extended Kalman filter: first-order linearisation; models must know their Jacobians}
+   *
+   * @param motion how the state moves
+   */
+  public static FilterPlan extended(MotionModel motion) {
+    return of(motion, Linearisation.firstOrder());
+  }
 
-    /**
-     * {@return the unscented Kalman filter with the scaled rule; see {@link UnscentedRule#scaled}}
-     *
-     * @param motion how the state moves
-     * @param alpha spread, above 0
-     * @param beta added to the covariance weight of the centre
-     * @param kappa above -n
-     */
-    public static FilterPlan unscented(MotionModel motion, double alpha, double beta, double kappa) {
-        return of(motion, PointMatching.of(UnscentedRule.scaled(alpha, beta, kappa)));
-    }
+  /**
+   * {@return the unscented Kalman filter with the scaled rule; see {@link UnscentedRule#scaled}}
+   *
+   * @param motion how the state moves
+   * @param alpha spread, above 0
+   * @param beta added to the covariance weight of the centre
+   * @param kappa above -n
+   */
+  public static FilterPlan unscented(MotionModel motion, double alpha, double beta, double kappa) {
+    return of(motion, PointMatching.of(UnscentedRule.scaled(alpha, beta, kappa)));
+  }
 
-    /**
-     * {@return the cubature Kalman filter of degree 3}
-     *
-     * @param motion how the state moves
-     */
-    public static FilterPlan cubature(MotionModel motion) {
-        return of(motion, PointMatching.of(CubatureRule.degreeThree()));
-    }
+  /**
+   * {@return the cubature Kalman filter of degree 3}
+   *
+   * @param motion how the state moves
+   */
+  public static FilterPlan cubature(MotionModel motion) {
+    return of(motion, PointMatching.of(CubatureRule.degreeThree()));
+  }
 
-    /**
-     * {@return the Gauss-Hermite filter with a number of nodes on each axis}
-     *
-     * @param motion how the state moves
-     * @param nodesPerAxis p: a step costs p^k evaluations for k active inputs
-     */
-    public static FilterPlan gaussHermite(MotionModel motion, int nodesPerAxis) {
-        return of(motion, PointMatching.of(GaussHermiteRule.product(nodesPerAxis)));
-    }
+  /**
+   * {@return the Gauss-Hermite filter with a number of nodes on each axis}
+   *
+   * @param motion how the state moves
+   * @param nodesPerAxis p: a step costs p^k evaluations for k active inputs
+   */
+  public static FilterPlan gaussHermite(MotionModel motion, int nodesPerAxis) {
+    return of(motion, PointMatching.of(GaussHermiteRule.product(nodesPerAxis)));
+  }
 
-    /**
-     * This plan with a gate on updates: a measurement whose normalised innovation squared is above the
-     * chi-square quantile of the given probability is rejected.
-     *
-     * @param probability of passing for an honest filter, in (0, 1), e.g. 0.999
-     * @return the plan with a gate
-     */
-    public FilterPlan withGate(double probability) {
-        ChiSquareBounds.upperLimit(probability, 1);
-        return new FilterPlan(motion, matching, probability);
-    }
+  /**
+   * This plan with a gate on updates: a measurement whose normalised innovation squared is above the
+   * chi-square quantile of the given probability is rejected.
+   *
+   * @param probability of passing for an honest filter, in (0, 1), e.g. 0.999
+   * @return the plan with a gate
+   */
+  public FilterPlan withGate(double probability) {
+    ChiSquareBounds.upperLimit(probability, 1);
+    return new FilterPlan(motion, matching, probability);
+  }
 
-    /** {@return scratch for one thread} */
-    public FilterWorkspace workspace() {
-        return new FilterWorkspace(this);
-    }
+  /** {@return scratch for one thread} */
+  public FilterWorkspace workspace() {
+    return new FilterWorkspace(this);
+  }
 
-    /**
-     * A new track.
-     *
-     * @param time of the estimate (s), finite
-     * @param initial mean and covariance; angles are brought into [-pi, pi)
-     * @return the estimate of the track
-     */
-    public Estimate start(double time, Gaussian initial) {
-        return new Estimate(motion.stateSpace(), time, initial);
-    }
+  /**
+   * A new track.
+   *
+   * @param time of the estimate (s), finite
+   * @param initial mean and covariance; angles are brought into [-pi, pi)
+   * @return the estimate of the track
+   */
+  public Estimate start(double time, Gaussian initial) {
+    return new Estimate(motion.stateSpace(), time, initial);
+  }
 
-    MotionModel motion() {
-        return motion;
-    }
+  MotionModel motion() {
+    return motion;
+  }
 
-    MomentMatching matching() {
-        return matching;
-    }
+  MomentMatching matching() {
+    return matching;
+  }
 
-    /** The limit of the normalised innovation squared; infinite without a gate. */
-    double gateLimit(int degreesOfFreedom) {
-        return Double.isNaN(gateProbability)
-                ? Double.POSITIVE_INFINITY
-                : ChiSquareBounds.upperLimit(gateProbability, degreesOfFreedom);
-    }
+  /** The limit of the normalised innovation squared; infinite without a gate. */
+  double gateLimit(int degreesOfFreedom) {
+    return Double.isNaN(gateProbability)
+        ? Double.POSITIVE_INFINITY
+        : ChiSquareBounds.upperLimit(gateProbability, degreesOfFreedom);
+  }
 }

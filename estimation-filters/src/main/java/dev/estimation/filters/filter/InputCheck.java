@@ -4,22 +4,22 @@ import dev.estimation.core.internal.Checks;
 
 /** Notices a number from outside that is not finite, and remembers which it was. */
 final class InputCheck {
-    private String name = "";
-    private int index;
-    private double value;
+  private String name = "";
+  private int index;
+  private double value;
 
-    boolean isFinite(String what, double[] values) {
-        int bad = Checks.firstNotFinite(values);
-        if (bad < 0) {
-            return true;
-        }
-        name = what;
-        index = bad;
-        value = values[bad];
-        return false;
+  boolean isFinite(String what, double[] values) {
+    int bad = Checks.firstNotFinite(values);
+    if (bad < 0) {
+      return true;
     }
+    name = what;
+    index = bad;
+    value = values[bad];
+    return false;
+  }
 
-    String failure() {
-        return name + "[" + index + "] must be finite, got " + value;
-    }
+  String failure() {
+    return name + "[" + index + "] must be finite, got " + value;
+  }
 }

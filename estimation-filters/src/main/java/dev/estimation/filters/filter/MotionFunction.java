@@ -7,33 +7,32 @@ import dev.estimation.filters.model.MotionModel;
 
 /** A motion model over a set time: given is the control. Owned by one workspace. */
 final class MotionFunction implements VectorFunction {
-    private final MotionModel model;
-    private double time;
-    private double dt;
+  private final MotionModel model;
+  private double time;
+  private double dt;
 
-    MotionFunction(MotionModel model) {
-        this.model = model;
-    }
+  MotionFunction(MotionModel model) {
+    this.model = model;
+  }
 
-    void over(double start, double duration) {
-        time = start;
-        dt = duration;
-    }
+  void over(double start, double duration) {
+    time = start;
+    dt = duration;
+  }
 
-    @Override
-    public void evaluate(double[] state, double[] control, double[] next) {
-        model.move(state, control, time, dt, next);
-    }
+  @Override
+  public void evaluate(double[] state, double[] control, double[] next) {
+    model.move(state, control, time, dt, next);
+  }
 
-    @Override
-    public Structure structure() {
-        if (model instanceof DifferentiableMotion) {
-            DifferentiableMotion differentiable = (DifferentiableMotion) model;
-            return model.structure()
-                    .withJacobian(
-                            (state, control, jacobian) ->
-                                    differentiable.moveJacobian(state, control, time, dt, jacobian));
-        }
-        return model.structure();
+  @Override
+  public Structure structure() {
+    if (model instanceof DifferentiableMotion differentiable) {
+      return model
+          .structure()
+          .withJacobian((state, control, jacobian) ->
+              differentiable.moveJacobian(state, control, time, dt, jacobian));
     }
+    return model.structure();
+  }
 }

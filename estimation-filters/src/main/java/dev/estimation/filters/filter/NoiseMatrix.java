@@ -7,73 +7,74 @@ import org.ejml.data.DMatrixRMaj;
 
 /** A noise covariance that a model fills, and the check that it is one. */
 final class NoiseMatrix {
-    private final String name;
-    private final DMatrixRMaj matrix;
-    private final LowerFactor factor;
-    private final boolean definite;
+  private final String name;
+  private final DMatrixRMaj matrix;
+  private final LowerFactor factor;
+  private final boolean definite;
 
-    /**
-     * Room for a noise covariance.
-     *
-     * @param definite whether zero variances are refused
-     */
-    NoiseMatrix(String name, int dimension, boolean definite) {
-        this.name = name;
-        this.matrix = new DMatrixRMaj(dimension, dimension);
-        this.factor = new LowerFactor(dimension);
-        this.definite = definite;
-    }
+  /**
+   * Room for a noise covariance.
+   *
+   * @param definite whether zero variances are refused
+   */
+  NoiseMatrix(String name, int dimension, boolean definite) {
+    this.name = name;
+    this.matrix = new DMatrixRMaj(dimension, dimension);
+    this.factor = new LowerFactor(dimension);
+    this.definite = definite;
+  }
 
-    /** The array for the model to fill, all zeros. */
-    double[] blank() {
-        Arrays.fill(matrix.data, 0);
-        return matrix.data;
-    }
+  /** The array for the model to fill, all zeros. */
+  double[] blank() {
+    Arrays.fill(matrix.data, 0);
+    return matrix.data;
+  }
 
-    boolean isValid() {
-        return SymmetricMatrix.firstNotFinite(matrix) < 0
-                && firstBadVariance() < 0
-                && SymmetricMatrix.firstAsymmetric(matrix) < 0
-                && (definite ? factor.factorDefinite(matrix) : factor.factorSemidefinite(matrix));
-    }
+  boolean isValid() {
+    return SymmetricMatrix.firstNotFinite(matrix) < 0
+        && firstBadVariance() < 0
+        && SymmetricMatrix.firstAsymmetric(matrix) < 0
+        && (definite ? factor.factorDefinite(matrix) : factor.factorSemidefinite(matrix));
+  }
 
-    private int firstBadVariance() {
-        int n = matrix.numRows;
-        for (int i = 0; i < n; i++) {
-            double variance = matrix.data[i * (n + 1)];
-            if (!(definite ? variance > 0 : variance >= 0)) {
-                return i * (n + 1);
-            }
-        }
-        return -1;
+  private int firstBadVariance() {
+    int n = matrix.numRows;
+    for (int i = 0; i < n; i++) {
+      double variance = matrix.data[i * (n + 1)];
+      if (!(definite ? variance > 0 : variance >= 0)) {
+        return i * (n + 1);
+      }
     }
+    return -1;
+  }
 
-    DMatrixRMaj matrix() {
-        return matrix;
-    }
+  DMatrixRMaj matrix() {
+    return matrix;
+  }
 
-    /** What was wrong when {@link #isValid()} was false. */
-    String failure() {
-        int n = matrix.numRows;
-        int bad = SymmetricMatrix.firstNotFinite(matrix);
-        int badVariance = firstBadVariance();
-        int wrong = bad >= 0 ? bad : badVariance;
-        if (wrong >= 0) {
-            String wanted = wrong % (n + 1) == 0 ? (definite ? "finite and > 0" : "finite and >= 0") : "finite";
-            return place(wrong) + " must be " + wanted + ", got " + matrix.data[wrong];
-        }
-        int odd = SymmetricMatrix.firstAsymmetric(matrix);
-        if (odd >= 0) {
-            int mirror = odd % n * n + odd / n;
-            return name + " must be symmetric, got " + place(odd) + " = " + matrix.data[odd] + " and "
-                    + place(mirror) + " = " + matrix.data[mirror];
-        }
-        return name + " is not positive " + (definite ? "definite: " : "semi-definite: ")
-                + factor.failure();
+  /** What was wrong when {@link #isValid()} was false. */
+  String failure() {
+    int n = matrix.numRows;
+    int bad = SymmetricMatrix.firstNotFinite(matrix);
+    int badVariance = firstBadVariance();
+    int wrong = bad >= 0 ? bad : badVariance;
+    if (wrong >= 0) {
+      String wanted =
+          wrong % (n + 1) == 0 ? (definite ? "finite and > 0" : "finite and >= 0") : "finite";
+      return place(wrong) + " must be " + wanted + ", got " + matrix.data[wrong];
     }
+    int odd = SymmetricMatrix.firstAsymmetric(matrix);
+    if (odd >= 0) {
+      int mirror = odd % n * n + odd / n;
+      return name + " must be symmetric, got " + place(odd) + " = " + matrix.data[odd] + " and "
+          + place(mirror) + " = " + matrix.data[mirror];
+    }
+    return name + " is not positive " + (definite ? "definite: " : "semi-definite: ")
+        + factor.failure();
+  }
 
-    private String place(int index) {
-        int n = matrix.numRows;
-        return name + "[" + index / n + "][" + index % n + "]";
-    }
+  private String place(int index) {
+    int n = matrix.numRows;
+    return name + "[" + index / n + "][" + index % n + "]";
+  }
 }

@@ -4,39 +4,34 @@ import dev.estimation.core.matching.MatchingStatus;
 
 /** How a step ended. Only {@link #APPLIED} changes the estimate. */
 public enum StepStatus {
-    /** The estimate has changed (or the prediction was over no time). */
-    APPLIED,
-    /** The gate rejected the measurement. Usual causes: an outlier, an overconfident estimate. */
-    GATED,
-    /** The time of the step lies before the estimate. Usual cause: late data. */
-    TIME_BEFORE_ESTIMATE,
-    /** The time of the step is NaN or infinite. */
-    TIME_NOT_FINITE,
-    /** A measurement, a given or a control is NaN or infinite. Usual cause: bad input. */
-    INPUT_NOT_FINITE,
-    /** The model gave NaN or infinity, or left a component out. Usual cause: a fault in the plug-in. */
-    MODEL_NOT_FINITE,
-    /** Process or measurement noise is not a covariance. Usual cause: a fault in the plug-in. */
-    NOISE_NOT_VALID,
-    /**
-     * The covariance of the innovation is not positive definite, or that of the result not positive
-     * semi-definite. Usual causes: negative weights, measurements far more accurate than the estimate.
-     */
-    NOT_DEFINITE,
-    /** The result overflows. Usual causes: an innovation or a variance of absurd size. */
-    RESULT_NOT_FINITE;
+  /** The estimate has changed (or the prediction was over no time). */
+  APPLIED,
+  /** The gate rejected the measurement. Usual causes: an outlier, an overconfident estimate. */
+  GATED,
+  /** The time of the step lies before the estimate. Usual cause: late data. */
+  TIME_BEFORE_ESTIMATE,
+  /** The time of the step is NaN or infinite. */
+  TIME_NOT_FINITE,
+  /** A measurement, a given or a control is NaN or infinite. Usual cause: bad input. */
+  INPUT_NOT_FINITE,
+  /** The model gave NaN or infinity, or left a component out. Usual cause: a fault in the plug-in. */
+  MODEL_NOT_FINITE,
+  /** Process or measurement noise is not a covariance. Usual cause: a fault in the plug-in. */
+  NOISE_NOT_VALID,
+  /**
+   * The covariance of the innovation is not positive definite, or that of the result not positive
+   * semi-definite. Usual causes: negative weights, measurements far more accurate than the estimate.
+   */
+  NOT_DEFINITE,
+  /** The result overflows. Usual causes: an innovation or a variance of absurd size. */
+  RESULT_NOT_FINITE;
 
-    static StepStatus of(MatchingStatus matched) {
-        switch (matched) {
-            case MATCHED:
-                return APPLIED;
-            case FUNCTION_NOT_FINITE:
-            case JACOBIAN_NOT_FINITE:
-                return MODEL_NOT_FINITE;
-            case INPUT_NOT_DEFINITE:
-                return NOT_DEFINITE;
-            default:
-                return RESULT_NOT_FINITE;
-        }
-    }
+  static StepStatus of(MatchingStatus matched) {
+    return switch (matched) {
+      case MATCHED -> APPLIED;
+      case FUNCTION_NOT_FINITE, JACOBIAN_NOT_FINITE -> MODEL_NOT_FINITE;
+      case INPUT_NOT_DEFINITE -> NOT_DEFINITE;
+      case INPUT_NOT_FINITE, OUTPUT_NOT_FINITE -> RESULT_NOT_FINITE;
+    };
+  }
 }

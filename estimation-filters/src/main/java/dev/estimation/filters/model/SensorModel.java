@@ -11,35 +11,35 @@ import dev.estimation.core.space.Space;
  * not keep state that changes. A model that also has a Jacobian is a {@link DifferentiableSensor}.
  */
 public interface SensorModel {
-    /** {@return where measurements live: which components are angles} */
-    Space measurementSpace();
+  /** {@return where measurements live: which components are angles} */
+  Space measurementSpace();
 
-    /** {@return the length of {@code given}; 0 if nothing is} */
-    default int givenDimension() {
-        return 0;
-    }
+  /** {@return the length of {@code given}; 0 if nothing is} */
+  default int givenDimension() {
+    return 0;
+  }
 
-    /**
-     * Fills {@code measurement} with h(state, given).
-     *
-     * @param state read, never kept
-     * @param given read, never kept
-     * @param measurement filled; arrives filled with NaN, so that a component left out is noticed
-     */
-    void measure(double[] state, double[] given, double[] measurement);
+  /**
+   * Fills {@code measurement} with h(state, given).
+   *
+   * @param state read, never kept
+   * @param given read, never kept
+   * @param measurement filled; arrives filled with NaN, so that a component left out is noticed
+   */
+  void measure(double[] state, double[] given, double[] measurement);
 
-    /**
-     * Fills {@code covariance} with R, symmetric and positive definite.
-     *
-     * @param state the predicted mean, read, never kept
-     * @param given read, never kept
-     * @param covariance filled, m x m row by row, m the dimension of the measurement space; arrives
-     *     filled with zeros
-     */
-    void measurementNoise(double[] state, double[] given, double[] covariance);
+  /**
+   * Fills {@code covariance} with R, symmetric and positive definite.
+   *
+   * @param state the predicted mean, read, never kept
+   * @param given read, never kept
+   * @param covariance filled, m x m row by row, m the dimension of the measurement space; arrives
+   *     filled with zeros
+   */
+  void measurementNoise(double[] state, double[] given, double[] covariance);
 
-    /** {@return the components of the state that {@link #measure} reads; all unless said otherwise} */
-    default Structure structure() {
-        return Structure.UNKNOWN;
-    }
+  /** {@return the components of the state that {@link #measure} reads; all unless said otherwise} */
+  default Structure structure() {
+    return Structure.UNKNOWN;
+  }
 }

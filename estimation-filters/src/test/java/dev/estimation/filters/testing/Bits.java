@@ -4,19 +4,19 @@ import dev.estimation.filters.filter.Estimate;
 
 /** The exact bits of an estimate, for checks that nothing at all has changed. */
 public final class Bits {
-    private Bits() {}
+  private Bits() {}
 
-    /** Time, mean and covariance as raw bits. */
-    public static long[] of(Estimate estimate, int dimension) {
-        long[] bits = new long[1 + dimension + dimension * dimension];
-        int next = 0;
-        bits[next++] = Double.doubleToRawLongBits(estimate.time());
-        for (int i = 0; i < dimension; i++) {
-            bits[next++] = Double.doubleToRawLongBits(estimate.mean(i));
-            for (int j = 0; j < dimension; j++) {
-                bits[next++] = Double.doubleToRawLongBits(estimate.covariance(i, j));
-            }
-        }
-        return bits;
+  /** Time, mean and covariance as raw bits. */
+  public static long[] of(Estimate estimate, int dimension) {
+    long[] bits = new long[1 + dimension + dimension * dimension];
+    int next = 0;
+    bits[next++] = Double.doubleToRawLongBits(estimate.time());
+    for (int i = 0; i < dimension; i++) {
+      bits[next++] = Double.doubleToRawLongBits(estimate.mean(i));
+      for (int j = 0; j < dimension; j++) {
+        bits[next++] = Double.doubleToRawLongBits(estimate.covariance(i, j));
+      }
     }
+    return bits;
+  }
 }

@@ -12,29 +12,26 @@ import org.junit.jupiter.api.Named;
 
 /** Every matching of the library, each over active inputs and over the whole input. */
 public final class Matchings {
-    private Matchings() {}
+  private Matchings() {}
 
-    /** All of them, by name. */
-    public static List<Named<MomentMatching>> all() {
-        List<Named<MomentMatching>> over = new ArrayList<>();
-        for (Named<MomentMatching> named : overActiveInputs()) {
-            over.add(named);
-            over.add(
-                    Named.of(
-                            named.getName() + ", whole state",
-                            named.getPayload().overWholeInput()));
-        }
-        return over;
+  /** All of them, by name. */
+  public static List<Named<MomentMatching>> all() {
+    List<Named<MomentMatching>> over = new ArrayList<>();
+    for (Named<MomentMatching> named : overActiveInputs()) {
+      over.add(named);
+      over.add(Named.of(named.getName() + ", whole state", named.getPayload().overWholeInput()));
     }
+    return over;
+  }
 
-    /** All of them over active inputs. */
-    public static List<Named<MomentMatching>> overActiveInputs() {
-        return List.of(
-                Named.of("linearisation", Linearisation.firstOrder()),
-                Named.of("unscented 1, 2, 0", PointMatching.of(UnscentedRule.scaled(1, 2, 0))),
-                Named.of("unscented 0.5, 2, 1", PointMatching.of(UnscentedRule.scaled(0.5, 2, 1))),
-                Named.of("unscented 1, 0, 3-n", PointMatching.of(UnscentedRule.scaled(1, 0, n -> 3 - n))),
-                Named.of("cubature", PointMatching.of(CubatureRule.degreeThree())),
-                Named.of("Gauss-Hermite 3", PointMatching.of(GaussHermiteRule.product(3))));
-    }
+  /** All of them over active inputs. */
+  public static List<Named<MomentMatching>> overActiveInputs() {
+    return List.of(
+        Named.of("linearisation", Linearisation.firstOrder()),
+        Named.of("unscented 1, 2, 0", PointMatching.of(UnscentedRule.scaled(1, 2, 0))),
+        Named.of("unscented 0.5, 2, 1", PointMatching.of(UnscentedRule.scaled(0.5, 2, 1))),
+        Named.of("unscented 1, 0, 3-n", PointMatching.of(UnscentedRule.scaled(1, 0, n -> 3 - n))),
+        Named.of("cubature", PointMatching.of(CubatureRule.degreeThree())),
+        Named.of("Gauss-Hermite 3", PointMatching.of(GaussHermiteRule.product(3))));
+  }
 }

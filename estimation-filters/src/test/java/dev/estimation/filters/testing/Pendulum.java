@@ -11,60 +11,60 @@ import dev.estimation.filters.model.DifferentiableSensor;
  * hand, from public pages that cite the book). The angle is a plain real there.
  */
 public final class Pendulum implements DifferentiableMotion {
-    private static final double GRAVITY = 9.81;
-    private static final double DENSITY = 0.01;
+  private static final double GRAVITY = 9.81;
+  private static final double DENSITY = 0.01;
+
+  @Override
+  public Space stateSpace() {
+    return Space.reals(2);
+  }
+
+  @Override
+  public void move(double[] state, double[] control, double time, double dt, double[] next) {
+    next[0] = state[0] + state[1] * dt;
+    next[1] = state[1] - GRAVITY * Math.sin(state[0]) * dt;
+  }
+
+  @Override
+  public void moveJacobian(
+      double[] state, double[] control, double time, double dt, double[] jacobian) {
+    jacobian[0] = 1;
+    jacobian[1] = dt;
+    jacobian[2] = -GRAVITY * Math.cos(state[0]) * dt;
+    jacobian[3] = 1;
+  }
+
+  @Override
+  public void processNoise(
+      double[] state, double[] control, double time, double dt, double[] covariance) {
+    new ConstantVelocity(DENSITY).processNoise(state, control, time, dt, covariance);
+  }
+
+  /** The sine of the angle, variance 0.1. */
+  public static final class SideView implements DifferentiableSensor {
+    @Override
+    public Space measurementSpace() {
+      return Space.reals(1);
+    }
 
     @Override
-    public Space stateSpace() {
-        return Space.reals(2);
+    public void measure(double[] state, double[] given, double[] measurement) {
+      measurement[0] = Math.sin(state[0]);
     }
 
     @Override
-    public void move(double[] state, double[] control, double time, double dt, double[] next) {
-        next[0] = state[0] + state[1] * dt;
-        next[1] = state[1] - GRAVITY * Math.sin(state[0]) * dt;
+    public void measureJacobian(double[] state, double[] given, double[] jacobian) {
+      jacobian[0] = Math.cos(state[0]);
     }
 
     @Override
-    public void moveJacobian(
-            double[] state, double[] control, double time, double dt, double[] jacobian) {
-        jacobian[0] = 1;
-        jacobian[1] = dt;
-        jacobian[2] = -GRAVITY * Math.cos(state[0]) * dt;
-        jacobian[3] = 1;
+    public void measurementNoise(double[] state, double[] given, double[] covariance) {
+      covariance[0] = 0.1;
     }
 
     @Override
-    public void processNoise(
-            double[] state, double[] control, double time, double dt, double[] covariance) {
-        new ConstantVelocity(DENSITY).processNoise(state, control, time, dt, covariance);
+    public Structure structure() {
+      return Structure.UNKNOWN.withActiveInputs(0);
     }
-
-    /** The sine of the angle, variance 0.1. */
-    public static final class SideView implements DifferentiableSensor {
-        @Override
-        public Space measurementSpace() {
-            return Space.reals(1);
-        }
-
-        @Override
-        public void measure(double[] state, double[] given, double[] measurement) {
-            measurement[0] = Math.sin(state[0]);
-        }
-
-        @Override
-        public void measureJacobian(double[] state, double[] given, double[] jacobian) {
-            jacobian[0] = Math.cos(state[0]);
-        }
-
-        @Override
-        public void measurementNoise(double[] state, double[] given, double[] covariance) {
-            covariance[0] = 0.1;
-        }
-
-        @Override
-        public Structure structure() {
-            return Structure.UNKNOWN.withActiveInputs(0);
-        }
-    }
+  }
 }

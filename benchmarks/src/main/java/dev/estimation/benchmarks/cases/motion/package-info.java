@@ -1,0 +1,2 @@
+/** Motion models that several cases share. */
+package dev.estimation.benchmarks.cases.motion;

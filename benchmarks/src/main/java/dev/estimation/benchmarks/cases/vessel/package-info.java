@@ -1,0 +1,2 @@
+/** A vessel tracked by the radar of another vessel. */
+package dev.estimation.benchmarks.cases.vessel;

@@ -1,0 +1,132 @@
+package dev.estimation.benchmarks.jmh;
+
+import dev.estimation.core.internal.LowerFactor;
+import dev.estimation.core.internal.Products;
+import java.util.SplittableRandom;
+import java.util.concurrent.TimeUnit;
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+import org.ejml.dense.row.decomposition.TriangularSolver_DDRM;
+import org.ejml.dense.row.decomposition.chol.CholeskyDecompositionInner_DDRM;
+import org.ejml.dense.row.mult.MatrixMultProduct_DDRM;
+import org.openjdk.jmh.annotations.Benchmark;
+import org.openjdk.jmh.annotations.BenchmarkMode;
+import org.openjdk.jmh.annotations.Mode;
+import org.openjdk.jmh.annotations.OutputTimeUnit;
+import org.openjdk.jmh.annotations.Param;
+import org.openjdk.jmh.annotations.Scope;
+import org.openjdk.jmh.annotations.Setup;
+import org.openjdk.jmh.annotations.State;
+
+/** The library's own small kernels beside EJML's for the same result. */
+@State(Scope.Thread)
+@BenchmarkMode(Mode.AverageTime)
+@OutputTimeUnit(TimeUnit.NANOSECONDS)
+public class KernelBenchmark {
+  /** Rows and columns. */
+  @Param({"2", "5", "9", "15"})
+  int n;
+
+  private DMatrixRMaj covariance;
+  private DMatrixRMaj tall;
+  private DMatrixRMaj result;
+  private DMatrixRMaj copy;
+  private double[] vector;
+  private double[] solution;
+  private DMatrixRMaj column;
+  private LowerFactor ours;
+  private CholeskyDecompositionInner_DDRM theirs;
+
+  /** A random covariance of condition about 10, and a tall matrix of two columns. */
+  @Setup
+  public void fill() {
+    SplittableRandom random = new SplittableRandom(1);
+    DMatrixRMaj root = new DMatrixRMaj(n, 2 * n);
+    for (int i = 0; i < root.getNumElements(); i++) {
+      root.data[i] = random.nextGaussian();
+    }
+    covariance = new DMatrixRMaj(n, n);
+    CommonOps_DDRM.multTransB(root, root, covariance);
+    tall = new DMatrixRMaj(n, 2, true, random.doubles(2L * n).toArray());
+    result = new DMatrixRMaj(n, n);
+    copy = new DMatrixRMaj(n, n);
+    vector = random.doubles(n).toArray();
+    solution = new double[n];
+    column = DMatrixRMaj.wrap(n, 1, vector.clone());
+    ours = new LowerFactor(n);
+    theirs = new CholeskyDecompositionInner_DDRM(true);
+    ours.factorDefinite(covariance);
+  }
+
+  /** The lower Cholesky factor, the covariance kept. */
+  @Benchmark
+  public boolean factorOurs() {
+    return ours.factorDefinite(covariance);
+  }
+
+  /** The same: EJML overwrites, so the covariance is copied first. */
+  @Benchmark
+  public boolean factorEjml() {
+    copy.setTo(covariance);
+    return theirs.decompose(copy);
+  }
+
+  /** Forward substitution in place, from a copy of the right side. */
+  @Benchmark
+  public double[] solveOurs() {
+    System.arraycopy(vector, 0, solution, 0, n);
+    ours.solveLower(solution);
+    return solution;
+  }
+
+  /** The same. */
+  @Benchmark
+  public double[] solveEjml() {
+    System.arraycopy(vector, 0, solution, 0, n);
+    TriangularSolver_DDRM.solveL(ours.columns().data, solution, n);
+    return solution;
+  }
+
+  /** The lower triangle plus w v v'. */
+  @Benchmark
+  public double[] squareOurs() {
+    Products.addSquare(0.5, vector, result.data);
+    return result.data;
+  }
+
+  /** The whole matrix plus w v v', the only form there is. */
+  @Benchmark
+  public DMatrixRMaj squareEjml() {
+    CommonOps_DDRM.multAddTransB(0.5, column, column, result);
+    return result;
+  }
+
+  /** P - A A', lower triangle, A of two columns. */
+  @Benchmark
+  public double[] differenceOurs() {
+    Products.fillDifference(covariance.data, tall.data, n, 2, result.data);
+    return result.data;
+  }
+
+  /** P - A A', whole. */
+  @Benchmark
+  public DMatrixRMaj differenceEjml() {
+    result.setTo(covariance);
+    CommonOps_DDRM.multAddTransB(-1, tall, tall, result);
+    return result;
+  }
+
+  /** The lower triangle of A'A, A square. */
+  @Benchmark
+  public double[] innerOurs() {
+    Products.fillInnerProduct(covariance.data, n, n, result.data);
+    return result.data;
+  }
+
+  /** A'A, mirrored. */
+  @Benchmark
+  public DMatrixRMaj innerEjml() {
+    MatrixMultProduct_DDRM.inner_small(covariance, result);
+    return result;
+  }
+}

@@ -1,0 +1,16 @@
+package dev.estimation.benchmarks.replay;
+
+import java.util.List;
+
+/** A kind of problem, on one log or simulated, in one or more variants. */
+public interface ReplayCase {
+  /** {@return the names of the variants, in the order in which they are shown} */
+  List<String> variants();
+
+  /**
+   * Makes one variant.
+   *
+   * @param variant one of {@link #variants()}
+   */
+  LoadedVariant load(String variant);
+}

@@ -1,0 +1,67 @@
+package dev.estimation.benchmarks.study;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
+import dev.estimation.benchmarks.log.BadInputException;
+import java.io.IOException;
+import java.nio.file.FileAlreadyExistsException;
+import java.nio.file.Files;
+import java.nio.file.InvalidPathException;
+import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
+
+/** The folder for results. A file appears in it whole or not at all. */
+final class ResultsFolder {
+  private static final String NAME = "results.json";
+
+  private final Path folder;
+
+  private ResultsFolder(Path folder) {
+    this.folder = folder;
+  }
+
+  /** Makes the folder where it does not exist yet; tells early that nothing can be written there. */
+  static ResultsFolder prepare(String typed) {
+    try {
+      Path folder = Files.createDirectories(Path.of(typed));
+      if (!Files.isWritable(folder)) {
+        throw new BadInputException("results folder is not writable: " + typed);
+      }
+      return new ResultsFolder(folder);
+    } catch (FileAlreadyExistsException file) {
+      throw new BadInputException("results folder is a file: " + typed, file);
+    } catch (IOException | InvalidPathException refused) {
+      throw new BadInputException(
+          "results folder cannot be made: " + typed + " (" + reason(refused) + ")", refused);
+    }
+  }
+
+  /** Writes aside, then moves into place over any earlier file. Returns the file. */
+  Path write(JsonNode document) {
+    Path file = folder.resolve(NAME);
+    Path aside = folder.resolve(NAME + "." + ProcessHandle.current().pid() + ".part");
+    try {
+      Files.writeString(
+          aside,
+          new ObjectMapper().writerWithDefaultPrettyPrinter().writeValueAsString(document) + "\n");
+      return Files.move(
+          aside, file, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
+    } catch (IOException refused) {
+      discard(aside, refused);
+      throw new BadInputException(
+          "results cannot be written: " + file + " (" + reason(refused) + ")", refused);
+    }
+  }
+
+  private static void discard(Path aside, IOException reason) {
+    try {
+      Files.deleteIfExists(aside);
+    } catch (IOException second) {
+      reason.addSuppressed(second);
+    }
+  }
+
+  private static String reason(Exception refused) {
+    return refused.getClass().getSimpleName() + ": " + refused.getMessage();
+  }
+}

@@ -1,0 +1,87 @@
+package dev.estimation.core.matching;
+
+import dev.estimation.core.function.VectorFunction;
+import java.util.Arrays;
+
+/**
+ * What a contract test has to know of a matching, and how far rounding may take its results.
+ *
+ * <p>Three numbers tell the rounding: how far from the mean the function is evaluated (the nearer, the
+ * fewer digits a deviation has), by how much weights amplify the rounding of the function, and how many
+ * inputs are carried. {@link #ROUNDINGS} covers the constants of sums over points and inputs.
+ */
+interface MatchingUnderTest {
+  /** Units of eps that a result may be off beside the named factors: sums of up to 5^8 terms. */
+  double ROUNDINGS = 64 * 0x1p-52;
+
+  /** The matching, with a scale for each input in case it takes differences. */
+  MomentMatching matching(double... inputScales);
+
+  /** The function as this matching is to see it, e.g. without its Jacobian. */
+  default VectorFunction offered(VectorFunction function) {
+    return function;
+  }
+
+  /** Evaluations that a call costs when this many inputs are carried. */
+  int evaluations(int carried);
+
+  /** Jacobians that a call costs. */
+  default int jacobians() {
+    return 0;
+  }
+
+  /** The smallest distance from the mean of an evaluation, in standard deviations or scales. */
+  double spread(int carried);
+
+  /** By how much the rounding of the function is multiplied in the mean. */
+  double amplification(int carried);
+
+  /** How many inputs are carried when a function reads some of all. */
+  default int carried(int active, int whole) {
+    return active;
+  }
+
+  /** The most inputs that tests carry. */
+  default int largestDimension() {
+    return 8;
+  }
+
+  /** The largest mean, in standard deviations, at which a covariance still has a digit. */
+  default double largestOffset() {
+    return 1e9;
+  }
+
+  /** The absolute error that rounding may make in a mean where numbers have the given magnitude. */
+  default double meanRounding(int carried, double magnitude) {
+    return ROUNDINGS * amplification(carried) * magnitude;
+  }
+
+  /**
+   * The error that rounding may make in a covariance, relative to sqrt(p_ii p_jj): that of deviations,
+   * and the square of that of the mean, which enters as a factor times delta delta'.
+   *
+   * @param magnitude the largest number among inputs and outputs
+   * @param deviation the smallest standard deviation of those
+   */
+  default double covarianceRounding(int carried, double magnitude, double deviation) {
+    double digits = magnitude / deviation;
+    double mean = ROUNDINGS * amplification(carried) * digits;
+    return ROUNDINGS * (carried + digits / spread(carried)) + 3 * mean * mean;
+  }
+
+  /**
+   * The same where the function bends: the shift of the mean, of a deviation at most, is squared with
+   * its rounding, times beta - alpha^2, 3 at most.
+   */
+  default double bentCovarianceRounding(int carried, double magnitude, double deviation) {
+    double mean = ROUNDINGS * amplification(carried) * magnitude / deviation;
+    return covarianceRounding(carried, magnitude, deviation) + 6 * mean;
+  }
+
+  /** Scales of 1 for every input. */
+  static double[] unitScales(int inputs) {
+    double[] scales = new double[inputs];
+    Arrays.fill(scales, 1);
+    return scales;
+  }
+}

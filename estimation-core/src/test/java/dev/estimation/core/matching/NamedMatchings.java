@@ -1,0 +1,38 @@
+package dev.estimation.core.matching;
+
+import dev.estimation.core.points.CubatureRule;
+import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.UnscentedRule;
+
+/** The matchings that reference tables name, e.g. "unscented 0.5 2 0" for alpha, beta and kappa. */
+final class NamedMatchings {
+  private NamedMatchings() {}
+
+  static MomentMatching of(String name) {
+    String[] words = name.split(" ");
+    switch (words[0]) {
+      case "linearisation":
+        return Linearisation.firstOrder();
+      case "cubature":
+        return PointMatching.of(CubatureRule.degreeThree());
+      case "unscented":
+        return PointMatching.of(unscented(words));
+      case "Gauss-Hermite":
+        return product(Integer.parseInt(words[1]));
+      default:
+        throw new IllegalArgumentException("no matching is named " + name);
+    }
+  }
+
+  private static UnscentedRule unscented(String[] words) {
+    double alpha = Double.parseDouble(words[1]);
+    double beta = Double.parseDouble(words[2]);
+    return words[3].equals("3-n")
+        ? UnscentedRule.scaled(alpha, beta, n -> 3 - n)
+        : UnscentedRule.scaled(alpha, beta, Double.parseDouble(words[3]));
+  }
+
+  static MomentMatching product(int nodes) {
+    return PointMatching.of(GaussHermiteRule.product(nodes));
+  }
+}

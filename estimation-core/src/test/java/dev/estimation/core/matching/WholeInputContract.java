@@ -1,0 +1,53 @@
+package dev.estimation.core.matching;
+
+/** The contract for matchings over the whole input, whatever a function reads. */
+abstract class WholeInputContract
+    implements AffineChecks,
+        ZeroVarianceChecks,
+        ConductChecks,
+        AngleChecks,
+        ConditioningChecks,
+        WholeInputChecks {
+  /** The same matching, over the inputs that are read. */
+  abstract MatchingUnderTest narrow();
+
+  @Override
+  public MomentMatching matching(double... inputScales) {
+    return narrow().matching(inputScales).overWholeInput();
+  }
+
+  @Override
+  public MomentMatching overActiveInputs() {
+    return narrow().matching(MatchingUnderTest.unitScales(5));
+  }
+
+  @Override
+  public int carried(int active, int whole) {
+    return whole;
+  }
+
+  @Override
+  public int evaluations(int carried) {
+    return narrow().evaluations(carried);
+  }
+
+  @Override
+  public int jacobians() {
+    return narrow().jacobians();
+  }
+
+  @Override
+  public double spread(int carried) {
+    return narrow().spread(carried);
+  }
+
+  @Override
+  public double amplification(int carried) {
+    return narrow().amplification(carried);
+  }
+
+  @Override
+  public int largestDimension() {
+    return narrow().largestDimension();
+  }
+}

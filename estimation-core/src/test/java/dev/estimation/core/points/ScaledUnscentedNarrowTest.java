@@ -1,0 +1,15 @@
+package dev.estimation.core.points;
+
+/** The scaled unscented rule with alpha = 1e-3, beta = 2, kappa = 0. */
+class ScaledUnscentedNarrowTest extends PointRuleContract {
+  @Override
+  PointRule rule() {
+    return UnscentedRule.scaled(1e-3, 2, 0);
+  }
+
+  /** Common practice: 1 + (1 - alpha^2 + beta). */
+  @Override
+  double covarianceWeightSum() {
+    return 1 + (1 - 1e-6 + 2);
+  }
+}

@@ -1,0 +1,9 @@
+package dev.estimation.core.points;
+
+/** The unscented rule with kappa = 1. */
+class UnscentedKappaOneTest extends PointRuleContract {
+  @Override
+  PointRule rule() {
+    return UnscentedRule.scaled(1, 0, 1);
+  }
+}

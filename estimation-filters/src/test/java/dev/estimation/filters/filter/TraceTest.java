@@ -1,0 +1,128 @@
+package dev.estimation.filters.filter;
+
+import static dev.estimation.testing.Agreement.assertRelative;
+import static dev.estimation.testing.Agreement.assertWithin;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+
+import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.matching.Linearisation;
+import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.core.matching.PointMatching;
+import dev.estimation.core.points.CubatureRule;
+import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.UnscentedRule;
+import dev.estimation.filters.model.MotionModel;
+import dev.estimation.filters.model.SensorModel;
+import dev.estimation.filters.testing.ConstantVelocity;
+import dev.estimation.filters.testing.Matchings;
+import dev.estimation.filters.testing.Pendulum;
+import dev.estimation.filters.testing.Position;
+import dev.estimation.testing.ReferenceTable;
+import java.util.List;
+import org.junit.jupiter.api.Named;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.Arguments;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/**
+ * Filtered means and covariances, step by step, on fixed measurement files. 1e-9 standard deviations
+ * (products of them): what two programs of the same equations share after this many steps.
+ */
+class TraceTest {
+  private static final double TOLERANCE = 1e-9;
+
+  static List<Named<MomentMatching>> matchings() {
+    return Matchings.all();
+  }
+
+  /** The rule's name in the file, its matching, its log-likelihood. */
+  static List<Arguments> pendulumRules() {
+    return List.of(
+        Arguments.of("EKF1", Linearisation.firstOrder(), -30.219554984195593),
+        Arguments.of("UKF_a1_b0_k1", unscented(1, 0, 1), -29.630874982910235),
+        Arguments.of("UKF_a1_b2_k1", unscented(1, 2, 1), -29.773747921806336),
+        Arguments.of("UKF_a0.5_b2_k0", unscented(0.5, 2, 0), -29.67858132825275),
+        Arguments.of("CKF", PointMatching.of(CubatureRule.degreeThree()), -29.57752290183613),
+        Arguments.of("GHKF3", hermite(3), -29.630874982910235), // the same as kappa = 1 here
+        Arguments.of("GHKF5", hermite(5), -29.625514842472445));
+  }
+
+  private static MomentMatching unscented(double alpha, double beta, double kappa) {
+    return PointMatching.of(UnscentedRule.scaled(alpha, beta, kappa));
+  }
+
+  private static MomentMatching hermite(int nodes) {
+    return PointMatching.of(GaussHermiteRule.product(nodes));
+  }
+
+  /** Density 0.5 and variance 2 are the ones behind the file: they follow from its first step. */
+  @ParameterizedTest
+  @MethodSource("matchings")
+  void constantVelocityIsTheSameForEveryMatching(MomentMatching matching) {
+    Gaussian prior = Gaussian.of(new double[] {0, 1}, new double[][] {{10, 0}, {0, 4}});
+    double logLikelihood =
+        follow("cv1d", "KF", matching, new ConstantVelocity(0.5), new Position(2, 2), prior, 1);
+    assertRelative("log-likelihood", -77.19600739568106, logLikelihood, 1e-12);
+  }
+
+  @ParameterizedTest
+  @MethodSource("pendulumRules")
+  void pendulumOverTheWholeState(String rule, MomentMatching matching, double expected) {
+    Gaussian prior = Gaussian.of(new double[] {1.6, 0}, new double[][] {{0.1, 0}, {0, 0.1}});
+    double logLikelihood = follow(
+        "pendulum",
+        rule,
+        matching.overWholeInput(),
+        new Pendulum(),
+        new Pendulum.SideView(),
+        prior,
+        0.01);
+    assertRelative("log-likelihood", expected, logLikelihood, TOLERANCE);
+  }
+
+  private static double follow(
+      String trace,
+      String rule,
+      MomentMatching matching,
+      MotionModel motion,
+      SensorModel sensor,
+      Gaussian prior,
+      double dt) {
+    List<ReferenceTable.Row> data =
+        ReferenceTable.read("trace_" + trace + "_data.csv").rows();
+    List<ReferenceTable.Row> expected =
+        ReferenceTable.read("trace_" + trace + "_results.csv").rowsWhere("rule", rule);
+    FilterPlan plan = FilterPlan.of(motion, matching);
+    FilterWorkspace work = plan.workspace();
+    SensorPort port = work.port(sensor);
+    Estimate estimate = plan.start(0, prior);
+    assertEquals(data.size() + 1, expected.size());
+    double logLikelihood = 0;
+    for (int k = 1; k <= data.size(); k++) {
+      assertEquals(StepStatus.APPLIED, work.predict(estimate, k * dt));
+      double[] measurement = {data.get(k - 1).number("y1")};
+      assertEquals(StepStatus.APPLIED, port.update(estimate, measurement));
+      logLikelihood += port.logLikelihood();
+      check(expected.get(k), estimate);
+      assertWithin(
+          "NIS " + k,
+          expected.get(k).number("nis"),
+          port.normalisedInnovationSquared(),
+          TOLERANCE,
+          1 + expected.get(k).number("nis"));
+    }
+    return logLikelihood;
+  }
+
+  private static void check(ReferenceTable.Row row, Estimate estimate) {
+    String step = "step " + row.text("k");
+    double first = Math.sqrt(row.number("filt_P11"));
+    double second = Math.sqrt(row.number("filt_P22"));
+    assertWithin(step, row.number("filt_m1"), estimate.mean(0), TOLERANCE, first);
+    assertWithin(step, row.number("filt_m2"), estimate.mean(1), TOLERANCE, second);
+    assertRelative(step, row.number("filt_P11"), estimate.covariance(0, 0), TOLERANCE);
+    assertRelative(step, row.number("filt_P22"), estimate.covariance(1, 1), TOLERANCE);
+    assertWithin(
+        step, row.number("filt_P12"), estimate.covariance(1, 0), TOLERANCE, first * second);
+  }
+}

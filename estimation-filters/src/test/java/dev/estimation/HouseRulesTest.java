@@ -58,6 +58,7 @@ class HouseRulesTest {
       filters.model       -> core.*
       filters.consistency -> core.*
       filters.filter      -> core.* filters.model filters.consistency
+      filters.smoother    -> core.* filters.filter
       """;
 
   /** Types of which a static field, though final, would still be shared state that changes. */

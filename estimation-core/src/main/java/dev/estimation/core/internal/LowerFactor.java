@@ -164,6 +164,32 @@ public final class LowerFactor {
     }
   }
 
+  /**
+   * Overwrites a vector with the solution x of L L' x = b. Components of zero variance get 0.
+   *
+   * @param b the vector stands at {@code start} and after, updated
+   * @param start where it begins
+   */
+  public void solve(double[] b, int start) {
+    double[] l = columns.data;
+    for (int r = 0; r < size; r++) {
+      double sum = b[start + r];
+      for (int c = 0; c < r; c++) {
+        sum -= l[r * size + c] * b[start + c];
+      }
+      double pivot = l[r * (size + 1)];
+      b[start + r] = pivot == 0 ? 0 : sum / pivot;
+    }
+    for (int r = size - 1; r >= 0; r--) {
+      double sum = b[start + r];
+      for (int c = r + 1; c < size; c++) {
+        sum -= l[c * size + r] * b[start + c];
+      }
+      double pivot = l[r * (size + 1)];
+      b[start + r] = pivot == 0 ? 0 : sum / pivot;
+    }
+  }
+
   /** {@return twice the sum of the logarithms of the diagonal: ln det of the factored matrix} */
   public double logDeterminant() {
     double sum = 0;

@@ -6,14 +6,14 @@ import org.ejml.data.DMatrixRMaj;
 
 /**
  * The factor B of the part of an input covariance that a few active inputs carry: P[:, a] = B B[a, :]'
- * (regression of all inputs on the active ones). If all are active in natural order, B is the lower
- * factor of the moments themselves.
+ * (regression of all inputs on the active ones). If all are active in natural order, B is a copy of the
+ * lower factor of the moments, which may change before B is used.
  */
 final class ActiveFactor {
   private final int[] active;
   private final boolean whole;
   private final LowerFactor ordered;
-  private DMatrixRMaj columns;
+  private final DMatrixRMaj columns;
 
   ActiveFactor(int[] active, int dimension) {
     this.active = active;
@@ -42,7 +42,7 @@ final class ActiveFactor {
       return false;
     }
     if (whole) {
-      columns = input.lowerFactor();
+      columns.setTo(input.lowerFactor());
       return true;
     }
     return ordered.factorSemidefinite(input.covariance());

@@ -33,7 +33,7 @@ public interface MatchingWorkspace {
    */
   Moments output();
 
-  /** {@return B, n x k; read only, valid until the input or the workspace is used again} */
+  /** {@return B, n x k; read only, valid until the next call} */
   DMatrixRMaj inputFactor();
 
   /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */

@@ -58,6 +58,11 @@ public final class Estimate {
     return Math.sqrt(covariance(index, index));
   }
 
+  /** {@return where the state lives} */
+  public Space space() {
+    return moments.space();
+  }
+
   /** {@return mean and covariance as an immutable value} */
   public Gaussian toGaussian() {
     return moments.toGaussian();

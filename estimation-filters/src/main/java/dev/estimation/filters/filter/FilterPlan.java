@@ -7,8 +7,11 @@ import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.UnscentedRule;
+import dev.estimation.core.space.Space;
 import dev.estimation.filters.consistency.ChiSquareBounds;
+import dev.estimation.filters.model.Motion;
 import dev.estimation.filters.model.MotionModel;
+import dev.estimation.filters.model.NoiseDrivenMotion;
 
 /**
  * A Gaussian filter, ready to be run: a motion model, a matching for prediction and update, and a gate.
@@ -23,14 +26,17 @@ import dev.estimation.filters.model.MotionModel;
  * chapter 8.
  */
 public final class FilterPlan {
-  private final MotionModel motion;
+  private final Motion motion;
   private final MomentMatching matching;
   private final double gateProbability;
+  private final IteratedUpdate iteration;
 
-  private FilterPlan(MotionModel motion, MomentMatching matching, double gateProbability) {
+  private FilterPlan(
+      Motion motion, MomentMatching matching, double gateProbability, IteratedUpdate iteration) {
     this.motion = motion;
     this.matching = matching;
     this.gateProbability = gateProbability;
+    this.iteration = iteration;
   }
 
   /**
@@ -41,10 +47,9 @@ public final class FilterPlan {
    * @return the plan
    * @throws IllegalArgumentException if the matching cannot serve the model
    */
-  public static FilterPlan of(MotionModel motion, MomentMatching matching) {
-    FilterPlan plan = new FilterPlan(motion, matching, Double.NaN);
-    plan.workspace(); // a model that the matching cannot serve is refused here, not at the first
-    // step
+  public static FilterPlan of(Motion motion, MomentMatching matching) {
+    FilterPlan plan = new FilterPlan(motion, matching, Double.NaN, null);
+    plan.transition(); // refuses a model that the matching cannot serve now, not at the first step
     return plan;
   }
 
@@ -53,8 +58,18 @@ public final class FilterPlan {
    *
    * @param motion how the state moves
    */
-  public static FilterPlan extended(MotionModel motion) {
+  public static FilterPlan extended(Motion motion) {
     return of(motion, Linearisation.firstOrder());
+  }
+
+  /**
+   * {@return the iterated extended Kalman filter: updates are linearised anew until they settle}
+   *
+   * @param motion how the state moves
+   * @param iteration how updates are iterated
+   */
+  public static FilterPlan iteratedExtended(Motion motion, IteratedUpdate iteration) {
+    return new FilterPlan(motion, extended(motion).matching, Double.NaN, iteration);
   }
 
   /**
@@ -65,7 +80,7 @@ public final class FilterPlan {
    * @param beta added to the covariance weight of the centre
    * @param kappa above -n
    */
-  public static FilterPlan unscented(MotionModel motion, double alpha, double beta, double kappa) {
+  public static FilterPlan unscented(Motion motion, double alpha, double beta, double kappa) {
     return of(motion, PointMatching.of(UnscentedRule.scaled(alpha, beta, kappa)));
   }
 
@@ -74,7 +89,7 @@ public final class FilterPlan {
    *
    * @param motion how the state moves
    */
-  public static FilterPlan cubature(MotionModel motion) {
+  public static FilterPlan cubature(Motion motion) {
     return of(motion, PointMatching.of(CubatureRule.degreeThree()));
   }
 
@@ -84,7 +99,7 @@ public final class FilterPlan {
    * @param motion how the state moves
    * @param nodesPerAxis p: a step costs p^k evaluations for k active inputs
    */
-  public static FilterPlan gaussHermite(MotionModel motion, int nodesPerAxis) {
+  public static FilterPlan gaussHermite(Motion motion, int nodesPerAxis) {
     return of(motion, PointMatching.of(GaussHermiteRule.product(nodesPerAxis)));
   }
 
@@ -97,7 +112,7 @@ public final class FilterPlan {
    */
   public FilterPlan withGate(double probability) {
     ChiSquareBounds.upperLimit(probability, 1);
-    return new FilterPlan(motion, matching, probability);
+    return new FilterPlan(motion, matching, probability, iteration);
   }
 
   /** {@return scratch for one thread} */
@@ -116,12 +131,23 @@ public final class FilterPlan {
     return new Estimate(motion.stateSpace(), time, initial);
   }
 
-  MotionModel motion() {
-    return motion;
+  Space stateSpace() {
+    return motion.stateSpace();
+  }
+
+  Transition transition() {
+    return motion instanceof MotionModel additive
+        ? new AdditiveTransition(additive, matching)
+        : new NoiseDrivenTransition((NoiseDrivenMotion) motion, matching);
   }
 
   MomentMatching matching() {
     return matching;
+  }
+
+  /** How updates are iterated, or null. */
+  IteratedUpdate iteration() {
+    return iteration;
   }
 
   /** The limit of the normalised innovation squared; infinite without a gate. */

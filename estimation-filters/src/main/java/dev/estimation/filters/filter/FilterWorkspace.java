@@ -1,11 +1,9 @@
 package dev.estimation.filters.filter;
 
+import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
-import dev.estimation.core.matching.MatchingStatus;
-import dev.estimation.core.matching.MatchingWorkspace;
-import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.model.SensorModel;
+import org.ejml.data.DMatrixRMaj;
 
 /**
  * One thread's scratch for a plan: predicts, and makes the ports through which sensors update.
@@ -17,24 +15,17 @@ import dev.estimation.filters.model.SensorModel;
 public final class FilterWorkspace {
   private final double[] nothing = new double[0];
   private final FilterPlan plan;
-  private final MotionModel motion;
-  private final MotionFunction function;
-  private final MatchingWorkspace matching;
-  private final NoiseMatrix noise;
+  private final Transition transition;
   private final InputCheck input = new InputCheck();
   private StepStatus status = StepStatus.APPLIED;
   private int evaluations;
   private int jacobians;
-  private double stepTime;
-  private double estimateTime;
+  private double stepTime = Double.NaN;
+  private double estimateTime = Double.NaN;
 
   FilterWorkspace(FilterPlan plan) {
     this.plan = plan;
-    this.motion = plan.motion();
-    Space space = motion.stateSpace();
-    this.function = new MotionFunction(motion);
-    this.matching = plan.matching().workspace(space, space, function);
-    this.noise = new NoiseMatrix("processNoise", space.dimension(), false);
+    this.transition = plan.transition();
   }
 
   /**
@@ -45,7 +36,19 @@ public final class FilterWorkspace {
    * @throws IllegalArgumentException if the plan's matching cannot serve the model
    */
   public SensorPort port(SensorModel sensor) {
-    return new SensorPort(plan, sensor);
+    return new SensorPort(plan, sensor, sensor.getClass().getSimpleName());
+  }
+
+  /**
+   * A port for several rows of a sensor as one update.
+   *
+   * @param sensor the model of one row
+   * @param maximumRows the most rows that an update will have
+   * @return the port
+   * @throws IllegalArgumentException if the plan's matching cannot serve the model
+   */
+  public StackedPort port(SensorModel sensor, int maximumRows) {
+    return new StackedPort(plan, sensor, maximumRows);
   }
 
   /**
@@ -70,8 +73,8 @@ public final class FilterWorkspace {
    * @throws IllegalArgumentException if the control or the estimate has the wrong size
    */
   public StepStatus predict(Estimate estimate, double time, double[] control) {
-    estimate.requireSpace(motion.stateSpace());
-    Checks.length("control", control, motion.controlDimension());
+    estimate.requireSpace(plan.stateSpace());
+    Checks.length("control", control, transition.controlDimension());
     evaluations = 0;
     jacobians = 0;
     stepTime = time;
@@ -94,24 +97,36 @@ public final class FilterWorkspace {
     if (time == estimateTime) {
       return StepStatus.APPLIED;
     }
-    double dt = time - estimateTime;
-    function.over(estimateTime, dt);
-    double[] mean = estimate.moments().mean();
-    motion.processNoise(mean, control, estimateTime, dt, noise.blank());
-    if (!noise.isValid()) {
-      return StepStatus.NOISE_NOT_VALID;
+    StepStatus carried =
+        transition.carry(estimate.moments(), control, estimateTime, time - estimateTime);
+    evaluations = transition.evaluations();
+    jacobians = transition.jacobians();
+    if (carried == StepStatus.APPLIED) {
+      estimate.replace(time, transition.output());
     }
-    MatchingStatus matched = matching.carry(estimate.moments(), control, noise.matrix());
-    evaluations = matching.evaluations();
-    jacobians = matching.jacobians();
-    if (matched != MatchingStatus.MATCHED) {
-      return StepStatus.of(matched);
+    return carried;
+  }
+
+  /**
+   * What a smoother needs of the last prediction that moved an estimate in time.
+   *
+   * @param cross filled with the cross-covariance of the state before and after, d x d
+   * @return the predicted moments; read only, valid until the next prediction
+   * @throws IllegalStateException if the last prediction was not applied, or was over no time
+   */
+  public Moments prediction(DMatrixRMaj cross) {
+    if (status != StepStatus.APPLIED || !(stepTime > estimateTime)) {
+      throw new IllegalStateException(
+          "the last prediction must have moved an estimate in time, got "
+              + (failure().isEmpty() ? "one over no time" : failure()));
     }
-    if (!matching.output().factor()) {
-      return StepStatus.NOT_DEFINITE;
-    }
-    estimate.replace(time, matching.output());
-    return StepStatus.APPLIED;
+    transition.crossCovariance(cross);
+    return transition.output();
+  }
+
+  /** {@return the time (s) from which the last prediction went} */
+  public double predictedFrom() {
+    return estimateTime;
   }
 
   /** {@return the function evaluations of the last prediction} */
@@ -129,8 +144,8 @@ public final class FilterWorkspace {
     if (status == StepStatus.APPLIED) {
       return "";
     }
-    return reason() + " (motion model " + motion.getClass().getSimpleName()
-        + ", prediction from t = " + estimateTime + " s to " + stepTime + " s)";
+    return reason() + " (motion model " + transition.name() + ", prediction from t = "
+        + estimateTime + " s to " + stepTime + " s)";
   }
 
   private String reason() {
@@ -140,16 +155,7 @@ public final class FilterWorkspace {
         "step to t = " + stepTime + " s lies before the estimate at t = " + estimateTime
             + " s; late data needs a retained history";
       case INPUT_NOT_FINITE -> input.failure();
-      case NOISE_NOT_VALID -> noise.failure();
-      case NOT_DEFINITE -> indefinite();
-      default -> matching.failure();
+      default -> transition.failure(status);
     };
-  }
-
-  private String indefinite() {
-    return matching.failure().isEmpty()
-        ? "predicted covariance is not positive semi-definite: "
-            + matching.output().factorFailure()
-        : matching.failure();
   }
 }

@@ -48,6 +48,11 @@ final class NoiseMatrix {
     return -1;
   }
 
+  /** Overwrites v with L^-1 v, L the lower factor, after {@link #isValid()} was true. */
+  void whiten(double[] v) {
+    factor.solveLower(v);
+  }
+
   DMatrixRMaj matrix() {
     return matrix;
   }

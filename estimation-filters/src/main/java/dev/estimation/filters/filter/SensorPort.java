@@ -2,65 +2,55 @@ package dev.estimation.filters.filter;
 
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
-import dev.estimation.core.internal.LowerFactor;
-import dev.estimation.core.internal.Products;
-import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.SensorModel;
-import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 
 /**
  * Where the measurements of one sensor enter: the update of a filter, with all sizes fixed.
  *
- * <p>Several measurements of one time are updates one after another. With d the dimension of the state,
- * m of the measurement and k its active inputs, an update costs the evaluations of the matching, the
- * noise, and about d k m + d^2 m / 2 + d^3 / 6 operations. <i>Confined to one thread</i>; serves any
- * number of estimates of its plan; allocates only when built and in {@link #failure()}.
+ * <p>Several measurements of one time are updates one after another, or one update of stacked rows
+ * ({@link StackedPort}). With d the dimension of the state, m of the measurement and k its active
+ * inputs, an update costs the evaluations of the matching, the noise, and about d k m + d^2 m / 2 + d^3
+ * / 6 operations. <i>Confined to one thread</i>; serves any number of estimates of its plan; allocates
+ * only when built and in {@link #failure()}.
  */
 public final class SensorPort {
-  private static final double LOG_TWO_PI = Math.log(2 * Math.PI);
-
   private final double[] nothing = new double[0];
+  private final String name;
   private final SensorModel sensor;
   private final Space stateSpace;
   private final Space space;
   private final double gateLimit;
   private final MatchingWorkspace matching;
   private final NoiseMatrix noise;
-  private final LowerFactor innovationFactor;
-  private final double[] innovation;
-  private final double[] whitened;
-  private final double[] column;
-  private final DMatrixRMaj gainFactor;
-  private final double[] correction;
-  private final Moments posterior;
+  private final Innovation innovation;
+  private final DMatrixRMaj innovationCovariance;
+  private final Posterior posterior;
+  private final GaussNewton iteration;
   private final InputCheck input = new InputCheck();
   private StepStatus status = StepStatus.APPLIED;
   private double estimateTime;
-  private double squared = Double.NaN;
-  private double logLikelihood = Double.NaN;
   private int evaluations;
   private int jacobians;
 
-  SensorPort(FilterPlan plan, SensorModel sensor) {
+  SensorPort(FilterPlan plan, SensorModel sensor, String name) {
+    this.name = name;
     this.sensor = sensor;
-    this.stateSpace = plan.motion().stateSpace();
+    this.stateSpace = plan.stateSpace();
     this.space = sensor.measurementSpace();
     int m = space.dimension();
-    int d = stateSpace.dimension();
     this.gateLimit = plan.gateLimit(m);
     this.matching = plan.matching().workspace(stateSpace, space, new SensorFunction(sensor));
     this.noise = new NoiseMatrix("measurementNoise", m, true);
-    this.innovationFactor = new LowerFactor(m);
-    this.innovation = new double[m];
-    this.whitened = new double[m];
-    this.column = new double[m];
-    this.gainFactor = new DMatrixRMaj(d, m);
-    this.correction = new double[d];
-    this.posterior = new Moments(stateSpace);
+    this.innovation = new Innovation(space);
+    this.innovationCovariance = new DMatrixRMaj(m, m);
+    this.posterior = new Posterior(stateSpace, m);
+    this.iteration = plan.iteration() == null
+        ? null
+        : new GaussNewton(plan.iteration(), matching, innovation, noise, stateSpace, space);
   }
 
   /**
@@ -89,8 +79,7 @@ public final class SensorPort {
     Checks.length("given", given, sensor.givenDimension());
     evaluations = 0;
     jacobians = 0;
-    squared = Double.NaN;
-    logLikelihood = Double.NaN;
+    innovation.clear();
     estimateTime = estimate.time();
     status = StepStatus.APPLIED;
     status = updateChecked(estimate, measurement, given);
@@ -106,96 +95,62 @@ public final class SensorPort {
     if (!noise.isValid()) {
       return StepStatus.NOISE_NOT_VALID;
     }
+    StepStatus weighed = weigh(prior, measurement, given);
+    if (weighed != StepStatus.APPLIED) {
+      return weighed;
+    }
+    StepStatus conditioned = condition(prior, measurement, given);
+    if (conditioned == StepStatus.APPLIED) {
+      estimate.replace(estimateTime, posterior.moments());
+    }
+    return conditioned;
+  }
+
+  /** Predicts the measurement and holds the innovation against the gate. */
+  private StepStatus weigh(Moments prior, double[] measurement, double[] given) {
     MatchingStatus matched = matching.carry(prior, given, noise.matrix());
     evaluations = matching.evaluations();
     jacobians = matching.jacobians();
     if (matched != MatchingStatus.MATCHED) {
       return StepStatus.of(matched);
     }
-    if (!innovationFactor.factorDefinite(matching.output().covariance())) {
+    DMatrixRMaj covariance = matching.output().covariance();
+    if (!innovation.factor(covariance)) {
       return StepStatus.NOT_DEFINITE;
     }
-    weighInnovation(measurement);
-    if (squared > gateLimit) {
+    System.arraycopy(covariance.data, 0, innovationCovariance.data, 0, covariance.getNumElements());
+    innovation.weigh(matching.output(), measurement);
+    if (innovation.squared() > gateLimit) {
       return StepStatus.GATED;
     }
-    if (!Double.isFinite(squared)) {
-      return StepStatus.RESULT_NOT_FINITE;
-    }
-    return condition(estimate);
+    return Double.isFinite(innovation.squared())
+        ? StepStatus.APPLIED
+        : StepStatus.RESULT_NOT_FINITE;
   }
 
-  private void weighInnovation(double[] measurement) {
-    space.difference(measurement, matching.output().mean(), innovation);
-    int m = innovation.length;
-    System.arraycopy(innovation, 0, whitened, 0, m);
-    innovationFactor.solveLower(whitened);
-    double sum = 0;
-    for (int i = 0; i < m; i++) {
-      sum += whitened[i] * whitened[i];
+  private StepStatus condition(Moments prior, double[] measurement, double[] given) {
+    if (iteration == null) {
+      posterior.condition(prior, matching, innovation);
+      return posterior.check();
     }
-    squared = sum;
-    logLikelihood = -0.5 * (sum + innovationFactor.logDeterminant() + m * LOG_TWO_PI);
-  }
-
-  /** Conditions on the innovation: with G = C L_S^-T, mean + G L_S^-1 nu and P - G G'. */
-  private StepStatus condition(Estimate estimate) {
-    Moments prior = estimate.moments();
-    fillGainFactor();
-    int d = correction.length;
-    int m = innovation.length;
-    double[] g = gainFactor.data;
-    for (int r = 0; r < d; r++) {
-      double shift = 0;
-      for (int j = 0; j < m; j++) {
-        shift += g[r * m + j] * whitened[j];
-      }
-      correction[r] = shift;
+    StepStatus iterated = iteration.run(prior, given, measurement);
+    evaluations += iteration.evaluations();
+    jacobians += iteration.jacobians();
+    if (iterated != StepStatus.APPLIED) {
+      return iterated;
     }
-    double[] lower = posterior.changeCovariance().data;
-    Products.fillDifference(prior.covariance().data, g, d, m, lower);
-    SymmetricMatrix.mirrorLower(posterior.covariance());
-    stateSpace.displace(prior.mean(), correction, posterior.changeMean());
-    if (!Checks.allFinite(posterior.mean())
-        || SymmetricMatrix.firstNotFinite(posterior.covariance()) >= 0) {
-      return StepStatus.RESULT_NOT_FINITE;
-    }
-    if (!posterior.factor()) {
-      return StepStatus.NOT_DEFINITE;
-    }
-    estimate.replace(estimateTime, posterior);
-    return StepStatus.APPLIED;
-  }
-
-  /** G = C L_S^-T = B (L_S^-1 W')', formed row by row of W. */
-  private void fillGainFactor() {
-    double[] b = matching.inputFactor().data;
-    double[] w = matching.unitCrossCovariance().data;
-    double[] g = gainFactor.data;
-    int k = matching.unitCrossCovariance().numRows;
-    int m = innovation.length;
-    int d = correction.length;
-    Arrays.fill(g, 0);
-    for (int a = 0; a < k; a++) {
-      System.arraycopy(w, a * m, column, 0, m);
-      innovationFactor.solveLower(column);
-      for (int r = 0; r < d; r++) {
-        double factor = b[r * k + a];
-        for (int j = 0; j < m; j++) {
-          g[r * m + j] += factor * column[j];
-        }
-      }
-    }
+    posterior.condition(prior, matching, innovation, iteration.mean());
+    return posterior.check();
   }
 
   /** {@return the innovation of the last update that was applied or gated; read only} */
   public double[] innovation() {
-    return innovation;
+    return innovation.value();
   }
 
-  /** {@return the covariance of the innovation of the last update that was applied or gated; read only} */
+  /** {@return the covariance of that innovation; read only} */
   public DMatrixRMaj innovationCovariance() {
-    return matching.output().covariance();
+    return innovationCovariance;
   }
 
   /**
@@ -205,7 +160,7 @@ public final class SensorPort {
    * @return the NIS
    */
   public double normalisedInnovationSquared() {
-    return squared;
+    return innovation.squared();
   }
 
   /**
@@ -215,7 +170,7 @@ public final class SensorPort {
    * @return the log-likelihood
    */
   public double logLikelihood() {
-    return logLikelihood;
+    return innovation.logLikelihood();
   }
 
   /** {@return the function evaluations of the last update} */
@@ -233,15 +188,17 @@ public final class SensorPort {
     if (status == StepStatus.APPLIED) {
       return "";
     }
-    return reason() + " (sensor model " + sensor.getClass().getSimpleName() + ", update at t = "
-        + estimateTime + " s)";
+    return reason() + " (sensor model " + name + ", update at t = " + estimateTime + " s)";
   }
 
   private String reason() {
     return switch (status) {
-      case GATED -> "normalised innovation squared " + squared + " is above the gate " + gateLimit;
+      case GATED ->
+        "normalised innovation squared " + innovation.squared() + " is above the gate " + gateLimit;
       case INPUT_NOT_FINITE -> input.failure();
       case NOISE_NOT_VALID -> noise.failure();
+      case NOT_CONVERGED ->
+        "the iterated update did not converge; a line search may (see IteratedUpdate)";
       case NOT_DEFINITE -> indefinite();
       case RESULT_NOT_FINITE -> notFinite();
       default -> matching.failure();
@@ -258,9 +215,10 @@ public final class SensorPort {
     if (!matching.failure().isEmpty()) {
       return matching.failure();
     }
-    if (Double.isNaN(squared)) {
-      return "covariance of the innovation is not positive definite: " + innovationFactor.failure();
+    if (Double.isNaN(innovation.squared())) {
+      return innovation.failure();
     }
-    return "updated covariance is not positive semi-definite: " + posterior.factorFailure();
+    return "updated covariance is not positive semi-definite: "
+        + posterior.moments().factorFailure();
   }
 }

@@ -23,6 +23,11 @@ public enum StepStatus {
    * semi-definite. Usual causes: negative weights, measurements far more accurate than the estimate.
    */
   NOT_DEFINITE,
+  /**
+   * An iterated update did not settle within its rounds. Usual causes: a measurement that bends within
+   * the spread of the prior (try a line search), a prior that is too wide.
+   */
+  NOT_CONVERGED,
   /** The result overflows. Usual causes: an innovation or a variance of absurd size. */
   RESULT_NOT_FINITE;
 

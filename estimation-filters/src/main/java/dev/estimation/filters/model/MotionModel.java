@@ -1,23 +1,12 @@
 package dev.estimation.filters.model;
 
-import dev.estimation.core.function.Structure;
-import dev.estimation.core.space.Space;
-
 /**
  * How a state moves: x(t + dt) = f(x, control, t, dt) + w, w ~ N(0, Q).
  *
- * <p>Units are SI and radians. Implementations are called by many threads at once and must not keep
- * state that changes. A model that also has a Jacobian is a {@link DifferentiableMotion}.
+ * <p>A model that also has a Jacobian is a {@link DifferentiableMotion}. The active inputs of its
+ * structure are components of the state.
  */
-public interface MotionModel {
-  /** {@return where the state lives} */
-  Space stateSpace();
-
-  /** {@return the number of controls that {@link #move} reads; 0 if there are none} */
-  default int controlDimension() {
-    return 0;
-  }
-
+public non-sealed interface MotionModel extends Motion {
   /**
    * Fills {@code next} with f(state, control, time, dt).
    *
@@ -40,9 +29,4 @@ public interface MotionModel {
    *     with zeros
    */
   void processNoise(double[] state, double[] control, double time, double dt, double[] covariance);
-
-  /** {@return the components of the state that {@link #move} reads; all unless said otherwise} */
-  default Structure structure() {
-    return Structure.UNKNOWN;
-  }
 }

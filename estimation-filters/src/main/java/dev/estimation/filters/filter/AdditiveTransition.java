@@ -1,0 +1,45 @@
+package dev.estimation.filters.filter;
+
+import dev.estimation.core.gaussian.Moments;
+import dev.estimation.core.matching.MatchingStatus;
+import dev.estimation.core.matching.MatchingWorkspace;
+import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.filters.model.MotionModel;
+import org.ejml.data.DMatrixRMaj;
+
+/** Noise is added after the motion. */
+final class AdditiveTransition extends Transition {
+  private final MotionModel model;
+  private final MotionFunction function;
+
+  AdditiveTransition(MotionModel model, MomentMatching matching) {
+    this(model, new MotionFunction(model), matching);
+  }
+
+  private AdditiveTransition(MotionModel model, MotionFunction function, MomentMatching matching) {
+    super(
+        model.getClass().getSimpleName(),
+        model.controlDimension(),
+        new NoiseMatrix("processNoise", model.stateSpace().dimension(), false),
+        matching.workspace(model.stateSpace(), model.stateSpace(), function));
+    this.model = model;
+    this.function = function;
+  }
+
+  @Override
+  void fillNoise(double[] mean, double[] control, double time, double dt, double[] covariance) {
+    model.processNoise(mean, control, time, dt, covariance);
+  }
+
+  @Override
+  MatchingStatus match(
+      Moments prior,
+      double[] control,
+      double time,
+      double dt,
+      DMatrixRMaj noiseCovariance,
+      MatchingWorkspace workspace) {
+    function.over(time, dt);
+    return workspace.carry(prior, control, noiseCovariance);
+  }
+}

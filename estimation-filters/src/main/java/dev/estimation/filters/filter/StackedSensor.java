@@ -1,0 +1,114 @@
+package dev.estimation.filters.filter;
+
+import dev.estimation.core.function.Structure;
+import dev.estimation.core.space.FlatSpace;
+import dev.estimation.core.space.Space;
+import dev.estimation.filters.model.DifferentiableSensor;
+import dev.estimation.filters.model.SensorModel;
+import java.util.Arrays;
+
+/** A number of rows of one sensor as one measurement, with independent noise. Owned by one port. */
+class StackedSensor implements SensorModel {
+  final int rows;
+  final int width;
+  final int givenWidth;
+  private final SensorModel sensor;
+  private final Space space;
+  private final double[] rowGiven;
+  private final double[] rowMeasurement;
+  private final double[] rowNoise;
+
+  private StackedSensor(SensorModel sensor, int rows) {
+    this.sensor = sensor;
+    this.rows = rows;
+    this.width = sensor.measurementSpace().dimension();
+    this.givenWidth = sensor.givenDimension();
+    this.space = stacked(sensor.measurementSpace(), rows);
+    this.rowGiven = new double[givenWidth];
+    this.rowMeasurement = new double[width];
+    this.rowNoise = new double[width * width];
+  }
+
+  static StackedSensor of(SensorModel sensor, int rows, int stateDimension) {
+    return sensor instanceof DifferentiableSensor differentiable
+        ? new Differentiable(differentiable, rows, stateDimension)
+        : new StackedSensor(sensor, rows);
+  }
+
+  private static Space stacked(Space row, int rows) {
+    if (!(row instanceof FlatSpace flat)) {
+      throw new IllegalArgumentException(
+          "stacked rows must have a measurement space of reals and angles, got " + row);
+    }
+    FlatSpace all = flat;
+    for (int i = 1; i < rows; i++) {
+      all = all.and(flat);
+    }
+    return all;
+  }
+
+  @Override
+  public Space measurementSpace() {
+    return space;
+  }
+
+  @Override
+  public int givenDimension() {
+    return rows * givenWidth;
+  }
+
+  @Override
+  public void measure(double[] state, double[] given, double[] measurement) {
+    for (int row = 0; row < rows; row++) {
+      // The row arrives filled with the NaN that marks what was left out.
+      System.arraycopy(measurement, row * width, rowMeasurement, 0, width);
+      sensor.measure(state, givenOf(row, given), rowMeasurement);
+      System.arraycopy(rowMeasurement, 0, measurement, row * width, width);
+    }
+  }
+
+  @Override
+  public void measurementNoise(double[] state, double[] given, double[] covariance) {
+    int size = rows * width;
+    for (int row = 0; row < rows; row++) {
+      Arrays.fill(rowNoise, 0);
+      sensor.measurementNoise(state, givenOf(row, given), rowNoise);
+      for (int i = 0; i < width; i++) {
+        int start = (row * width + i) * size + row * width;
+        System.arraycopy(rowNoise, i * width, covariance, start, width);
+      }
+    }
+  }
+
+  @Override
+  public Structure structure() {
+    return sensor.structure();
+  }
+
+  final double[] givenOf(int row, double[] given) {
+    System.arraycopy(given, row * givenWidth, rowGiven, 0, givenWidth);
+    return rowGiven;
+  }
+
+  /** The rows of a sensor that knows its Jacobian. */
+  private static final class Differentiable extends StackedSensor implements DifferentiableSensor {
+    private final DifferentiableSensor sensor;
+    private final double[] rowJacobian;
+
+    Differentiable(DifferentiableSensor sensor, int rows, int stateDimension) {
+      super(sensor, rows);
+      this.sensor = sensor;
+      this.rowJacobian = new double[width * stateDimension];
+    }
+
+    @Override
+    public void measureJacobian(double[] state, double[] given, double[] jacobian) {
+      int size = rowJacobian.length;
+      for (int row = 0; row < rows; row++) {
+        Arrays.fill(rowJacobian, 0);
+        sensor.measureJacobian(state, givenOf(row, given), rowJacobian);
+        System.arraycopy(rowJacobian, 0, jacobian, row * size, size);
+      }
+    }
+  }
+}

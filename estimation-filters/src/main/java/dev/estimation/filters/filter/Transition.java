@@ -1,0 +1,100 @@
+package dev.estimation.filters.filter;
+
+import dev.estimation.core.gaussian.Moments;
+import dev.estimation.core.matching.MatchingStatus;
+import dev.estimation.core.matching.MatchingWorkspace;
+import org.ejml.data.DMatrixRMaj;
+
+/** One thread's way of carrying an estimate over a time, whichever way the noise enters. */
+abstract class Transition {
+  private final String name;
+  private final int controlDimension;
+  private final NoiseMatrix noise;
+  private final MatchingWorkspace matching;
+  private boolean matched;
+
+  Transition(String name, int controlDimension, NoiseMatrix noise, MatchingWorkspace matching) {
+    this.name = name;
+    this.controlDimension = controlDimension;
+    this.noise = noise;
+    this.matching = matching;
+  }
+
+  /** Carries the moments of the state; {@link #output()} is valid if the status is APPLIED. */
+  final StepStatus carry(Moments prior, double[] control, double time, double dt) {
+    matched = false;
+    fillNoise(prior.mean(), control, time, dt, noise.blank());
+    if (!noise.isValid()) {
+      return StepStatus.NOISE_NOT_VALID;
+    }
+    matched = true;
+    MatchingStatus ended = match(prior, control, time, dt, noise.matrix(), matching);
+    if (ended != MatchingStatus.MATCHED) {
+      return StepStatus.of(ended);
+    }
+    return output().factor() ? StepStatus.APPLIED : StepStatus.NOT_DEFINITE;
+  }
+
+  abstract void fillNoise(
+      double[] mean, double[] control, double time, double dt, double[] covariance);
+
+  abstract MatchingStatus match(
+      Moments prior,
+      double[] control,
+      double time,
+      double dt,
+      DMatrixRMaj noiseCovariance,
+      MatchingWorkspace workspace);
+
+  final Moments output() {
+    return matching.output();
+  }
+
+  /**
+   * The cross-covariance of the state before and after: C = B W, over the rows of the state.
+   *
+   * @param cross filled, d x d
+   */
+  final void crossCovariance(DMatrixRMaj cross) {
+    double[] b = matching.inputFactor().data;
+    double[] w = matching.unitCrossCovariance().data;
+    int k = matching.unitCrossCovariance().numRows;
+    int d = cross.numRows;
+    for (int r = 0; r < d; r++) {
+      for (int c = 0; c < d; c++) {
+        double sum = 0;
+        for (int a = 0; a < k; a++) {
+          sum += b[r * k + a] * w[a * d + c];
+        }
+        cross.data[r * d + c] = sum;
+      }
+    }
+  }
+
+  final String name() {
+    return name;
+  }
+
+  final int controlDimension() {
+    return controlDimension;
+  }
+
+  final int evaluations() {
+    return matched ? matching.evaluations() : 0;
+  }
+
+  final int jacobians() {
+    return matched ? matching.jacobians() : 0;
+  }
+
+  /** Why the last carry ended with the given status. */
+  final String failure(StepStatus status) {
+    if (status == StepStatus.NOISE_NOT_VALID) {
+      return noise.failure();
+    }
+    if (status == StepStatus.NOT_DEFINITE && matching.failure().isEmpty()) {
+      return "predicted covariance is not positive semi-definite: " + output().factorFailure();
+    }
+    return matching.failure();
+  }
+}

@@ -1,0 +1,26 @@
+package dev.estimation.filters.model;
+
+import dev.estimation.core.function.Structure;
+import dev.estimation.core.space.Space;
+
+/**
+ * What all motion models have, whichever way their noise enters: added afterwards ({@link
+ * MotionModel}), or inside the motion ({@link NoiseDrivenMotion}).
+ *
+ * <p>Units are SI and radians. Implementations are called by many threads at once and must not keep
+ * state that changes.
+ */
+public sealed interface Motion permits MotionModel, NoiseDrivenMotion {
+  /** {@return where the state lives} */
+  Space stateSpace();
+
+  /** {@return the number of controls that the motion reads; 0 if there are none} */
+  default int controlDimension() {
+    return 0;
+  }
+
+  /** {@return the inputs that the motion reads; all unless said otherwise} */
+  default Structure structure() {
+    return Structure.UNKNOWN;
+  }
+}

@@ -1,0 +1,90 @@
+package dev.estimation.filters.filter;
+
+import static dev.estimation.testing.Agreement.assertNames;
+import static dev.estimation.testing.Agreement.assertWithin;
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+
+import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.Matchings;
+import dev.estimation.filters.testing.Models;
+import dev.estimation.testing.RandomGaussians;
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+import org.junit.jupiter.api.Named;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** Noise inside the motion. */
+class NoiseDrivenTest {
+  static List<Named<MomentMatching>> matchings() {
+    return Matchings.all();
+  }
+
+  /** If the motion is linear, noise inside is the same as G Q G' added afterwards. */
+  @ParameterizedTest
+  @MethodSource("matchings")
+  void linearNoiseInsideIsNoiseAdded(MomentMatching matching) {
+    RandomGaussians random = new RandomGaussians(3);
+    DMatrixRMaj f = random.matrix(3, 3);
+    DMatrixRMaj g = random.matrix(3, 2);
+    DMatrixRMaj q = random.covariance(2);
+    Gaussian prior = random.gaussian(3);
+    Estimate inside = predicted(new Models.LinearNoiseDriven(f, g, q), matching, prior);
+    Estimate added = predicted(new Models.LinearMotion(f, product(g, q)), matching, prior);
+    for (int i = 0; i < 3; i++) {
+      // 1e-13: roundings on entries of order 10, points times weights.
+      assertWithin("mean", added.mean(i), inside.mean(i), 1e-13, 10);
+      for (int j = 0; j < 3; j++) {
+        assertWithin("covariance", added.covariance(i, j), inside.covariance(i, j), 1e-13, 100);
+      }
+    }
+  }
+
+  private static Estimate predicted(
+      dev.estimation.filters.model.Motion motion, MomentMatching matching, Gaussian prior) {
+    FilterPlan plan = FilterPlan.of(motion, matching);
+    Estimate estimate = plan.start(0, prior);
+    assertEquals(StepStatus.APPLIED, plan.workspace().predict(estimate, 1));
+    return estimate;
+  }
+
+  private static DMatrixRMaj product(DMatrixRMaj g, DMatrixRMaj q) {
+    DMatrixRMaj half = new DMatrixRMaj(g.numRows, q.numCols);
+    CommonOps_DDRM.mult(g, q, half);
+    DMatrixRMaj result = new DMatrixRMaj(g.numRows, g.numRows);
+    CommonOps_DDRM.multTransB(half, g, result);
+    return result;
+  }
+
+  @Test
+  void indefiniteNoiseIsRefused() {
+    DMatrixRMaj q = new DMatrixRMaj(new double[][] {{1, 2}, {2, 1}});
+    RandomGaussians random = new RandomGaussians(4);
+    FilterPlan plan = FilterPlan.cubature(
+        new Models.LinearNoiseDriven(random.matrix(3, 3), random.matrix(3, 2), q));
+    Estimate estimate = plan.start(0, random.gaussian(3));
+    long[] before = Bits.of(estimate, 3);
+    FilterWorkspace work = plan.workspace();
+    assertEquals(StepStatus.NOISE_NOT_VALID, work.predict(estimate, 1));
+    assertArrayEquals(before, Bits.of(estimate, 3));
+    assertNames(
+        work.failure(),
+        "noiseCovariance is not positive semi-definite: pivot 2 of 2 is -3.0",
+        "LinearNoiseDriven");
+  }
+
+  @Test
+  void evaluationsCountStateAndNoise() {
+    RandomGaussians random = new RandomGaussians(5);
+    FilterPlan plan = FilterPlan.cubature(new Models.LinearNoiseDriven(
+        random.matrix(3, 3), random.matrix(3, 2), random.covariance(2)));
+    FilterWorkspace work = plan.workspace();
+    work.predict(plan.start(0, random.gaussian(3)), 1);
+    assertEquals(2 * 5 + 1, work.evaluations());
+  }
+}

@@ -15,14 +15,12 @@ public final class Agreement {
     double error = Math.abs(actual - expected);
     assertTrue(
         error <= tolerance * scale,
-        () ->
-            what + ": wanted " + expected + ", got " + actual + ", error " + error + " above "
-                + tolerance + " x " + scale);
+        () -> what + ": wanted " + expected + ", got " + actual + ", error " + error + " above "
+            + tolerance + " x " + scale);
   }
 
   /** Relative to the expected value itself. */
-  public static void assertRelative(
-      String what, double expected, double actual, double tolerance) {
+  public static void assertRelative(String what, double expected, double actual, double tolerance) {
     assertWithin(what, expected, actual, tolerance, Math.abs(expected));
   }
 

@@ -4,7 +4,10 @@ import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
 import org.ejml.data.DMatrixRMaj;
 
-/** z_r = sin(a_r' u) + (b_r' u)^2 / 4 + given[0], smooth and bent in every direction, with its Jacobian. */
+/**
+ * z_r = sin(a_r' u) + (b_r' u)^2 / 4 + given[0], smooth and bent in every direction, with its
+ * Jacobian.
+ */
 public final class BentFunction implements VectorFunction {
   private final DMatrixRMaj sine;
   private final DMatrixRMaj square;

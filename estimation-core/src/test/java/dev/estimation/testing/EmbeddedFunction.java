@@ -4,8 +4,8 @@ import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
 
 /**
- * A function of k inputs that reads them from places in a longer vector: input j of the inner function
- * is component {@code places[j]}. It declares these active inputs and keeps the Jacobian.
+ * A function of k inputs that reads them from places in a longer vector: input j of the inner
+ * function is component {@code places[j]}. It declares these active inputs and keeps the Jacobian.
  */
 public final class EmbeddedFunction implements VectorFunction {
   private final VectorFunction inner;

@@ -9,8 +9,8 @@ import org.ejml.data.DMatrixRMaj;
 /**
  * Random means, covariances and matrices for property tests; the same seed gives the same bits.
  *
- * <p>A covariance is A A' / (2 n) + I / 2 with A of n x 2n standard normal numbers, scaled on each axis
- * by a standard deviation from 0.5 to 2: its condition number stays below a few hundred.
+ * <p>A covariance is A A' / (2 n) + I / 2 with A of n x 2n standard normal numbers, scaled on each
+ * axis by a standard deviation from 0.5 to 2: its condition number stays below a few hundred.
  */
 public final class RandomGaussians {
   private final SplittableRandom random;

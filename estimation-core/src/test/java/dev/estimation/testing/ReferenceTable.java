@@ -14,9 +14,9 @@ import java.util.stream.Collectors;
 import java.util.stream.Stream;
 
 /**
- * A table of outside values: a CSV resource under {@code /reference} whose first lines, each beginning
- * with {@code #}, say where the values come from, how they were obtained and when. Fields hold no
- * commas; a field may hold several numbers parted by blanks.
+ * A table of outside values: a CSV resource under {@code /reference} whose first lines, each
+ * beginning with {@code #}, say where the values come from, how they were obtained and when. Fields
+ * hold no commas; a field may hold several numbers parted by blanks.
  */
 public final class ReferenceTable {
   private final List<String> provenance;
@@ -47,7 +47,10 @@ public final class ReferenceTable {
     String[] columns = lines.get(head.size()).split(",");
     return new ReferenceTable(
         head,
-        lines.stream().skip(head.size() + 1L).map(line -> Row.of(name, columns, line)).toList());
+        lines.stream()
+            .skip(head.size() + 1L)
+            .map(line -> Row.of(name, columns, line))
+            .toList());
   }
 
   private static List<String> lines(String name) {
@@ -76,7 +79,8 @@ public final class ReferenceTable {
 
   /** The rows with the given text in a column; fails if there is none. */
   public List<Row> rowsWhere(String column, String value) {
-    List<Row> found = rows.stream().filter(row -> row.text(column).equals(value)).toList();
+    List<Row> found =
+        rows.stream().filter(row -> row.text(column).equals(value)).toList();
     if (found.isEmpty()) {
       throw new IllegalStateException("no row with " + column + " = " + value);
     }
@@ -139,7 +143,9 @@ public final class ReferenceTable {
 
     /** A field of numbers parted by blanks. */
     public double[] numbers(String column) {
-      return Arrays.stream(text(column).split(" ")).mapToDouble(Double::parseDouble).toArray();
+      return Arrays.stream(text(column).split(" "))
+          .mapToDouble(Double::parseDouble)
+          .toArray();
     }
 
     @Override

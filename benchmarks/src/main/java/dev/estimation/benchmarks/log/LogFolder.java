@@ -24,6 +24,9 @@ public final class LogFolder {
    * @throws BadInputException if there is no such folder
    */
   public static LogFolder open(String typed) {
+    if (typed.isBlank()) {
+      throw new BadInputException("log folder must have a name, got ''");
+    }
     try {
       Path folder = Path.of(typed);
       Path last = folder.toRealPath().getFileName();

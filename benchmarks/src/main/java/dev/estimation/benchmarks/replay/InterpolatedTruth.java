@@ -6,8 +6,8 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * Truth between recorded fixes, linear between two neighbours. Where neighbours lie too far apart, or
- * one of them is not good enough, there is no truth.
+ * Truth between recorded fixes, linear between two neighbours. Where neighbours lie too far apart,
+ * or one of them is not good enough, there is no truth.
  */
 public final class InterpolatedTruth implements Truth {
   private final int[] components;

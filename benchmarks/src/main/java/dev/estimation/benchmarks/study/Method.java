@@ -8,8 +8,4 @@ import dev.estimation.core.matching.MomentMatching;
  * @param typed as given
  * @param matching what it means
  */
-record Method(String typed, MomentMatching matching) {
-  Method overWholeInput() {
-    return new Method(typed, matching.overWholeInput());
-  }
-}
+record Method(String typed, MomentMatching matching) {}

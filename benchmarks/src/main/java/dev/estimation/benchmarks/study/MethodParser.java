@@ -11,8 +11,8 @@ import dev.estimation.core.points.UnscentedRule;
 import java.util.List;
 
 /**
- * Reads methods: {@code linear}, {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less
- * the dimension, as in {@code 3-n}), {@code cubature}, {@code hermite:NODES}.
+ * Reads methods: {@code linear}, {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number
+ * less the dimension, as in {@code 3-n}), {@code cubature}, {@code hermite:NODES}.
  */
 final class MethodParser {
   static final String FORMS = "linear, unscented:ALPHA,BETA,KAPPA, cubature, hermite:NODES";

@@ -20,8 +20,13 @@ final class ResultsFolder {
     this.folder = folder;
   }
 
-  /** Makes the folder where it does not exist yet; tells early that nothing can be written there. */
+  /**
+   * Makes the folder where it does not exist yet; tells early that nothing can be written there.
+   */
   static ResultsFolder prepare(String typed) {
+    if (typed.isBlank()) {
+      throw new BadInputException("results folder must have a name, got ''");
+    }
     try {
       Path folder = Files.createDirectories(Path.of(typed));
       if (!Files.isWritable(folder)) {

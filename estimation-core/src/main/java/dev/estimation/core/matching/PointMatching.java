@@ -2,6 +2,7 @@ package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.points.PointRule;
+import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 
 /**
@@ -18,6 +19,10 @@ import dev.estimation.core.space.Space;
  * function if all weights w_i are positive and wc_0 is not negative, and for the scaled unscented rule
  * whenever beta is at least alpha^2. The rounding of g itself is multiplied by {@code
  * UnitPoints.weightAmplification()}.
+ *
+ * <p>Independent draws have a sample mean and covariance of their own: for them P_zz and W are taken about
+ * both sample means and divided by N - 1, and the workspace is a {@link SampledWorkspace} with standard
+ * errors.
  *
  * <p>Cost: the evaluations of the rule and one at the centre; about points * m^2 / 2 operations for
  * the covariance, and points * (m + n) for each coordinate that is not zero. <i>Immutable.</i> Source:
@@ -41,6 +46,10 @@ public final class PointMatching implements MomentMatching {
 
   @Override
   public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
-    return new PointWorkspace(input, output, function, rule);
+    int activeCount = function.structure().activeInputs(input.dimension()).length;
+    UnitPoints points = rule.points(activeCount);
+    return points.isSample()
+        ? new SampleWorkspace(input, output, function, points)
+        : new PointWorkspace(input, output, function, points);
   }
 }

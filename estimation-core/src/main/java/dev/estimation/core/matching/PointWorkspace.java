@@ -2,23 +2,22 @@ package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.internal.Products;
-import dev.estimation.core.points.PointRule;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
 
 /** Carries moments by points; see {@link PointMatching} for the formulas. */
-final class PointWorkspace extends BaseWorkspace {
-  private final UnitPoints points;
+class PointWorkspace extends BaseWorkspace {
+  final UnitPoints points;
   private final double[] displacement;
   private final double[] point;
   private final double[] image;
-  private final double[] deviation;
-  private final double[] shift;
+  final double[] deviation;
+  final double[] shift;
 
-  PointWorkspace(Space input, Space output, VectorFunction function, PointRule rule) {
+  PointWorkspace(Space input, Space output, VectorFunction function, UnitPoints points) {
     super(input, output, function);
-    this.points = rule.points(active.count());
+    this.points = points;
     this.displacement = new double[input.dimension()];
     this.point = new double[input.storage()];
     this.image = new double[output.storage()];
@@ -39,12 +38,16 @@ final class PointWorkspace extends BaseWorkspace {
       outputSpace.difference(image, centre, deviation);
       addDeviation(points.weight(i), covariance);
       addCross(i);
+      keep(i);
     }
     double centreFactor = points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
     Products.addSquare(centreFactor, shift, covariance);
     outputSpace.displace(centre, shift, outputMean);
     return MatchingStatus.MATCHED;
   }
+
+  /** For those who need every deviation once more. */
+  void keep(int i) {}
 
   /** Sets {@link #point} to m + L xi_i. */
   private void place(int i, double[] mean) {

@@ -1,6 +1,7 @@
 package dev.estimation.core.points;
 
 import dev.estimation.core.internal.Checks;
+import java.util.Arrays;
 
 /**
  * Weighted points xi_i that stand for N(0, I), with the centre 0 apart from the others.
@@ -22,13 +23,16 @@ public final class UnitPoints {
   private final int[] starts;
   private final int[] axes;
   private final double[] coordinates;
+  private final boolean sample;
 
   private UnitPoints(
       int dimension,
       double centreMeanWeight,
       double centreCovarianceWeight,
       double[] weights,
-      int entries) {
+      int entries,
+      boolean sample) {
+    this.sample = sample;
     this.dimension = dimension;
     this.centreMeanWeight = centreMeanWeight;
     this.centreCovarianceWeight = centreCovarianceWeight;
@@ -54,6 +58,30 @@ public final class UnitPoints {
       double centreCovarianceWeight,
       double[][] points,
       double[] weights) {
+    return make(dimension, centreMeanWeight, centreCovarianceWeight, points, weights, false);
+  }
+
+  /**
+   * Independent draws of N(0, I), of equal weight. Their mean and covariance are 0 and I up to chance
+   * only, and moments by them have standard errors.
+   *
+   * @param dimension the number of coordinates of a draw
+   * @param draws copied
+   * @return the points
+   */
+  public static UnitPoints sample(int dimension, double[][] draws) {
+    double[] weights = new double[draws.length];
+    Arrays.fill(weights, 1.0 / draws.length);
+    return make(dimension, 0, 0, draws, weights, true);
+  }
+
+  private static UnitPoints make(
+      int dimension,
+      double centreMeanWeight,
+      double centreCovarianceWeight,
+      double[][] points,
+      double[] weights,
+      boolean sample) {
     Checks.length("weights", weights, points.length);
     Checks.finite("weights", weights);
     Checks.finite("centre weights", centreMeanWeight, centreCovarianceWeight);
@@ -66,7 +94,7 @@ public final class UnitPoints {
       }
     }
     UnitPoints result = new UnitPoints(
-        dimension, centreMeanWeight, centreCovarianceWeight, weights.clone(), entries);
+        dimension, centreMeanWeight, centreCovarianceWeight, weights.clone(), entries, sample);
     result.fill(points);
     return result;
   }
@@ -102,6 +130,11 @@ public final class UnitPoints {
   /** {@return the number of points other than the centre} */
   public int size() {
     return weights.length;
+  }
+
+  /** {@return whether these are independent draws; see {@link #sample}} */
+  public boolean isSample() {
+    return sample;
   }
 
   /** {@return the weight of the centre in means} */

@@ -16,15 +16,16 @@ import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.junit.jupiter.api.Test;
 
-/** A function that reads k of n inputs is a problem of k inputs, and a regression for the others. */
+/**
+ * A function that reads k of n inputs is a problem of k inputs, and a regression for the others.
+ */
 interface ActiveInputChecks extends MatchingUnderTest {
   int WHOLE = 7;
 
   private Outcome whole(Gaussian value, BentFunction bent, int... places) {
     VectorFunction function = offeredEmbedded(bent, places);
-    MatchingWorkspace work =
-        matching(MatchingUnderTest.unitScales(WHOLE))
-            .workspace(Space.reals(WHOLE), Space.reals(3), function);
+    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(WHOLE))
+        .workspace(Space.reals(WHOLE), Space.reals(3), function);
     return Outcome.of(work, RandomGaussians.momentsOf(value));
   }
 
@@ -33,9 +34,8 @@ interface ActiveInputChecks extends MatchingUnderTest {
   }
 
   private Outcome part(Gaussian value, BentFunction bent, int... places) {
-    MatchingWorkspace work =
-        matching(MatchingUnderTest.unitScales(places.length))
-            .workspace(Space.reals(places.length), Space.reals(3), offered(bent));
+    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(places.length))
+        .workspace(Space.reals(places.length), Space.reals(3), offered(bent));
     return Outcome.of(work, RandomGaussians.momentsOf(marginal(value, places)));
   }
 
@@ -69,8 +69,8 @@ interface ActiveInputChecks extends MatchingUnderTest {
   }
 
   /**
-   * P_uz = P_ua P_aa^-1 P_az, here by solving. Tolerance: condition numbers to a few hundred times the
-   * rounding of a solution, 1e3 x 64 eps, on entries of size 1 to 10.
+   * P_uz = P_ua P_aa^-1 P_az, here by solving. Tolerance: condition numbers to a few hundred times
+   * the rounding of a solution, 1e3 x 64 eps, on entries of size 1 to 10.
    */
   @Test
   default void crossCovarianceOfUnreadInputsIsTheRegression() {

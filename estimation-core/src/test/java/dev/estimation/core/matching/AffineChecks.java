@@ -25,8 +25,7 @@ interface AffineChecks extends MatchingUnderTest {
     }
   }
 
-  private static AffineProblem problem(
-      RandomGaussians random, int n, int m, DMatrixRMaj noise) {
+  private static AffineProblem problem(RandomGaussians random, int n, int m, DMatrixRMaj noise) {
     Moments input = random.moments(n);
     return new AffineProblem(random.matrix(m, n), random.vector(m), input, noise);
   }

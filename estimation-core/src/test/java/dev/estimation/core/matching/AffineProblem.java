@@ -85,9 +85,8 @@ final class AffineProblem {
     DMatrixRMaj got = outcome.cross();
     for (int i = 0; i < n; i++) {
       for (int j = 0; j < matrix.numRows; j++) {
-        double scale =
-            Math.sqrt(input.covariance().get(i, i))
-                * Math.sqrt(covarianceWithoutNoise().get(j, j));
+        double scale = Math.sqrt(input.covariance().get(i, i))
+            * Math.sqrt(covarianceWithoutNoise().get(j, j));
         String entry = "cross-covariance[" + i + "][" + j + "]";
         assertWithin(entry, wanted.get(i, j), got.get(i, j), rounding, scale);
       }

@@ -47,10 +47,8 @@ interface AngleChecks extends MatchingUnderTest {
       double[] scales = MatchingUnderTest.unitScales(3);
       MatchingWorkspace straight =
           matching(scales).workspace(Space.reals(3), Space.reals(2), offered(bent));
-      MatchingWorkspace turned =
-          matching(scales)
-              .workspace(
-                  Space.reals(3), Space.angles(2), offered(new TurnedFunction(bent, turn)));
+      MatchingWorkspace turned = matching(scales)
+          .workspace(Space.reals(3), Space.angles(2), offered(new TurnedFunction(bent, turn)));
       compare(Outcome.of(straight, input), Outcome.of(turned, input), turn);
     }
   }
@@ -78,15 +76,13 @@ interface AngleChecks extends MatchingUnderTest {
       PolarToCartesian function = new PolarToCartesian();
       FlatSpace seam = Space.reals(1).and(Space.angles(1));
       double[] scales = {1, 1};
-      Outcome wanted =
-          Outcome.of(
-              matching(scales).workspace(Space.reals(2), Space.reals(2), offered(function)),
-              RandomGaussians.momentsOf(polar));
+      Outcome wanted = Outcome.of(
+          matching(scales).workspace(Space.reals(2), Space.reals(2), offered(function)),
+          RandomGaussians.momentsOf(polar));
       Moments input = new Moments(seam);
       input.set(polar);
       Outcome got =
-          Outcome.of(
-              matching(scales).workspace(seam, Space.reals(2), offered(function)), input);
+          Outcome.of(matching(scales).workspace(seam, Space.reals(2), offered(function)), input);
       assertVector("mean", wanted.mean, got.mean, meanRounding(2, MAGNITUDE), 1);
       double rounding = bentCovarianceRounding(2, MAGNITUDE, wanted.smallestDeviation());
       assertCovariance("covariance", wanted.covariance, got.covariance, rounding);
@@ -100,17 +96,14 @@ interface AngleChecks extends MatchingUnderTest {
     MomentMatching matching = matching(1, 1);
     Moments input = new Moments(seam);
     input.set(Gaussian.independent(new double[] {2, Math.PI - 0.01}, new double[] {0.1, 0.5}));
-    PlainFunction watched =
-        new PlainFunction(
-            (u, given, z) -> {
-              assertInRange(u[1]);
-              polar.evaluate(u, given, z);
-            });
+    PlainFunction watched = new PlainFunction((u, given, z) -> {
+      assertInRange(u[1]);
+      polar.evaluate(u, given, z);
+    });
     Outcome.of(matching.workspace(seam, Space.reals(2), watchedWithJacobian(watched)), input);
   }
 
-  private static VectorFunction watchedWithJacobian(
-      PlainFunction watched) {
+  private static VectorFunction watchedWithJacobian(PlainFunction watched) {
     return new VectorFunction() {
       @Override
       public void evaluate(double[] input, double[] given, double[] output) {
@@ -129,11 +122,7 @@ interface AngleChecks extends MatchingUnderTest {
   default void theMeanOfAnAngleIsInRange() {
     for (double raw : new double[] {Math.PI, -Math.PI, 7, -7, 100, Math.nextDown(Math.PI)}) {
       MatchingWorkspace work =
-          matching(1)
-              .workspace(
-                  Space.reals(1),
-                  Space.angles(1),
-                  offered(new TurnedBy(raw)));
+          matching(1).workspace(Space.reals(1), Space.angles(1), offered(new TurnedBy(raw)));
       Outcome outcome = Outcome.of(work, new Moments(Space.reals(1)));
       assertInRange(outcome.mean[0]);
       // 100 rad is 16 turns, each rounded by 2.4e-16.

@@ -15,8 +15,9 @@ import org.junit.jupiter.api.Test;
 /** Affine maps, exact by algebra, where covariances are hard. */
 interface ConditioningChecks extends MatchingUnderTest {
   /**
-   * Two inputs that differ by 1.4e-6 at most in standard deviation. Tolerance relative to the sum of
-   * absolute terms, 4, as for any factorisation: the variance of the difference is rounding below it.
+   * Two inputs that differ by 1.4e-6 at most in standard deviation. Tolerance relative to the sum
+   * of absolute terms, 4, as for any factorisation: the variance of the difference is rounding
+   * below it.
    */
   @Test
   default void nearlySingularCovariances() {
@@ -55,19 +56,15 @@ interface ConditioningChecks extends MatchingUnderTest {
       }
     }
     Moments input = RandomGaussians.momentsOf(Gaussian.of(mean, covariance));
-    MatchingWorkspace work =
-        matching(deviation)
-            .workspace(
-                Space.reals(n),
-                Space.reals(n),
-                offered(new AffineFunction(matrix, new double[n])));
+    MatchingWorkspace work = matching(deviation)
+        .workspace(
+            Space.reals(n), Space.reals(n), offered(new AffineFunction(matrix, new double[n])));
     Outcome outcome = Outcome.of(work, input);
     DMatrixRMaj wanted =
         new AffineProblem(matrix, new double[n], input, null).covarianceWithoutNoise();
     // Every input and output has about the size of its own deviation: ten of them at most.
     double rounding = covarianceRounding(n, 10, 1);
-    assertCovariance(
-        "covariance", wanted, outcome.covariance, rounding);
+    assertCovariance("covariance", wanted, outcome.covariance, rounding);
   }
 
   /** Means far from zero, in standard deviations: digits are lost in proportion. */
@@ -77,9 +74,8 @@ interface ConditioningChecks extends MatchingUnderTest {
       RandomGaussians random = new RandomGaussians(71);
       double[] mean = {size, -size, size};
       Moments input = RandomGaussians.momentsOf(Gaussian.of(mean, random.covariance(3)));
-      AffineProblem problem =
-          new AffineProblem(
-              random.matrix(2, 3), new double[] {size, -2 * size}, input, random.covariance(2));
+      AffineProblem problem = new AffineProblem(
+          random.matrix(2, 3), new double[] {size, -2 * size}, input, random.covariance(2));
       problem.check(this, 1, 1, 1);
     }
   }

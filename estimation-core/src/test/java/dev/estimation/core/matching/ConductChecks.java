@@ -35,9 +35,8 @@ interface ConductChecks extends MatchingUnderTest {
   default void evaluationsFollowTheInputsCarried() {
     EmbeddedFunction function =
         new EmbeddedFunction(offered(new BentFunction(2, 2, 1)), 2, 4, 3, 0);
-    MatchingWorkspace work =
-        matching(MatchingUnderTest.unitScales(4))
-            .workspace(Space.reals(4), Space.reals(2), function);
+    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(4))
+        .workspace(Space.reals(4), Space.reals(2), function);
     Outcome outcome = Outcome.of(work, new RandomGaussians(4).moments(4));
     assertEquals(evaluations(carried(2, 4)), work.evaluations());
     assertEquals(carried(2, 4), outcome.unitCross.numRows);

@@ -13,21 +13,18 @@ import dev.estimation.testing.RandomGaussians;
 import org.junit.jupiter.api.Test;
 
 /**
- * Components of zero variance equal a problem in which they are constants. True of bent functions only
- * where the spread does not grow with the dimension: derivatives, kappa = 3 - n, products.
+ * Components of zero variance equal a problem in which they are constants. True of bent functions
+ * only where the spread does not grow with the dimension: derivatives, kappa = 3 - n, products.
  */
 interface FrozenInputChecks extends MatchingUnderTest {
   @Test
   default void componentsOfZeroVarianceAreConstants() {
     RandomGaussians random = new RandomGaussians(8);
     Gaussian whole = ZeroVarianceChecks.frozen(random.gaussian(4), 0b0101);
-    Gaussian part =
-        Gaussian.of(
-            new double[] {whole.mean(1), whole.mean(3)},
-            new double[][] {
-              {whole.covariance(1, 1), whole.covariance(1, 3)},
-              {whole.covariance(3, 1), whole.covariance(3, 3)},
-            });
+    Gaussian part = Gaussian.of(new double[] {whole.mean(1), whole.mean(3)}, new double[][] {
+      {whole.covariance(1, 1), whole.covariance(1, 3)},
+      {whole.covariance(3, 1), whole.covariance(3, 3)},
+    });
     BentFunction bent = new BentFunction(4, 3, 9);
     VectorFunction fixed = offered(withConstants(bent, whole.mean()));
     Outcome wanted = carry(part, fixed);
@@ -40,9 +37,8 @@ interface FrozenInputChecks extends MatchingUnderTest {
 
   private Outcome carry(Gaussian input, VectorFunction function) {
     int n = input.dimension();
-    MatchingWorkspace work =
-        matching(MatchingUnderTest.unitScales(n))
-            .workspace(Space.reals(n), Space.reals(3), function);
+    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(n))
+        .workspace(Space.reals(n), Space.reals(3), function);
     return Outcome.of(work, RandomGaussians.momentsOf(input));
   }
 
@@ -50,16 +46,14 @@ interface FrozenInputChecks extends MatchingUnderTest {
   private static VectorFunction withConstants(BentFunction bent, double[] values) {
     PlainFunction plain =
         new PlainFunction((u, given, z) -> bent.evaluate(filled(values, u), given, z));
-    Structure structure =
-        Structure.UNKNOWN.withJacobian(
-            (u, given, jacobian) -> {
-              double[] all = new double[12];
-              bent.structure().jacobian().orElseThrow().evaluate(filled(values, u), given, all);
-              for (int r = 0; r < 3; r++) {
-                jacobian[2 * r] = all[4 * r + 1];
-                jacobian[2 * r + 1] = all[4 * r + 3];
-              }
-            });
+    Structure structure = Structure.UNKNOWN.withJacobian((u, given, jacobian) -> {
+      double[] all = new double[12];
+      bent.structure().jacobian().orElseThrow().evaluate(filled(values, u), given, all);
+      for (int r = 0; r < 3; r++) {
+        jacobian[2 * r] = all[4 * r + 1];
+        jacobian[2 * r + 1] = all[4 * r + 3];
+      }
+    });
     return new VectorFunction() {
       @Override
       public void evaluate(double[] input, double[] given, double[] output) {

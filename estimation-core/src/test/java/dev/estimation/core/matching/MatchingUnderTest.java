@@ -6,9 +6,10 @@ import java.util.Arrays;
 /**
  * What a contract test has to know of a matching, and how far rounding may take its results.
  *
- * <p>Three numbers tell the rounding: how far from the mean the function is evaluated (the nearer, the
- * fewer digits a deviation has), by how much weights amplify the rounding of the function, and how many
- * inputs are carried. {@link #ROUNDINGS} covers the constants of sums over points and inputs.
+ * <p>Three numbers tell the rounding: how far from the mean the function is evaluated (the nearer,
+ * the fewer digits a deviation has), by how much weights amplify the rounding of the function, and
+ * how many inputs are carried. {@link #ROUNDINGS} covers the constants of sums over points and
+ * inputs.
  */
 interface MatchingUnderTest {
   /** Units of eps that a result may be off beside the named factors: sums of up to 5^8 terms. */
@@ -57,8 +58,8 @@ interface MatchingUnderTest {
   }
 
   /**
-   * The error that rounding may make in a covariance, relative to sqrt(p_ii p_jj): that of deviations,
-   * and the square of that of the mean, which enters as a factor times delta delta'.
+   * The error that rounding may make in a covariance, relative to sqrt(p_ii p_jj): that of
+   * deviations, and the square of that of the mean, which enters as a factor times delta delta'.
    *
    * @param magnitude the largest number among inputs and outputs
    * @param deviation the smallest standard deviation of those
@@ -70,8 +71,8 @@ interface MatchingUnderTest {
   }
 
   /**
-   * The same where the function bends: the shift of the mean, of a deviation at most, is squared with
-   * its rounding, times beta - alpha^2, 3 at most.
+   * The same where the function bends: the shift of the mean, of a deviation at most, is squared
+   * with its rounding, times beta - alpha^2, 3 at most.
    */
   default double bentCovarianceRounding(int carried, double magnitude, double deviation) {
     double mean = ROUNDINGS * amplification(carried) * magnitude / deviation;

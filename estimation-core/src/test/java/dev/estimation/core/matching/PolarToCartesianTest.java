@@ -21,8 +21,8 @@ class PolarToCartesianTest {
   }
 
   /**
-   * 1e-12 of the largest entry: some tens of roundings of numbers near 1, on variances from 2e-3. At
-   * alpha = 1e-3 rounding is multiplied by 2e6: 1e-8.
+   * 1e-12 of the largest entry: some tens of roundings of numbers near 1, on variances from 2e-3.
+   * At alpha = 1e-3 rounding is multiplied by 2e6: 1e-8.
    */
   @ParameterizedTest
   @MethodSource
@@ -37,9 +37,9 @@ class PolarToCartesianTest {
   }
 
   /**
-   * With 20 nodes the truncation, sigma^40 20! / 40! for sines and 2^40 times that for their squares,
-   * is below 1e-17 at a deviation of 1 rad; what is left is rounding of numbers up to 2e3 times larger
-   * than the deviations: 1e-12.
+   * With 20 nodes the truncation, sigma^40 20! / 40! for sines and 2^40 times that for their
+   * squares, is below 1e-17 at a deviation of 1 rad; what is left is rounding of numbers up to 2e3
+   * times larger than the deviations: 1e-12.
    */
   @ParameterizedTest
   @MethodSource("cases")
@@ -63,7 +63,8 @@ class PolarToCartesianTest {
   void errorsOfTheMeanFallAsTheTableSays(String name) {
     PolarCase polar = PolarCase.named(name);
     List<ReferenceTable.Row> rows = new ArrayList<>(ruleRows(name));
-    rows.sort(Comparator.comparingDouble((ReferenceTable.Row r) -> error(polar, mean(r))).reversed());
+    rows.sort(Comparator.comparingDouble((ReferenceTable.Row r) -> error(polar, mean(r)))
+        .reversed());
     assertEquals("linearisation", rows.get(0).text("rule"));
     double last = Double.POSITIVE_INFINITY;
     for (ReferenceTable.Row row : rows) {
@@ -97,8 +98,8 @@ class PolarToCartesianTest {
 
   /**
    * Textbook example (Julier and Uhlmann 1997, constants from memory): range 1 m, deviation 0.02 m,
-   * bearing 90 degrees, deviation 15 degrees. Linearisation puts the target on the arc; the centre of
-   * the bent cloud lies inside, by the closed form 1 - exp(-sigma^2 / 2).
+   * bearing 90 degrees, deviation 15 degrees. Linearisation puts the target on the arc; the centre
+   * of the bent cloud lies inside, by the closed form 1 - exp(-sigma^2 / 2).
    */
   @Test
   void linearisationIsBiasedByTheSagOfTheArc() {
@@ -117,16 +118,15 @@ class PolarToCartesianTest {
 
   /**
    * Common practice: with a good range and a poor bearing the true cloud is bent, and an honest
-   * covariance is wide along the line of sight. There linearisation says sigma_r^2; the closed form is
-   * (r^2 + sigma_r^2) (1 + exp(-2 s^2)) / 2 - r^2 exp(-s^2).
+   * covariance is wide along the line of sight. There linearisation says sigma_r^2; the closed form
+   * is (r^2 + sigma_r^2) (1 + exp(-2 s^2)) / 2 - r^2 exp(-s^2).
    */
   @Test
   void linearisationIsTooSureAlongTheLineOfSight() {
     PolarCase polar = PolarCase.named("bearing_0");
     double s = polar.polar().standardDeviation(1);
     double rangeVariance = polar.polar().covariance(0, 0);
-    double exact =
-        (1 + rangeVariance) * (1 + Math.exp(-2 * s * s)) / 2 - Math.exp(-s * s);
+    double exact = (1 + rangeVariance) * (1 + Math.exp(-2 * s * s)) / 2 - Math.exp(-s * s);
     // Cancellation of numbers near 1 down to 2.6e-3: some eps / 2.6e-3.
     assertRelative("closed form", polar.exact().number("cov_xx"), exact, 1e-12);
     double factor = exact / rangeVariance;

@@ -27,9 +27,8 @@ class QuadraticFormsTest {
 
   private static Outcome carry(String name, ReferenceTable.Row row) {
     Gaussian input = input(row);
-    MatchingWorkspace work =
-        NamedMatchings.of(name)
-            .workspace(Space.reals(input.dimension()), Space.reals(1), new Form(row));
+    MatchingWorkspace work = NamedMatchings.of(name)
+        .workspace(Space.reals(input.dimension()), Space.reals(1), new Form(row));
     return Outcome.of(work, RandomGaussians.momentsOf(input));
   }
 
@@ -45,7 +44,10 @@ class QuadraticFormsTest {
     }
   }
 
-  /** Exact to degree 3: the mean, and the covariance with x. At alpha = 1e-3 rounding grows 2e6-fold. */
+  /**
+   * Exact to degree 3: the mean, and the covariance with x. At alpha = 1e-3 rounding grows
+   * 2e6-fold.
+   */
   @ParameterizedTest
   @MethodSource("forms")
   void pointsOnAxesGiveTheMeanAndTheCovarianceWithTheInput(ReferenceTable.Row row) {

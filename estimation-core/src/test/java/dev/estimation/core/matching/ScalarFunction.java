@@ -7,17 +7,16 @@ import org.apache.commons.math3.special.Erf;
 
 /** Functions of one number, by the names that gaussian_scalar_moments.csv gives them. */
 final class ScalarFunction {
-  private static final Map<String, DoubleUnaryOperator> SMOOTH =
-      Map.of(
-          "x^2", x -> x * x,
-          "x^3", x -> x * x * x,
-          "x^4", x -> x * x * x * x,
-          "x^5", x -> x * x * x * x * x,
-          "exp(x)", Math::exp,
-          "sin(x)", Math::sin,
-          "cos(x)", Math::cos,
-          "x*exp(-x^2/2)", x -> x * Math.exp(-x * x / 2),
-          "Phi(x)", x -> Erf.erfc(-x / Math.sqrt(2)) / 2);
+  private static final Map<String, DoubleUnaryOperator> SMOOTH = Map.of(
+      "x^2", x -> x * x,
+      "x^3", x -> x * x * x,
+      "x^4", x -> x * x * x * x,
+      "x^5", x -> x * x * x * x * x,
+      "exp(x)", Math::exp,
+      "sin(x)", Math::sin,
+      "cos(x)", Math::cos,
+      "x*exp(-x^2/2)", x -> x * Math.exp(-x * x / 2),
+      "Phi(x)", x -> Erf.erfc(-x / Math.sqrt(2)) / 2);
 
   private ScalarFunction() {}
 

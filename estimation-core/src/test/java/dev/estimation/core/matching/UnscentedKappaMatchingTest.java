@@ -1,7 +1,7 @@
 package dev.estimation.core.matching;
 
-import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.core.points.PointRule;
+import dev.estimation.core.points.UnscentedRule;
 
 /** Unscented with kappa = 3 - n. */
 class UnscentedKappaMatchingTest extends PointMatchingContract implements FrozenInputChecks {

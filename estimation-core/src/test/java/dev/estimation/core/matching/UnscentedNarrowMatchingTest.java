@@ -1,7 +1,7 @@
 package dev.estimation.core.matching;
 
-import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.core.points.PointRule;
+import dev.estimation.core.points.UnscentedRule;
 
 /** Scaled unscented, alpha = 1e-3, beta = 2, kappa = 0. */
 class UnscentedNarrowMatchingTest extends PointMatchingContract {

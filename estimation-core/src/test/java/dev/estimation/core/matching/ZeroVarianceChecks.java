@@ -47,9 +47,8 @@ interface ZeroVarianceChecks extends MatchingUnderTest {
     Moments input = RandomGaussians.momentsOf(frozen(random.gaussian(n), (1 << n) - 1));
     BentFunction function = new BentFunction(n, 3, 6);
     DMatrixRMaj noise = random.covariance(3);
-    MatchingWorkspace work =
-        matching(MatchingUnderTest.unitScales(n))
-            .workspace(Space.reals(n), Space.reals(3), offered(function));
+    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(n))
+        .workspace(Space.reals(n), Space.reals(3), offered(function));
     Outcome outcome = Outcome.of(work, input, given, noise);
     double[] image = new double[3];
     function.evaluate(input.mean(), given, image);

@@ -23,8 +23,7 @@ final class DegreeCheck {
     assertEquals(row.text("first_failing_monomial"), name(failing), row.toString());
     assertEquals(row.number("exact"), UnitMoments.exact(failing));
     double value = UnitMoments.of(points, failing);
-    assertWithin(
-        row.toString(), row.number("rule_value"), value, tolerance(points, failing), 1);
+    assertWithin(row.toString(), row.number("rule_value"), value, tolerance(points, failing), 1);
     assertWithin(row.toString(), row.number("min_weight"), smallest(points, row), 1e-15, 1);
   }
 
@@ -54,8 +53,8 @@ final class DegreeCheck {
   }
 
   /**
-   * Rounding of the sum: 64 eps times the sum of the absolute terms, enough for the ten products in a
-   * term and for sums of a thousand terms of random sign.
+   * Rounding of the sum: 64 eps times the sum of the absolute terms, enough for the ten products in
+   * a term and for sums of a thousand terms of random sign.
    */
   private static double tolerance(UnitPoints points, int[] powers) {
     double size = 0;

@@ -33,8 +33,9 @@ abstract class PointRuleContract {
   }
 
   /**
-   * Rounding of a sum of N terms of total size A: each term carries a few eps of its own, and errors
-   * of random sign add up as sqrt(N). 16 (4 + sqrt N) eps A is some ten times what is expected.
+   * Rounding of a sum of N terms of total size A: each term carries a few eps of its own, and
+   * errors of random sign add up as sqrt(N). 16 (4 + sqrt N) eps A is some ten times what is
+   * expected.
    */
   private static double tolerance(UnitPoints points) {
     return 16 * (4 + Math.sqrt(points.size())) * EPSILON * points.weightAmplification();

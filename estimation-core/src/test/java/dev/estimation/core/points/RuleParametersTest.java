@@ -22,8 +22,7 @@ class RuleParametersTest {
   @ParameterizedTest
   @ValueSource(doubles = {0, -0.5, Double.NaN, Double.POSITIVE_INFINITY})
   void alphaMustBeFiniteAndAboveZero(double alpha) {
-    assertRefused(
-        () -> UnscentedRule.scaled(alpha, 2, 0), "alpha", Double.toString(alpha));
+    assertRefused(() -> UnscentedRule.scaled(alpha, 2, 0), "alpha", Double.toString(alpha));
     assertRefused(
         () -> UnscentedRule.scaled(alpha, 2, n -> 3 - n), "alpha", Double.toString(alpha));
   }
@@ -32,8 +31,7 @@ class RuleParametersTest {
   void betaAndKappaMustBeFinite() {
     assertRefused(() -> UnscentedRule.scaled(1, Double.NaN, 0), "beta", "NaN");
     assertRefused(() -> UnscentedRule.scaled(1, 2, Double.NaN), "kappa", "NaN");
-    assertRefused(
-        () -> UnscentedRule.scaled(1, 2, Double.NEGATIVE_INFINITY), "kappa", "-Infinity");
+    assertRefused(() -> UnscentedRule.scaled(1, 2, Double.NEGATIVE_INFINITY), "kappa", "-Infinity");
   }
 
   @Test
@@ -47,8 +45,7 @@ class RuleParametersTest {
   @ParameterizedTest
   @ValueSource(ints = {-1, 0, 1, 101})
   void nodesPerAxisAreFromTwoToOneHundred(int nodes) {
-    assertRefused(
-        () -> GaussHermiteRule.product(nodes), "from 2 to 100", Integer.toString(nodes));
+    assertRefused(() -> GaussHermiteRule.product(nodes), "from 2 to 100", Integer.toString(nodes));
   }
 
   /** The counts are p^n: 10^6, 3^11, 2^17 and 7^6; the largest allowed ones are 10^5 and 2^16. */
@@ -57,7 +54,10 @@ class RuleParametersTest {
   void tooManyPointsAreRefusedWithTheirCount(int nodes, int dimension, String count) {
     assertRefused(
         () -> GaussHermiteRule.product(nodes).points(dimension),
-        count, "100000", nodes + " nodes", dimension + " axes");
+        count,
+        "100000",
+        nodes + " nodes",
+        dimension + " axes");
   }
 
   @Test
@@ -73,7 +73,9 @@ class RuleParametersTest {
     assertEquals(UnitPoints.LARGEST_SIZE, points.size());
   }
 
-  /** The whole range of nodes: a sum of p terms near 1, and second moments of terms to size 14^2 w. */
+  /**
+   * The whole range of nodes: a sum of p terms near 1, and second moments of terms to size 14^2 w.
+   */
   @Test
   void everyNumberOfNodesGivesTheMomentsOfOneAxis() {
     for (int p = 2; p <= 100; p++) {
@@ -106,7 +108,9 @@ class RuleParametersTest {
     assertTrue(UnscentedRule.scaled(1e-3, 2, 0).points(2).centreMeanWeight() < -999_998);
   }
 
-  /** By its formula: 2 / alpha^2 - 1 for kappa = 0 and alpha below 1; 1e-14: sums of 2 n + 1 terms. */
+  /**
+   * By its formula: 2 / alpha^2 - 1 for kappa = 0 and alpha below 1; 1e-14: sums of 2 n + 1 terms.
+   */
   @ParameterizedTest
   @ValueSource(doubles = {0.5, 0.1, 1e-3, 1e-4})
   void amplificationOfTheScaledRule(double alpha) {

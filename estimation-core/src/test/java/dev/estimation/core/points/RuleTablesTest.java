@@ -16,20 +16,20 @@ class RuleTablesTest {
   }
 
   /**
-   * Relative 1e-14: each number is a quotient of few operations, and the centre's weight, a difference
-   * of two such, is of their size or larger unless it is zero; hence the scale of 1 at least.
+   * Relative 1e-14: each number is a quotient of few operations, and the centre's weight, a
+   * difference of two such, is of their size or larger unless it is zero; hence the scale of 1 at
+   * least.
    */
   @ParameterizedTest
   @MethodSource
   void scaledUnscented(ReferenceTable.Row row) {
     int n = row.count("n");
-    UnitPoints points =
-        UnscentedRule.scaled(row.number("alpha"), row.number("beta"), row.number("kappa"))
-            .points(n);
+    UnitPoints points = UnscentedRule.scaled(
+            row.number("alpha"), row.number("beta"), row.number("kappa"))
+        .points(n);
     assertEquals(2 * n, points.size());
     double mean = row.number("wm0");
-    assertWithin(
-        "wm0", mean, points.centreMeanWeight(), 1e-14, Math.max(1, Math.abs(mean)));
+    assertWithin("wm0", mean, points.centreMeanWeight(), 1e-14, Math.max(1, Math.abs(mean)));
     double covariance = row.number("wc0");
     assertWithin(
         "wc0",

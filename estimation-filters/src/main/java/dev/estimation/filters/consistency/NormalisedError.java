@@ -3,7 +3,7 @@ package dev.estimation.filters.consistency;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.LowerFactor;
-import dev.estimation.core.space.FlatSpace;
+import dev.estimation.core.space.Space;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -15,10 +15,10 @@ import org.ejml.data.DMatrixRMaj;
  * path. Source: Bar-Shalom, Li and Kirubarajan 2001, section 5.4.2.
  */
 public final class NormalisedError {
-  private final FlatSpace space;
+  private final Space space;
   private final int[] components;
 
-  private NormalisedError(FlatSpace space, int[] components) {
+  private NormalisedError(Space space, int[] components) {
     this.space = space;
     this.components = components;
   }
@@ -30,7 +30,7 @@ public final class NormalisedError {
    * @param components distinct indices of the components whose truth is known; copied
    * @return the measure
    */
-  public static NormalisedError of(FlatSpace space, int... components) {
+  public static NormalisedError of(Space space, int... components) {
     Checks.distinctIndices("components", components, space.dimension());
     if (components.length == 0) {
       throw new IllegalArgumentException("components must not be empty");
@@ -48,9 +48,8 @@ public final class NormalisedError {
    *
    * @param estimate of the whole state
    * @param truth of the chosen components, in their order
-   * @return e' P^-1 e
-   * @throws IllegalArgumentException if shapes differ or the covariance of the components is not
-   *     positive definite, where no normalised error exists
+   * @return e' P^-1 e; NaN if the covariance of the components is not positive definite
+   * @throws IllegalArgumentException if shapes differ
    */
   public double squared(Gaussian estimate, double[] truth) {
     int k = components.length;
@@ -70,8 +69,7 @@ public final class NormalisedError {
     }
     LowerFactor factor = new LowerFactor(k);
     if (!factor.factorDefinite(covariance)) {
-      throw new IllegalArgumentException(
-          "covariance of the components is not positive definite: " + factor.failure());
+      return Double.NaN;
     }
     double[] error = new double[space.dimension()];
     space.difference(mean, actual, error);

@@ -88,10 +88,7 @@ class ConsistencyTest {
   void normalisedErrorChecksItsArguments() {
     NormalisedError error = NormalisedError.of(Space.reals(2), 1);
     Gaussian flat = Gaussian.independent(new double[2], new double[2]);
-    String message = assertThrows(
-            IllegalArgumentException.class, () -> error.squared(flat, new double[1]))
-        .getMessage();
-    assertTrue(message.contains("pivot 1 of 1 is 0.0"), message);
+    assertTrue(Double.isNaN(error.squared(flat, new double[1])), "a variance of 0 has no NEES");
     assertThrows(IllegalArgumentException.class, () -> error.squared(flat, new double[2]));
     assertThrows(IllegalArgumentException.class, () -> NormalisedError.of(Space.reals(2), 2));
     assertThrows(IllegalArgumentException.class, () -> NormalisedError.of(Space.reals(2)));

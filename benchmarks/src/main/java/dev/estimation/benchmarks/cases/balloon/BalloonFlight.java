@@ -12,25 +12,25 @@ import java.util.Random;
 
 /**
  * Simulates one flight exactly as the filter believes it to be: the true start is drawn from the
- * filter's own start, the wind walks with the filter's own process noise, and measurements err by the
- * sensor's own noise. So an honest covariance is possible, and whatever is not honest comes from the
- * way of carrying moments.
+ * filter's own start, the wind walks with the filter's own process noise, and measurements err by
+ * the sensor's own noise. So an honest covariance is possible, and whatever is not honest comes
+ * from the way of carrying moments.
  *
- * <p>{@link Random} and not a newer generator, because its normal draws are specified: the same seed
- * gives the same flight on every Java version.
+ * <p>{@link Random} and not a newer generator, because its normal draws are specified: the same
+ * seed gives the same flight on every Java version.
  */
 final class BalloonFlight {
-  static final double RANGE_DEVIATION = 5;
-  static final double ANGLE_DEVIATION = Math.toRadians(1.5);
+  static final double RANGE_DEVIATION = 3;
+  static final double ANGLE_DEVIATION = Math.toRadians(1.0);
   static final double WIND_DENSITY = 0.02;
   static final double ASCENT_DENSITY = 0.002;
   static final double INTERVAL = 10;
-  static final int STEPS = 120;
+  static final int STEPS = 90;
   static final double GATE = 0.999;
 
   private static final int AXES = 3;
   private static final double[] START_MEAN = {18_000, 24_000, 8_000, 8, 6, 5};
-  private static final double[] START_DEVIATIONS = {2_500, 2_500, 1_000, 6, 6, 1};
+  private static final double[] START_DEVIATIONS = {4_000, 4_000, 2_000, 6, 6, 1};
 
   private final ConstantVelocity motion =
       new ConstantVelocity(WIND_DENSITY, WIND_DENSITY, ASCENT_DENSITY);

@@ -7,8 +7,8 @@ import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
  * Slant range (m), azimuth (rad, from north to east) and elevation (rad, above the horizon) of a
- * balloon as seen from a station at the origin. The state begins with east, north and up (m). Straight
- * above the station there is no azimuth: the Jacobian is not finite. <i>Immutable.</i>
+ * balloon as seen from a station at the origin. The state begins with east, north and up (m).
+ * Straight above the station there is no azimuth: the Jacobian is not finite. <i>Immutable.</i>
  */
 final class GroundStation implements DifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1).and(Space.angles(2));

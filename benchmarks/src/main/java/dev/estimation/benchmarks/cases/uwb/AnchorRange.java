@@ -6,8 +6,8 @@ import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
- * The distance (m) of a tag of known height to an anchor, plus a constant bias. Given: the anchor's x,
- * y, z (m). The state begins with x and y. <i>Immutable.</i>
+ * The distance (m) of a tag of known height to an anchor, plus a constant bias. Given: the anchor's
+ * x, y, z (m). The state begins with x and y. <i>Immutable.</i>
  */
 final class AnchorRange implements DifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1);

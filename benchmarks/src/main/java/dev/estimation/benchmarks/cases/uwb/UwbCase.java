@@ -9,8 +9,8 @@ import dev.estimation.core.gaussian.Gaussian;
 import java.util.List;
 
 /**
- * A tag placed by ranges, from three starts: {@code near} the true place, {@code offset} from it, and
- * {@code cold} with next to no knowledge, in the middle of the anchors.
+ * A tag placed by ranges, from three starts: {@code near} the true place, {@code offset} from it,
+ * and {@code cold} with next to no knowledge, in the middle of the anchors.
  */
 public final class UwbCase implements ReplayCase {
   private static final double ACCELERATION_DENSITY = 1.0;

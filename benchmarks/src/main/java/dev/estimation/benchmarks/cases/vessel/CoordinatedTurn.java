@@ -6,12 +6,12 @@ import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
 
 /**
- * A turn at constant speed and turn rate, disturbed by white acceleration and a turn rate that walks
- * at random. State: north, east (m), velocity north, east (m/s), turn rate (rad/s), positive from
- * north to east. With u = turn rate * dt, the arc is written by sin(u)/u and (1 - cos(u))/u, which
- * exist for a straight course as well. <i>Immutable.</i>
+ * A turn at constant speed and turn rate, disturbed by white acceleration and a turn rate that
+ * walks at random. State: north, east (m), velocity north, east (m/s), turn rate (rad/s), positive
+ * from north to east. With u = turn rate * dt, the arc is written by sin(u)/u and (1 - cos(u))/u,
+ * which exist for a straight course as well. <i>Immutable.</i>
  */
-final class CoordinatedTurn implements DifferentiableMotion {
+public final class CoordinatedTurn implements DifferentiableMotion {
   private static final int DIMENSION = 5;
   private static final FlatSpace SPACE = Space.reals(DIMENSION);
 
@@ -24,7 +24,7 @@ final class CoordinatedTurn implements DifferentiableMotion {
    * @param accelerationDensity spectral density of the acceleration (m^2/s^3)
    * @param turnDensity spectral density of the turn acceleration (rad^2/s^3)
    */
-  CoordinatedTurn(double accelerationDensity, double turnDensity) {
+  public CoordinatedTurn(double accelerationDensity, double turnDensity) {
     this.accelerationDensity = accelerationDensity;
     this.turnDensity = turnDensity;
   }

@@ -13,8 +13,8 @@ import java.util.Map;
 import java.util.Optional;
 
 /**
- * The radar detections of labelled targets in a log: labels point to detections and scans, which may
- * stand in any order. Every label is followed, also those of other sensors, so that a broken
+ * The radar detections of labelled targets in a log: labels point to detections and scans, which
+ * may stand in any order. Every label is followed, also those of other sensors, so that a broken
  * reference is told wherever it is.
  */
 final class VesselLog {

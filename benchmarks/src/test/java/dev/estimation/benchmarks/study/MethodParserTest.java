@@ -1,0 +1,92 @@
+package dev.estimation.benchmarks.study;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.estimation.benchmarks.log.BadInputException;
+import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.gaussian.Moments;
+import dev.estimation.core.matching.MatchingWorkspace;
+import dev.estimation.core.space.Space;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
+
+class MethodParserTest {
+  private static final VectorFunction SUM_OF_SQUARES = (input, given, output) -> {
+    output[0] = input[0] * input[0] + input[1] * input[1];
+  };
+
+  /**
+   * The variance of a sum of two squares tells parameters apart. By hand: with c^2 = alpha^2 (2 +
+   * kappa), all points have the value c^2 and the weights 1 / (2 c^2), so the mean is 2 and the
+   * variance 2 c^2 + 4 (beta - alpha^2). Cubature: as alpha 1, beta and kappa 0. Exact: 4.
+   */
+  @ParameterizedTest
+  @CsvSource({
+    "'unscented:1,2,0', 8",
+    "'unscented:1,0,1', 2",
+    "'unscented:1,0,3-n', 2",
+    "'unscented:1,1,2', 8",
+    "'unscented:1,1,4-n', 8",
+    "'unscented:+1.0,-0.5,3e0', 4",
+    "cubature, 0",
+    "hermite:3, 4"
+  })
+  void readsItsNumbers(String typed, double variance) {
+    Method method = MethodParser.parse(typed);
+    assertEquals(typed, method.typed());
+    MatchingWorkspace work =
+        method.matching().workspace(Space.reals(2), Space.reals(1), SUM_OF_SQUARES);
+    Moments input = new Moments(Space.reals(2));
+    input.set(Gaussian.independent(new double[2], new double[] {1, 1}));
+    work.carry(input, new double[0], null);
+    assertEquals(2, work.output().mean()[0], 1e-13); // rounding of sums of a few numbers
+    assertEquals(variance, work.output().covariance().get(0, 0), 1e-12);
+  }
+
+  @Test
+  void readsTheDefaults() {
+    assertEquals(
+        6, MethodParser.DEFAULT.stream().map(MethodParser::parse).distinct().count());
+  }
+
+  @ParameterizedTest
+  @ValueSource(
+      strings = {
+        "",
+        "Linear",
+        "linear:",
+        "linear:1",
+        "cubature:3",
+        "unscented",
+        "unscented:1,2",
+        "unscented:1,2,0,0",
+        "unscented:0,2,0",
+        "unscented:-1,2,0",
+        "unscented:a,2,0",
+        "unscented:1,NaN,0",
+        "unscented:1,2,n",
+        "unscented:1,2,-n",
+        "unscented:1,2,3-m",
+        "unscented:1, 2,0",
+        "unscented:1e999,2,0",
+        "hermite",
+        "hermite:",
+        "hermite:1",
+        "hermite:3.5",
+        "hermite:101",
+        "hermite:3,3",
+        "spline"
+      })
+  void refusesTheRestInOneLine(String typed) {
+    String message =
+        assertThrows(BadInputException.class, () -> MethodParser.parse(typed)).getMessage();
+    assertTrue(message.contains("method"), message);
+    assertTrue(message.contains(typed), message);
+    assertTrue(message.lines().count() == 1, message);
+  }
+}

@@ -1,0 +1,161 @@
+package dev.estimation.core.matching;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import dev.estimation.core.function.Structure;
+import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Moments;
+import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.PointRule;
+import dev.estimation.core.points.UnscentedRule;
+import dev.estimation.core.space.Space;
+import dev.estimation.testing.AllocationMeter;
+import dev.estimation.testing.RandomGaussians;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.stream.Stream;
+import org.ejml.data.DMatrixRMaj;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.Arguments;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** A call allocates nothing, by the JVM's own count of the thread's bytes. */
+class MatchingAllocationTest {
+  private static final int[] SIZES = {2, 5, 7, 8, 12};
+
+  static Stream<Arguments> matchings() {
+    List<Arguments> all = new ArrayList<>();
+    for (int n : SIZES) {
+      double[] scales = MatchingUnderTest.unitScales(n);
+      all.add(Arguments.of("linearisation", n, Linearisation.firstOrder(), true));
+      all.add(Arguments.of(
+          "differences", n, Linearisation.firstOrder().withInputScales(scales), false));
+      for (String name : List.of("unscented 1 2 0", "unscented 1e-3 2 0", "cubature 3")) {
+        all.add(Arguments.of(name, n, NamedMatchings.of(name), false));
+      }
+      PointRule kappa = UnscentedRule.scaled(1, 0, k -> 3 - k);
+      all.add(Arguments.of("kappa = 3 - n", n, PointMatching.of(kappa), false));
+      for (int nodes = 3; nodes <= 5 && Math.pow(nodes, n) <= 4096; nodes++) {
+        String name = "Gauss-Hermite " + nodes;
+        all.add(Arguments.of(name, n, NamedMatchings.of(name), false));
+      }
+    }
+    all.add(Arguments.of("Gauss-Hermite 3", 8, NamedMatchings.product(3), false));
+    PointRule two = GaussHermiteRule.product(2);
+    all.add(Arguments.of("Gauss-Hermite 2", 12, PointMatching.of(two), false));
+    return all.stream();
+  }
+
+  @ParameterizedTest
+  @MethodSource("matchings")
+  void aCallAllocatesNothing(String name, int n, MomentMatching matching, boolean derivatives) {
+    check(name, n, matching, new Wave(n, n, derivatives));
+  }
+
+  /** The same for functions that read a part, whose factor is made in another order. */
+  @ParameterizedTest
+  @MethodSource("matchings")
+  void aCallForSomeInputsAllocatesNothing(
+      String name, int n, MomentMatching matching, boolean derivatives) {
+    check(name, n, matching, new Wave(n, n - 1, derivatives));
+    check(name, n, matching.overWholeInput(), new Wave(n, n - 1, derivatives));
+  }
+
+  private static void check(String name, int n, MomentMatching matching, Wave function) {
+    RandomGaussians random = new RandomGaussians(n);
+    Moments input = random.moments(n);
+    DMatrixRMaj noise = random.covariance(2);
+    double[] given = new double[1];
+    MatchingWorkspace work = matching.workspace(Space.reals(n), Space.angles(2), function);
+    Runnable call = () -> {
+      input.changeCovariance();
+      if (work.carry(input, given, noise) != MatchingStatus.MATCHED) {
+        throw new IllegalStateException(work.failure());
+      }
+    };
+    int calls = Math.max(20, 10_000 / Math.max(1, evaluations(work, call)));
+    double bytes = AllocationMeter.bytesPerCall(calls, calls, call);
+    assertEquals(0, bytes, name + " for n = " + n + ", bytes per call");
+  }
+
+  private static int evaluations(MatchingWorkspace work, Runnable call) {
+    call.run();
+    return work.evaluations();
+  }
+
+  /** A failed call allocates nothing either, until its words are asked for. */
+  @Test
+  void aFailedCallAllocatesNothing() {
+    MatchingWorkspace work = NamedMatchings.of("cubature 3")
+        .workspace(Space.reals(5), Space.reals(2), new Wave(5, 4, false));
+    Moments input = new RandomGaussians(1).moments(5);
+    Moments indefinite = new RandomGaussians(1).moments(5);
+    indefinite.changeCovariance().set(3, 3, -1);
+    double[] broken = {Double.NaN};
+    double[] fine = new double[1];
+    Runnable calls = () -> {
+      work.carry(input, broken, null);
+      work.carry(indefinite, fine, null);
+    };
+    assertEquals(0, AllocationMeter.bytesPerCall(2000, 2000, calls));
+  }
+
+  /** The meter itself must see an allocation: an array of 10 doubles has 80 bytes and a header. */
+  @Test
+  void theMeterSeesAnArray() {
+    double[][] sink = new double[1][];
+    double bytes = AllocationMeter.bytesPerCall(1000, 1000, () -> sink[0] = new double[10]);
+    assertTrue(bytes >= 80 && bytes <= 120, () -> bytes + " bytes for an array of 10 doubles");
+  }
+
+  @Test
+  void theMeterCountsNothingForNothing() {
+    assertEquals(0, AllocationMeter.bytesPerCall(1000, 1000, () -> {}));
+  }
+
+  /** Two smooth angles of the last inputs, read backwards; allocates nothing itself. */
+  private static final class Wave implements VectorFunction {
+    private final int inputs;
+    private final int read;
+    private final Structure structure;
+
+    Wave(int inputs, int read, boolean derivatives) {
+      this.inputs = inputs;
+      this.read = read;
+      int[] active = new int[read];
+      for (int i = 0; i < read; i++) {
+        active[i] = read == inputs ? i : inputs - 1 - i;
+      }
+      Structure known = Structure.UNKNOWN.withActiveInputs(active);
+      this.structure = derivatives ? known.withJacobian(this::derive) : known;
+    }
+
+    @Override
+    public void evaluate(double[] input, double[] given, double[] output) {
+      double sum = given[0];
+      for (int i = inputs - read; i < inputs; i++) {
+        sum += 0.1 * input[i];
+      }
+      output[0] = 0.1 * sum;
+      output[1] = 0.1 * sum * sum;
+    }
+
+    private void derive(double[] input, double[] given, double[] jacobian) {
+      double sum = given[0];
+      for (int i = inputs - read; i < inputs; i++) {
+        sum += 0.1 * input[i];
+      }
+      for (int i = inputs - read; i < inputs; i++) {
+        jacobian[i] = 0.01;
+        jacobian[inputs + i] = 0.02 * sum;
+      }
+    }
+
+    @Override
+    public Structure structure() {
+      return structure;
+    }
+  }
+}

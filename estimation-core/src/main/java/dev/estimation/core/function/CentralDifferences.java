@@ -73,14 +73,14 @@ public final class CentralDifferences implements Jacobian {
     }
   }
 
-  /** Evaluates g away from the point and returns the displacement, as rounded where that can be known. */
+  /** Evaluates g away from the point and returns the displacement, as rounded. */
   private double image(double[] point, double[] given, int j, double step, double[] result) {
     Arrays.fill(tangent, 0);
     tangent[j] = step;
     input.displace(point, tangent, moved);
+    input.difference(moved, point, tangent);
     Arrays.fill(result, Double.NaN);
     function.evaluate(moved, given, result);
-    input.difference(moved, point, tangent);
     return tangent[j];
   }
 

@@ -31,10 +31,13 @@ public final class Structure {
   /**
    * This structure with the inputs that the function reads.
    *
-   * @param indices distinct, in the order in which points are to be drawn; copied
+   * @param indices 1 or more, distinct, in the order in which points are to be drawn; copied
    * @return a structure that says so
    */
   public Structure withActiveInputs(int... indices) {
+    if (indices.length == 0) {
+      throw new IllegalArgumentException("a function must read at least 1 input, got 0");
+    }
     return new Structure(indices.clone(), jacobian);
   }
 

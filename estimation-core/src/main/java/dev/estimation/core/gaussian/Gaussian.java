@@ -11,8 +11,8 @@ import org.ejml.data.DMatrixRMaj;
  *
  * <p>The covariance is finite, symmetric and positive semi-definite; a variance may be zero. Mirrored
  * entries may differ by 1e-12 sqrt(p_ii p_jj), the rounding of a matrix product; the lower triangle
- * is the one used. Positive semi-definite means that every Cholesky pivot is positive, or within
- * {@code n eps} of zero relative to its diagonal entry with an equally small column.
+ * is the one used. Positive semi-definite means that every Cholesky pivot is positive, or within its
+ * rounding of zero with an equally small column.
  *
  * <p><i>Immutable.</i> Factories copy what they are given, accessors return numbers or copies.
  */

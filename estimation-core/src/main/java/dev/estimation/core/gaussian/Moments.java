@@ -103,6 +103,16 @@ public final class Moments {
     return factor.columns();
   }
 
+  /** {@return the pivot that made the last {@link #factor()} fail, from 0; -1 if none did} */
+  public int failedPivot() {
+    return factor.failedPivot();
+  }
+
+  /** {@return the value of that pivot} */
+  public double failedValue() {
+    return factor.failedValue();
+  }
+
   /** {@return which pivot made the last {@link #factor()} fail, and its value} */
   public String factorFailure() {
     return factor.failure();

@@ -16,6 +16,7 @@ public final class LowerFactor {
   private final int size;
   private final int[] order;
   private final DMatrixRMaj columns;
+  private final double[] growth;
   private int failedPivot = -1;
   private double failedValue;
 
@@ -39,6 +40,7 @@ public final class LowerFactor {
     this.size = order.length;
     this.order = order.clone();
     this.columns = new DMatrixRMaj(size, columnCount);
+    this.growth = new double[columnCount];
   }
 
   private static int[] naturalOrder(int size) {
@@ -64,9 +66,8 @@ public final class LowerFactor {
   }
 
   /**
-   * Factors a symmetric positive semi-definite matrix. A pivot within {@code n eps} of its diagonal
-   * entry with an equally small column is a zero variance and gives a zero column; NaN and infinity
-   * fail.
+   * Factors a symmetric positive semi-definite matrix. A pivot within its rounding of zero, with an
+   * equally small column, is a zero variance and gives a zero column; NaN and infinity fail.
    *
    * @param matrix n x n, read
    * @return whether it is positive semi-definite
@@ -83,9 +84,10 @@ public final class LowerFactor {
     for (int c = 0; c < k; c++) {
       int row = order[c];
       double variance = p[row * n + row];
-      double threshold = n * EPSILON * variance;
+      double bound = definite ? variance : bound(p, row, c);
+      double threshold = n * EPSILON * bound;
       double pivot = variance - dot(b, row * k, row * k, c);
-      if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE)
+      if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE && bound <= Double.MAX_VALUE)
           || (definite && !(pivot > threshold))) {
         return fail(c, pivot);
       }
@@ -104,6 +106,7 @@ public final class LowerFactor {
       } else {
         return fail(c, pivot);
       }
+      growth[c] = bound * scale * scale;
       b[row * k + c] = pivot * scale;
       for (int q = c + 1; q < n; q++) {
         b[order[q] * k + c] *= scale;
@@ -113,13 +116,27 @@ public final class LowerFactor {
     return true;
   }
 
+  /**
+   * The rounding of a pivot is about eps times this: its diagonal entry, and the rounding of earlier
+   * pivots in the measure in which their columns carry it on. With the diagonal entry alone, exact
+   * constraints such as x1 = x0 + x2 would be refused now and then.
+   */
+  private double bound(double[] p, int row, int c) {
+    double[] b = columns.data;
+    int k = columns.numCols;
+    double sum = p[row * (size + 1)];
+    for (int q = 0; q < c; q++) {
+      sum += b[row * k + q] * b[row * k + q] * growth[q];
+    }
+    return sum;
+  }
+
   private boolean columnVanishes(double[] p, int c) {
-    int n = size;
-    double unit = n * EPSILON * Math.sqrt(p[order[c] * (n + 1)]);
-    for (int q = c + 1; q < n; q++) {
+    double unit = size * EPSILON * Math.sqrt(bound(p, order[c], c));
+    for (int q = c + 1; q < size; q++) {
       int r = order[q];
       double residual = columns.data[r * columns.numCols + c];
-      if (!(Math.abs(residual) <= unit * Math.sqrt(p[r * (n + 1)]))) {
+      if (!(Math.abs(residual) <= unit * Math.sqrt(bound(p, r, c)))) {
         return false;
       }
     }
@@ -134,7 +151,28 @@ public final class LowerFactor {
 
   /** {@return which pivot failed, in words: "pivot 2 of 4 is -3.1E-9"} */
   public String failure() {
-    return "pivot " + (failedPivot + 1) + " of " + size + " is " + failedValue;
+    return describe(failedPivot, size, failedValue);
+  }
+
+  /**
+   * {@return a failed pivot in words}
+   *
+   * @param pivot from 0
+   * @param size of the matrix
+   * @param value of the pivot
+   */
+  public static String describe(int pivot, int size, double value) {
+    return "pivot " + (pivot + 1) + " of " + size + " is " + value;
+  }
+
+  /** {@return the pivot that made the last attempt fail, from 0; -1 if none did} */
+  public int failedPivot() {
+    return failedPivot;
+  }
+
+  /** {@return the value of that pivot} */
+  public double failedValue() {
+    return failedValue;
   }
 
   /**

@@ -14,6 +14,8 @@ final class ActiveFactor {
   private final boolean whole;
   private final LowerFactor ordered;
   private final DMatrixRMaj columns;
+  private int failedPivot;
+  private double failedValue;
 
   ActiveFactor(int[] active, int dimension) {
     this.active = active;
@@ -39,18 +41,25 @@ final class ActiveFactor {
   /** Makes B; false if the covariance is not positive semi-definite. */
   boolean factor(Moments input) {
     if (!input.factor()) {
+      failedPivot = input.failedPivot();
+      failedValue = input.failedValue();
       return false;
     }
     if (whole) {
       columns.setTo(input.lowerFactor());
       return true;
     }
-    return ordered.factorSemidefinite(input.covariance());
+    if (!ordered.factorSemidefinite(input.covariance())) {
+      failedPivot = ordered.failedPivot();
+      failedValue = ordered.failedValue();
+      return false;
+    }
+    return true;
   }
 
-  /** What was wrong when {@link #factor} was false. */
-  String failure(Moments input) {
-    return input.factor() ? ordered.failure() : input.factorFailure();
+  /** What was wrong when {@link #factor} was last false. */
+  String failure() {
+    return LowerFactor.describe(failedPivot, columns.numRows, failedValue);
   }
 
   DMatrixRMaj columns() {

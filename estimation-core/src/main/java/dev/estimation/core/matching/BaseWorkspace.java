@@ -18,7 +18,9 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   int jacobians;
   private final Moments output;
   private MatchingStatus status = MatchingStatus.MATCHED;
-  private Moments failedInput;
+  private final double[] handed;
+  private int failedIndex;
+  private double failedValue;
 
   BaseWorkspace(Space inputSpace, Space outputSpace, VectorFunction function) {
     this.inputSpace = inputSpace;
@@ -29,6 +31,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     this.cross = new DMatrixRMaj(active.count(), outputSpace.dimension());
     this.centre = new double[outputSpace.storage()];
     this.output = new Moments(outputSpace);
+    this.handed = new double[inputSpace.storage()];
   }
 
   @Override
@@ -37,19 +40,21 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     function.reset();
     jacobians = 0;
     status = MatchingStatus.MATCHED;
-    failedInput = input;
     status = carryChecked(input, given, additiveNoise);
     return status;
   }
 
   private MatchingStatus carryChecked(Moments input, double[] given, DMatrixRMaj additiveNoise) {
-    if (!Checks.allFinite(input.mean())) {
+    if (!isFinite(input.mean())) {
       return MatchingStatus.INPUT_NOT_FINITE;
+    }
+    if (additiveNoise != null && !isFinite(additiveNoise)) {
+      return MatchingStatus.NOISE_NOT_FINITE;
     }
     if (!active.factor(input)) {
       return MatchingStatus.INPUT_NOT_DEFINITE;
     }
-    if (!function.evaluate(input.mean(), given, centre)) {
+    if (!function.evaluate(copied(input.mean()), given, centre)) {
       return MatchingStatus.FUNCTION_NOT_FINITE;
     }
     double[] mean = output.changeMean();
@@ -62,6 +67,24 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     return Checks.allFinite(mean) && SymmetricMatrix.firstNotFinite(covariance) < 0
         ? MatchingStatus.MATCHED
         : MatchingStatus.OUTPUT_NOT_FINITE;
+  }
+
+  /** A copy to hand to a function, which may write on it against its contract. */
+  final double[] copied(double[] point) {
+    System.arraycopy(point, 0, handed, 0, handed.length);
+    return handed;
+  }
+
+  private boolean isFinite(double[] mean) {
+    failedIndex = Checks.firstNotFinite(mean);
+    failedValue = failedIndex < 0 ? 0 : mean[failedIndex];
+    return failedIndex < 0;
+  }
+
+  private boolean isFinite(DMatrixRMaj noise) {
+    failedIndex = SymmetricMatrix.firstNotFinite(noise);
+    failedValue = failedIndex < 0 ? 0 : noise.data[failedIndex];
+    return failedIndex < 0;
   }
 
   /**
@@ -125,18 +148,19 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   public final String failure() {
     return switch (status) {
       case MATCHED -> "";
-      case INPUT_NOT_FINITE -> meanFailure();
-      case INPUT_NOT_DEFINITE ->
-        "covariance is not positive semi-definite: " + active.failure(failedInput);
+      case INPUT_NOT_FINITE -> "mean[" + failedIndex + "] must be finite, got " + failedValue;
+      case NOISE_NOT_FINITE -> noiseFailure();
+      case INPUT_NOT_DEFINITE -> "covariance is not positive semi-definite: " + active.failure();
       case FUNCTION_NOT_FINITE -> function.failure();
       case JACOBIAN_NOT_FINITE -> jacobianFailure();
       case OUTPUT_NOT_FINITE -> "moments of the output are not finite: the deviations overflow";
     };
   }
 
-  private String meanFailure() {
-    int bad = Checks.firstNotFinite(failedInput.mean());
-    return "mean[" + bad + "] must be finite, got " + failedInput.mean()[bad];
+  private String noiseFailure() {
+    int m = outputSpace.dimension();
+    return "additive noise[" + failedIndex / m + "][" + failedIndex % m + "] must be finite, got "
+        + failedValue;
   }
 
   String jacobianFailure() {

@@ -37,7 +37,7 @@ final class LinearWorkspace extends BaseWorkspace {
   @Override
   MatchingStatus match(double[] mean, double[] given, double[] outputMean, double[] covariance) {
     Arrays.fill(derivatives, 0);
-    jacobian.evaluate(mean, given, derivatives);
+    jacobian.evaluate(copied(mean), given, derivatives);
     jacobians++;
     function.count(differenceEvaluations);
     if (!Checks.allFinite(derivatives)) {

@@ -6,6 +6,8 @@ public enum MatchingStatus {
   MATCHED,
   /** The mean of the input is NaN or infinite. Usual cause: an earlier failure that was ignored. */
   INPUT_NOT_FINITE,
+  /** The additive noise has NaN or infinity. Usual cause: a fault in a noise model. */
+  NOISE_NOT_FINITE,
   /**
    * The covariance of the input is not positive semi-definite, or not finite. Usual causes: rounding
    * after many updates of very different accuracy, a covariance set by hand.

@@ -55,8 +55,7 @@ public final class RandomRule implements PointRule {
    * @param generators makes a new generator, always in the same state
    * @return the rule
    */
-  public static RandomRule independent(
-      int count, Supplier<? extends RandomGenerator> generators) {
+  public static RandomRule independent(int count, Supplier<? extends RandomGenerator> generators) {
     return new RandomRule(count, generators, false);
   }
 
@@ -72,9 +71,8 @@ public final class RandomRule implements PointRule {
       return UnitPoints.sample(dimension, draws);
     }
     if (count <= dimension) {
-      throw new IllegalArgumentException(
-          "standardised draws must be more than the dimensions, got " + count + " draws in "
-              + dimension + " dimensions");
+      throw new IllegalArgumentException("standardised draws must be more than the dimensions, got "
+          + count + " draws in " + dimension + " dimensions");
     }
     standardise(draws, dimension);
     double[] weights = new double[count];

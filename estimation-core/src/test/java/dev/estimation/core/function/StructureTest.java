@@ -50,6 +50,11 @@ class StructureTest {
     assertRefused(1, 1);
   }
 
+  @Test
+  void aFunctionMustReadSomething() {
+    assertThrows(IllegalArgumentException.class, () -> Structure.UNKNOWN.withActiveInputs());
+  }
+
   private static void assertRefused(int dimension, int... indices) {
     Structure structure = Structure.UNKNOWN.withActiveInputs(indices);
     IllegalArgumentException refusal =

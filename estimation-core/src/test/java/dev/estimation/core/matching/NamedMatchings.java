@@ -10,18 +10,13 @@ final class NamedMatchings {
 
   static MomentMatching of(String name) {
     String[] words = name.split(" ");
-    switch (words[0]) {
-      case "linearisation":
-        return Linearisation.firstOrder();
-      case "cubature":
-        return PointMatching.of(CubatureRule.degreeThree());
-      case "unscented":
-        return PointMatching.of(unscented(words));
-      case "Gauss-Hermite":
-        return product(Integer.parseInt(words[1]));
-      default:
-        throw new IllegalArgumentException("no matching is named " + name);
-    }
+    return switch (words[0]) {
+      case "linearisation" -> Linearisation.firstOrder();
+      case "cubature" -> PointMatching.of(CubatureRule.degreeThree());
+      case "unscented" -> PointMatching.of(unscented(words));
+      case "Gauss-Hermite" -> product(Integer.parseInt(words[1]));
+      default -> throw new IllegalArgumentException("no matching is named " + name);
+    };
   }
 
   private static UnscentedRule unscented(String[] words) {

@@ -17,7 +17,7 @@ interface ZeroVarianceChecks extends MatchingUnderTest {
   default void affineMapsWithSomeVariancesZeroAreExact() {
     int n = Math.min(5, largestDimension());
     for (int zeros = 1; zeros < (1 << n) - 1; zeros++) {
-      RandomGaussians random = new RandomGaussians(31 * zeros);
+      RandomGaussians random = new RandomGaussians(31L * zeros);
       Moments input = RandomGaussians.momentsOf(frozen(random.gaussian(n), zeros));
       AffineProblem problem =
           new AffineProblem(random.matrix(2, n), random.vector(2), input, random.covariance(2));

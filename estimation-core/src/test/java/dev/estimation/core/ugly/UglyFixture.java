@@ -36,20 +36,14 @@ final class UglyFixture {
     GAUSS_HERMITE;
 
     MomentMatching matching() {
-      switch (this) {
-        case LINEARISATION:
-          return Linearisation.firstOrder();
-        case DIFFERENCES:
-          return Linearisation.firstOrder().withInputScales(1, 1);
-        case UNSCENTED:
-          return PointMatching.of(UnscentedRule.scaled(1, 2, 0));
-        case UNSCENTED_NARROW:
-          return PointMatching.of(UnscentedRule.scaled(1e-3, 2, 0));
-        case CUBATURE:
-          return PointMatching.of(CubatureRule.degreeThree());
-        default:
-          return PointMatching.of(GaussHermiteRule.product(3));
-      }
+      return switch (this) {
+        case LINEARISATION -> Linearisation.firstOrder();
+        case DIFFERENCES -> Linearisation.firstOrder().withInputScales(1, 1);
+        case UNSCENTED -> PointMatching.of(UnscentedRule.scaled(1, 2, 0));
+        case UNSCENTED_NARROW -> PointMatching.of(UnscentedRule.scaled(1e-3, 2, 0));
+        case CUBATURE -> PointMatching.of(CubatureRule.degreeThree());
+        case GAUSS_HERMITE -> PointMatching.of(GaussHermiteRule.product(3));
+      };
     }
 
     /** Those that evaluate a standard deviation or so away from the mean. */

@@ -30,6 +30,7 @@ public final class SensorPort {
   private final DMatrixRMaj innovationCovariance;
   private final Posterior posterior;
   private final GaussNewton iteration;
+  private final double[] mean;
   private final InputCheck input = new InputCheck();
   private StepStatus status = StepStatus.APPLIED;
   private double estimateTime;
@@ -48,6 +49,7 @@ public final class SensorPort {
     this.innovation = new Innovation(space);
     this.innovationCovariance = new DMatrixRMaj(m, m);
     this.posterior = new Posterior(stateSpace, m);
+    this.mean = new double[stateSpace.storage()];
     this.iteration = plan.iteration() == null
         ? null
         : new GaussNewton(plan.iteration(), matching, innovation, noise, stateSpace, space);
@@ -91,7 +93,9 @@ public final class SensorPort {
       return StepStatus.INPUT_NOT_FINITE;
     }
     Moments prior = estimate.moments();
-    sensor.measurementNoise(prior.mean(), given, noise.blank());
+    // A copy, since a model may write on what it is given, against its contract.
+    System.arraycopy(prior.mean(), 0, mean, 0, mean.length);
+    sensor.measurementNoise(mean, given, noise.blank());
     if (!noise.isValid()) {
       return StepStatus.NOISE_NOT_VALID;
     }

@@ -11,6 +11,7 @@ abstract class Transition {
   private final int controlDimension;
   private final NoiseMatrix noise;
   private final MatchingWorkspace matching;
+  private final double[] mean;
   private boolean matched;
 
   Transition(String name, int controlDimension, NoiseMatrix noise, MatchingWorkspace matching) {
@@ -18,12 +19,15 @@ abstract class Transition {
     this.controlDimension = controlDimension;
     this.noise = noise;
     this.matching = matching;
+    this.mean = new double[matching.output().mean().length];
   }
 
   /** Carries the moments of the state; {@link #output()} is valid if the status is APPLIED. */
   final StepStatus carry(Moments prior, double[] control, double time, double dt) {
     matched = false;
-    fillNoise(prior.mean(), control, time, dt, noise.blank());
+    // A copy, since a model may write on what it is given, against its contract.
+    System.arraycopy(prior.mean(), 0, mean, 0, mean.length);
+    fillNoise(mean, control, time, dt, noise.blank());
     if (!noise.isValid()) {
       return StepStatus.NOISE_NOT_VALID;
     }

@@ -27,6 +27,7 @@ import dev.estimation.filters.model.NoiseDrivenMotion;
  */
 public final class FilterPlan {
   private final Motion motion;
+  private final Space stateSpace;
   private final MomentMatching matching;
   private final double gateProbability;
   private final IteratedUpdate iteration;
@@ -34,6 +35,7 @@ public final class FilterPlan {
   private FilterPlan(
       Motion motion, MomentMatching matching, double gateProbability, IteratedUpdate iteration) {
     this.motion = motion;
+    this.stateSpace = motion.stateSpace();
     this.matching = matching;
     this.gateProbability = gateProbability;
     this.iteration = iteration;
@@ -128,11 +130,11 @@ public final class FilterPlan {
    * @return the estimate of the track
    */
   public Estimate start(double time, Gaussian initial) {
-    return new Estimate(motion.stateSpace(), time, initial);
+    return new Estimate(stateSpace, time, initial);
   }
 
   Space stateSpace() {
-    return motion.stateSpace();
+    return stateSpace;
   }
 
   Transition transition() {

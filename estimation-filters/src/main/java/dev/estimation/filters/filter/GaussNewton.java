@@ -15,6 +15,9 @@ final class GaussNewton {
   private static final double SUFFICIENT_DECREASE = 1e-4;
   private static final double SHORTEST_STEP = 1e-10;
 
+  /** A decrease of the cost below this fraction of it is lost in rounding. */
+  private static final double ROUNDING = 0x1p-48;
+
   private final IteratedUpdate settings;
   private final MatchingWorkspace matching;
   private final Innovation innovation;
@@ -162,12 +165,13 @@ final class GaussNewton {
   /** Halves the step until the cost falls as its slope promises. */
   private StepStatus search() {
     double before = cost(unit);
+    double allowed = before + ROUNDING * before;
     double slope = slope();
     StepStatus moved = StepStatus.NOT_CONVERGED;
     for (double length = 1; length > SHORTEST_STEP; length /= 2) {
       moved = go(length);
       if (moved == StepStatus.APPLIED
-          && cost(trial) <= before + SUFFICIENT_DECREASE * length * slope) {
+          && cost(trial) <= allowed + SUFFICIENT_DECREASE * length * slope) {
         return moved;
       }
     }

@@ -1,0 +1,99 @@
+package dev.estimation.benchmarks.jmh;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.junit.jupiter.api.Assumptions.assumeTrue;
+
+import dev.estimation.core.matching.PointMatching;
+import dev.estimation.core.points.UnscentedRule;
+import dev.estimation.filters.filter.Estimate;
+import dev.estimation.filters.filter.FilterPlan;
+import dev.estimation.filters.filter.FilterWorkspace;
+import dev.estimation.filters.filter.SensorPort;
+import dev.estimation.filters.filter.StepStatus;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+
+/** What the benchmarks measure is right before it is fast. */
+class StepBenchmarkTest {
+  private final StepBenchmark.Track track = new StepBenchmark.Track();
+
+  /** 1e-9 standard deviations after 200 steps: two ways of writing the same sums. */
+  @Test
+  void plainStepIsTheUnscentedStepOverTheWholeState() {
+    StepBenchmark.Filter filter = filter("unscented-whole");
+    Estimate estimate = filter.follow(track);
+    PlainUnscentedStep plain = new StepBenchmark.Plain().follow(track);
+    for (int i = 0; i < 5; i++) {
+      double deviation = estimate.standardDeviation(i);
+      assertEquals(plain.mean.get(i, 0), estimate.mean(i), 1e-9 * deviation);
+      for (int j = 0; j < 5; j++) {
+        double scale = deviation * estimate.standardDeviation(j);
+        assertEquals(plain.covariance.get(i, j), estimate.covariance(i, j), 1e-9 * scale);
+      }
+    }
+  }
+
+  /** Every method follows the target: position within 5 standard deviations of the simulation. */
+  @ParameterizedTest
+  @ValueSource(strings = {"linear", "unscented", "unscented-whole", "cubature", "hermite3-whole"})
+  void everyMethodFollowsTheTarget(String method) {
+    Estimate estimate = filter(method).follow(track);
+    Estimate reference = filter("unscented-whole").follow(track);
+    for (int i = 0; i < 5; i++) {
+      double distance =
+          Math.abs(estimate.mean(i) - reference.mean(i)) / reference.standardDeviation(i);
+      assertTrue(distance < 1, method + ", component " + i + ": " + distance);
+    }
+  }
+
+  private static StepBenchmark.Filter filter(String method) {
+    StepBenchmark.Filter filter = new StepBenchmark.Filter();
+    filter.method = method;
+    filter.make();
+    return filter;
+  }
+
+  /**
+   * The textbook filter, written by hand in another language, on its own measurements: the mean and
+   * variances that it prints, to 1e-9 standard deviations (it prints 12 digits).
+   */
+  @Test
+  void agreesWithTheNativeProgram() throws IOException, InterruptedException {
+    Path folder = Path.of(System.getProperty("reference.dir", "../../shared"), "native");
+    Path source = folder.resolve("textbook_ukf.cpp");
+    Path measurements = folder.resolve("measurements.csv");
+    assumeTrue(Files.exists(source), "no native program at " + source + ": not compared");
+    assumeTrue(NativeProgram.canCompile(), "no g++ or Eigen: not compared with the native program");
+    NativeProgram program = NativeProgram.compile(source);
+    List<double[]> printed = program.run(measurements);
+    Estimate estimate = follow(measurements);
+    for (int i = 0; i < 5; i++) {
+      double deviation = estimate.standardDeviation(i);
+      double rounding = 1e-11 * Math.abs(printed.get(0)[i]);
+      assertEquals(printed.get(0)[i], estimate.mean(i), 1e-9 * deviation + rounding);
+      assertEquals(printed.get(1)[i], estimate.covariance(i, i), 1e-9 * deviation * deviation);
+    }
+  }
+
+  private static Estimate follow(Path measurements) throws IOException {
+    FilterPlan plan = FilterPlan.of(
+        TurnProblem.motion(), PointMatching.of(UnscentedRule.scaled(1, 2, 0)).overWholeInput());
+    FilterWorkspace work = plan.workspace();
+    SensorPort port = work.port(TurnProblem.sensor());
+    Estimate estimate = plan.start(0, TurnProblem.start());
+    List<String> lines = Files.readAllLines(measurements);
+    for (String line : lines.subList(1, lines.size())) {
+      String[] cells = line.split(",", -1);
+      double[] measurement = {Double.parseDouble(cells[1]), Double.parseDouble(cells[2])};
+      assertEquals(StepStatus.APPLIED, work.predict(estimate, estimate.time() + 1));
+      assertEquals(StepStatus.APPLIED, port.update(estimate, measurement, new double[2]));
+    }
+    return estimate;
+  }
+}

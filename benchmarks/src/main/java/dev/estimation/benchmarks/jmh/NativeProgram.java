@@ -54,8 +54,9 @@ final class NativeProgram {
   }
 
   /** Runs it; returns the mean and the variances that it prints. */
-  List<double[]> run(Path measurements) throws IOException, InterruptedException {
-    Process run = new ProcessBuilder(program.toString(), measurements.toString(), "2000")
+  List<double[]> run(Path measurements, int repetitions) throws IOException, InterruptedException {
+    Process run = new ProcessBuilder(
+            program.toString(), measurements.toString(), Integer.toString(repetitions))
         .redirectErrorStream(true)
         .start();
     String output = read(run);

@@ -22,7 +22,6 @@ final class PlainUnscentedStep {
   private final MotionModel motion;
   private final SensorModel sensor;
   private final double[] nothing = new double[0];
-  private final double[] origin = new double[2];
   private final double weight = 0.5 / N;
   private final double spread = Math.sqrt(N);
   final DMatrixRMaj mean = new DMatrixRMaj(N, 1);
@@ -72,7 +71,7 @@ final class PlainUnscentedStep {
     drawPoints();
     for (int i = 0; i < POINTS; i++) {
       readColumn(points, i, state);
-      sensor.measure(state, origin, image);
+      sensor.measure(state, nothing, image);
       writeColumn(images, i, image);
     }
     fillMean(images, predicted);
@@ -80,7 +79,7 @@ final class PlainUnscentedStep {
     subtract(points, mean);
     scaleColumns(images, weightedImages);
     CommonOps_DDRM.multTransB(weightedImages, images, innovationCovariance);
-    sensor.measurementNoise(mean.data, origin, measurementNoise.data);
+    sensor.measurementNoise(mean.data, nothing, measurementNoise.data);
     CommonOps_DDRM.addEquals(innovationCovariance, measurementNoise);
     CommonOps_DDRM.multTransB(weightedImages, points, cross);
     if (!solver.setA(innovationCovariance)) {

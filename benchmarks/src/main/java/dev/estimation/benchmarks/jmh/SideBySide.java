@@ -82,7 +82,7 @@ public final class SideBySide {
     if (program == null) {
       return Double.NaN;
     }
-    program.run(measurements);
+    program.run(measurements, 2000);
     return program.nanosPerStep();
   }
 

@@ -1,10 +1,8 @@
 package dev.estimation.benchmarks.jmh;
 
-import dev.estimation.benchmarks.cases.vessel.CoordinatedTurn;
-import dev.estimation.benchmarks.cases.vessel.ShipRadar;
 import dev.estimation.core.gaussian.Gaussian;
-import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
+import dev.estimation.filters.model.DifferentiableSensor;
 import java.util.SplittableRandom;
 
 /**
@@ -21,12 +19,12 @@ public final class TurnProblem {
 
   /** {@return the motion, noise diag(0.1, 0.1, 0.1, 0.1, 1e-6)} */
   public static DifferentiableMotion motion() {
-    return new FixedNoiseTurn();
+    return new Turn();
   }
 
-  /** {@return the sensor; given is the place of the origin, (0, 0)} */
-  public static ShipRadar sensor() {
-    return new ShipRadar(Math.sqrt(RANGE_VARIANCE), Math.sqrt(BEARING_VARIANCE));
+  /** {@return the sensor; nothing is given} */
+  public static DifferentiableSensor sensor() {
+    return new Sight();
   }
 
   /** {@return the first estimate} */
@@ -39,47 +37,18 @@ public final class TurnProblem {
   public static double[][] measurements(int count, long seed) {
     SplittableRandom random = new SplittableRandom(seed);
     DifferentiableMotion motion = motion();
-    ShipRadar sensor = sensor();
+    DifferentiableSensor sensor = sensor();
+    double[] nothing = new double[0];
     double[] state = {1000, 1000, 14, 4, 0.02};
     double[] next = new double[5];
     double[][] measurements = new double[count][2];
     for (double[] measurement : measurements) {
-      motion.move(state, new double[0], 0, 1, next);
+      motion.move(state, nothing, 0, 1, next);
       System.arraycopy(next, 0, state, 0, 5);
-      sensor.measure(state, new double[2], measurement);
+      sensor.measure(state, nothing, measurement);
       measurement[0] += Math.sqrt(RANGE_VARIANCE) * random.nextGaussian();
       measurement[1] += Math.sqrt(BEARING_VARIANCE) * random.nextGaussian();
     }
     return measurements;
-  }
-
-  /** The turn of the vessel case, with noise that does not depend on time. */
-  private static final class FixedNoiseTurn implements DifferentiableMotion {
-    private final CoordinatedTurn turn = new CoordinatedTurn(0, 0);
-
-    @Override
-    public Space stateSpace() {
-      return turn.stateSpace();
-    }
-
-    @Override
-    public void move(double[] state, double[] control, double time, double dt, double[] next) {
-      turn.move(state, control, time, dt, next);
-    }
-
-    @Override
-    public void moveJacobian(
-        double[] state, double[] control, double time, double dt, double[] jacobian) {
-      turn.moveJacobian(state, control, time, dt, jacobian);
-    }
-
-    @Override
-    public void processNoise(
-        double[] state, double[] control, double time, double dt, double[] covariance) {
-      for (int i = 0; i < 4; i++) {
-        covariance[i * 6] = 0.1;
-      }
-      covariance[24] = 1e-6;
-    }
   }
 }

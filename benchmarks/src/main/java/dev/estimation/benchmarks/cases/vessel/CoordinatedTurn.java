@@ -11,7 +11,7 @@ import dev.estimation.filters.model.DifferentiableMotion;
  * from north to east. With u = turn rate * dt, the arc is written by sin(u)/u and (1 - cos(u))/u,
  * which exist for a straight course as well. <i>Immutable.</i>
  */
-public final class CoordinatedTurn implements DifferentiableMotion {
+final class CoordinatedTurn implements DifferentiableMotion {
   private static final int DIMENSION = 5;
   private static final FlatSpace SPACE = Space.reals(DIMENSION);
 
@@ -24,7 +24,7 @@ public final class CoordinatedTurn implements DifferentiableMotion {
    * @param accelerationDensity spectral density of the acceleration (m^2/s^3)
    * @param turnDensity spectral density of the turn acceleration (rad^2/s^3)
    */
-  public CoordinatedTurn(double accelerationDensity, double turnDensity) {
+  CoordinatedTurn(double accelerationDensity, double turnDensity) {
     this.accelerationDensity = accelerationDensity;
     this.turnDensity = turnDensity;
   }

@@ -10,7 +10,7 @@ import dev.estimation.filters.model.DifferentiableSensor;
  * ship's north and east (m). The state begins with north and east. At zero range there is no
  * bearing: the Jacobian is not finite. <i>Immutable.</i>
  */
-public final class ShipRadar implements DifferentiableSensor {
+final class ShipRadar implements DifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1).and(Space.angles(1));
   private static final Structure POSITION_ONLY = Structure.UNKNOWN.withActiveInputs(0, 1);
 
@@ -23,7 +23,7 @@ public final class ShipRadar implements DifferentiableSensor {
    * @param rangeDeviation m
    * @param bearingDeviation rad
    */
-  public ShipRadar(double rangeDeviation, double bearingDeviation) {
+  ShipRadar(double rangeDeviation, double bearingDeviation) {
     this.rangeDeviation = rangeDeviation;
     this.bearingDeviation = bearingDeviation;
   }

@@ -6,9 +6,7 @@ import java.util.SplittableRandom;
 import java.util.concurrent.TimeUnit;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
-import org.ejml.dense.row.decomposition.TriangularSolver_DDRM;
 import org.ejml.dense.row.decomposition.chol.CholeskyDecompositionInner_DDRM;
-import org.ejml.dense.row.mult.MatrixMultProduct_DDRM;
 import org.openjdk.jmh.annotations.Benchmark;
 import org.openjdk.jmh.annotations.BenchmarkMode;
 import org.openjdk.jmh.annotations.Mode;
@@ -28,16 +26,14 @@ public class KernelBenchmark {
   int n;
 
   private DMatrixRMaj covariance;
-  private DMatrixRMaj tall;
   private DMatrixRMaj result;
   private DMatrixRMaj copy;
   private double[] vector;
-  private double[] solution;
   private DMatrixRMaj column;
   private LowerFactor ours;
   private CholeskyDecompositionInner_DDRM theirs;
 
-  /** A random covariance of condition about 10, and a tall matrix of two columns. */
+  /** A random covariance of condition about 10 and a vector. */
   @Setup
   public void fill() {
     SplittableRandom random = new SplittableRandom(1);
@@ -47,11 +43,9 @@ public class KernelBenchmark {
     }
     covariance = new DMatrixRMaj(n, n);
     CommonOps_DDRM.multTransB(root, root, covariance);
-    tall = new DMatrixRMaj(n, 2, true, random.doubles(2L * n).toArray());
     result = new DMatrixRMaj(n, n);
     copy = new DMatrixRMaj(n, n);
     vector = random.doubles(n).toArray();
-    solution = new double[n];
     column = DMatrixRMaj.wrap(n, 1, vector.clone());
     ours = new LowerFactor(n);
     theirs = new CholeskyDecompositionInner_DDRM(true);
@@ -71,22 +65,6 @@ public class KernelBenchmark {
     return theirs.decompose(copy);
   }
 
-  /** Forward substitution in place, from a copy of the right side. */
-  @Benchmark
-  public double[] solveOurs() {
-    System.arraycopy(vector, 0, solution, 0, n);
-    ours.solveLower(solution);
-    return solution;
-  }
-
-  /** The same. */
-  @Benchmark
-  public double[] solveEjml() {
-    System.arraycopy(vector, 0, solution, 0, n);
-    TriangularSolver_DDRM.solveL(ours.columns().data, solution, n);
-    return solution;
-  }
-
   /** The lower triangle plus w v v'. */
   @Benchmark
   public double[] squareOurs() {
@@ -101,32 +79,19 @@ public class KernelBenchmark {
     return result;
   }
 
-  /** P - A A', lower triangle, A of two columns. */
-  @Benchmark
-  public double[] differenceOurs() {
-    Products.fillDifference(covariance.data, tall.data, n, 2, result.data);
-    return result.data;
-  }
-
-  /** P - A A', whole. */
-  @Benchmark
-  public DMatrixRMaj differenceEjml() {
-    result.setTo(covariance);
-    CommonOps_DDRM.multAddTransB(-1, tall, tall, result);
-    return result;
-  }
-
-  /** The lower triangle of A'A, A square. */
+  /** The lower triangle of A' D A, A square, D diagonal. */
   @Benchmark
   public double[] innerOurs() {
-    Products.fillInnerProduct(covariance.data, n, n, result.data);
+    Products.fillInnerProduct(covariance.data, vector, n, n, result.data);
     return result.data;
   }
 
-  /** A'A, mirrored. */
+  /** A' D A, whole, from a copy of A whose rows are scaled. */
   @Benchmark
   public DMatrixRMaj innerEjml() {
-    MatrixMultProduct_DDRM.inner_small(covariance, result);
+    copy.setTo(covariance);
+    CommonOps_DDRM.multRows(vector, copy);
+    CommonOps_DDRM.multTransA(covariance, copy, result);
     return result;
   }
 }

@@ -5,60 +5,73 @@ import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.consistency.ConsistencyTally;
 import dev.estimation.filters.consistency.NormalisedError;
+import java.util.Optional;
 
 /** Compares estimates with truth, step by step. */
 final class AccuracyTally {
   private final Truth truth;
+  private final FlatSpace space;
   private final int[] components;
   private final double[] values;
+  private final double[] error;
+  private final boolean headed;
   private final NormalisedError normalised;
   private final ConsistencyTally consistency;
-  private double sumOfSquares;
-  private double largestSquare;
+  private final ScoreTally position = new ScoreTally();
+  private final ScoreTally heading = new ScoreTally();
 
-  AccuracyTally(Space space, Truth truth) {
-    if (!(space instanceof FlatSpace flat)) {
-      throw new IllegalArgumentException("scoring wants reals and angles, got " + space);
-    }
+  AccuracyTally(Space stateSpace, Truth truth) {
     this.truth = truth;
+    this.space = truth.space();
     this.components = truth.components();
     this.values = new double[components.length];
-    this.normalised = NormalisedError.of(flat, components);
+    this.error = new double[components.length];
+    this.headed = hasAngle(space);
+    this.normalised = NormalisedError.of(stateSpace, components);
     this.consistency = new ConsistencyTally(components.length);
+  }
+
+  private static boolean hasAngle(FlatSpace space) {
+    for (int i = 0; i < space.dimension(); i++) {
+      if (space.isAngle(i)) {
+        return true;
+      }
+    }
+    return false;
   }
 
   void add(double time, Gaussian estimate) {
     if (!truth.at(time, values)) {
       return;
     }
-    double square = 0;
     for (int i = 0; i < components.length; i++) {
-      double error = estimate.mean(components[i]) - values[i];
-      square += error * error;
+      error[i] = estimate.mean(components[i]);
     }
-    sumOfSquares += square;
-    largestSquare = Math.max(largestSquare, square);
-    consistency.add(normalisedSquare(estimate));
+    space.difference(error, values, error);
+    position.add(square(false));
+    heading.add(square(true));
+    // A covariance without an inverse has no normalised error: NaN.
+    consistency.add(normalised.squared(estimate, values));
   }
 
-  private double normalisedSquare(Gaussian estimate) {
-    try {
-      return normalised.squared(estimate, values);
-    } catch (IllegalArgumentException singular) {
-      return Double.NaN; // a covariance without an inverse has no normalised error
+  /** The squared error of the angles, or of the rest. */
+  private double square(boolean angles) {
+    double square = 0;
+    for (int i = 0; i < error.length; i++) {
+      if (space.isAngle(i) == angles) {
+        square += error[i] * error[i];
+      }
     }
+    return square;
   }
 
   Accuracy summary() {
-    long count = consistency.count();
-    return count == 0
-        ? Accuracy.NONE
-        : new Accuracy(
-            count,
-            Math.sqrt(sumOfSquares / count),
-            Math.sqrt(largestSquare),
-            consistency.degreesOfFreedom(),
-            consistency.mean(),
-            consistency.insideFraction());
+    return new Accuracy(
+        consistency.count(),
+        position.summary(),
+        headed ? Optional.of(heading.summary()) : Optional.empty(),
+        consistency.degreesOfFreedom(),
+        consistency.mean(),
+        consistency.insideFraction());
   }
 }

@@ -1,24 +1,25 @@
 package dev.estimation.benchmarks.replay;
 
 import dev.estimation.filters.filter.Estimate;
-import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.FilterWorkspace;
-import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
-import dev.estimation.filters.model.SensorModel;
 import java.util.ArrayList;
-import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Optional;
 
-/** One pass over the steps of a scenario. */
+/**
+ * One pass over the steps of a scenario. A row that the gate rejects is skipped; so is one whose
+ * iterated update does not settle, which the status tells. Any other failure ends the run.
+ */
 final class FilterRun {
   private final Scenario scenario;
   private final FilterWorkspace workspace;
-  private final IdentityHashMap<SensorModel, SensorPort> ports;
+  private final MeasurementPorts ports;
   private final Estimate estimate;
+  private final Optional<TrackSmoother> smoother;
   private final Optional<AccuracyTally> accuracy;
   private final InnovationTally innovations = new InnovationTally();
+  private final SkippedUpdates skipped = new SkippedUpdates();
   private final List<Snapshot> history = new ArrayList<>();
   private String failure = "";
   private long evaluations;
@@ -27,15 +28,16 @@ final class FilterRun {
 
   FilterRun(
       Scenario scenario,
-      FilterPlan plan,
       FilterWorkspace workspace,
-      IdentityHashMap<SensorModel, SensorPort> ports) {
+      MeasurementPorts ports,
+      Estimate start,
+      Optional<TrackSmoother> smoother) {
     this.scenario = scenario;
     this.workspace = workspace;
     this.ports = ports;
-    this.estimate = plan.start(scenario.startTime(), scenario.start());
-    this.accuracy =
-        scenario.truth().map(truth -> new AccuracyTally(scenario.motion().stateSpace(), truth));
+    this.estimate = start;
+    this.smoother = smoother;
+    this.accuracy = scenario.accuracy();
   }
 
   RunResult complete() {
@@ -51,13 +53,13 @@ final class FilterRun {
     return new RunResult(
         status(),
         history,
-        innovations.summary(),
+        Optional.of(innovations.summary()),
         accuracy.map(AccuracyTally::summary).orElse(Accuracy.NONE),
         new Effort(evaluations, jacobians, nanos));
   }
 
   private boolean predict(Step step) {
-    StepStatus status = workspace.predict(estimate, step.time());
+    StepStatus status = workspace.predict(estimate, step.time(), step.sharedControl());
     evaluations += workspace.evaluations();
     jacobians += workspace.jacobians();
     if (status != StepStatus.APPLIED) {
@@ -76,35 +78,42 @@ final class FilterRun {
     return true;
   }
 
+  /** Updates with a row, or skips it; false if the run cannot go on. */
   private boolean update(Measurement measurement) {
-    SensorPort port = ports.get(measurement.sensor());
-    StepStatus status = port.update(estimate, measurement.value(), measurement.given());
+    MeasurementPort port = ports.of(measurement);
+    StepStatus status = port.update(estimate, measurement);
     evaluations += port.evaluations();
     jacobians += port.jacobians();
-    if (status == StepStatus.APPLIED) {
-      innovations.accept(port);
-      return true;
+    switch (status) {
+      case APPLIED -> innovations.accept(port);
+      case GATED -> innovations.reject();
+      case NOT_CONVERGED -> {
+        innovations.skip();
+        skipped.add(history.size(), estimate.time());
+      }
+      default -> {
+        failure = port.failure();
+        return false;
+      }
     }
-    if (status == StepStatus.GATED) {
-      innovations.reject();
-      return true;
-    }
-    failure = port.failure();
-    return false;
+    return true;
   }
 
   private void keep(double time) {
     Snapshot snapshot = new Snapshot(history.size(), time, estimate.toGaussian());
     history.add(snapshot);
     accuracy.ifPresent(tally -> tally.add(time, snapshot.estimate()));
+    smoother.ifPresent(follower -> follower.record(workspace, estimate));
   }
 
   private String status() {
+    String unsettled = skipped.summary();
     if (failure.isEmpty()) {
-      return RunResult.OK;
+      return unsettled.isEmpty() ? RunResult.OK : unsettled;
     }
     int step = history.size();
-    return "step " + step + " at t = " + scenario.steps().get(step).time() + " s failed: "
-        + failure;
+    String failed =
+        "step " + step + " at t = " + scenario.steps().get(step).time() + " s failed: " + failure;
+    return unsettled.isEmpty() ? failed : failed + "; " + unsettled;
   }
 }

@@ -1,6 +1,5 @@
 package dev.estimation.benchmarks.replay;
 
-import dev.estimation.filters.filter.SensorPort;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -13,16 +12,21 @@ final class InnovationTally {
   private double squared;
   private double logLikelihood;
 
-  void accept(SensorPort port) {
+  void accept(MeasurementPort port) {
     rows++;
     accepted++;
-    degrees += port.innovation().length;
+    degrees += port.degreesOfFreedom();
     squared += port.normalisedInnovationSquared();
     logLikelihood += port.logLikelihood();
   }
 
   void reject() {
     rejectedRows.add(rows++);
+  }
+
+  /** A row that was neither used nor rejected. */
+  void skip() {
+    rows++;
   }
 
   Innovations summary() {

@@ -1,22 +1,26 @@
 package dev.estimation.benchmarks.replay;
 
+import dev.estimation.core.space.FlatSpace;
+import dev.estimation.core.space.Space;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 
 /**
- * Truth between recorded fixes, linear between two neighbours. Where neighbours lie too far apart,
- * or one of them is not good enough, there is no truth.
+ * Truth between recorded fixes, linear between two neighbours, angles along the shorter arc. Where
+ * neighbours lie too far apart, or one of them is not good enough, there is no truth.
  */
 public final class InterpolatedTruth implements Truth {
   private final int[] components;
+  private final FlatSpace space;
   private final double largestGap;
   private final List<Fix> fixes;
 
-  private InterpolatedTruth(int[] components, double largestGap, List<Fix> fixes) {
-    this.components = components;
-    this.largestGap = largestGap;
+  private InterpolatedTruth(Builder builder, List<Fix> fixes) {
+    this.components = builder.components;
+    this.space = builder.space;
+    this.largestGap = builder.largestGap;
     this.fixes = fixes;
   }
 
@@ -24,16 +28,29 @@ public final class InterpolatedTruth implements Truth {
   public static final class Builder {
     private final List<Fix> fixes = new ArrayList<>();
     private final int[] components;
+    private final FlatSpace space;
     private final double largestGap;
 
     /**
-     * Nothing yet.
+     * Nothing yet; all values are reals.
      *
      * @param largestGap between neighbours (s)
      * @param components of the state that fixes tell
      */
     public Builder(double largestGap, int... components) {
+      this(largestGap, Space.reals(components.length), components);
+    }
+
+    /**
+     * Nothing yet.
+     *
+     * @param largestGap between neighbours (s)
+     * @param space of the values: which of them are angles
+     * @param components of the state that fixes tell
+     */
+    public Builder(double largestGap, FlatSpace space, int... components) {
       this.largestGap = largestGap;
+      this.space = space;
       this.components = components.clone();
     }
 
@@ -46,9 +63,7 @@ public final class InterpolatedTruth implements Truth {
     public Optional<Truth> build() {
       List<Fix> sorted = new ArrayList<>(fixes);
       sorted.sort(Comparator.comparingDouble(fix -> fix.time));
-      return sorted.isEmpty()
-          ? Optional.empty()
-          : Optional.of(new InterpolatedTruth(components, largestGap, sorted));
+      return sorted.isEmpty() ? Optional.empty() : Optional.of(new InterpolatedTruth(this, sorted));
     }
   }
 
@@ -67,6 +82,11 @@ public final class InterpolatedTruth implements Truth {
   @Override
   public int[] components() {
     return components.clone();
+  }
+
+  @Override
+  public FlatSpace space() {
+    return space;
   }
 
   @Override
@@ -107,9 +127,12 @@ public final class InterpolatedTruth implements Truth {
       return false;
     }
     double part = gap > 0 ? (time - before.time) / gap : 0;
-    for (int i = 0; i < components.length; i++) {
-      values[i] = before.values[i] + part * (after.values[i] - before.values[i]);
+    double[] change = new double[components.length];
+    space.difference(after.values, before.values, change);
+    for (int i = 0; i < change.length; i++) {
+      change[i] *= part;
     }
+    space.displace(before.values, change, values);
     return true;
   }
 }

@@ -1,42 +1,61 @@
 package dev.estimation.benchmarks.replay;
 
 import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.filters.filter.Estimate;
 import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.FilterWorkspace;
-import dev.estimation.filters.filter.SensorPort;
-import dev.estimation.filters.model.SensorModel;
-import java.util.IdentityHashMap;
+import java.util.Optional;
 
 /**
- * Runs one scenario with one way of carrying moments. Everything that the filter needs is made
- * beforehand, so that a matching which cannot serve the models is refused before anything runs, and
- * steps allocate nothing. <i>Confined to one thread</i>; may run more than once.
+ * Runs one scenario with one kind of filter. Everything that the filter needs is made beforehand,
+ * so that a filter which cannot serve the models is refused before anything runs, and steps
+ * allocate nothing. <i>Confined to one thread</i>; may run more than once.
  */
 public final class Replayer {
   private final Scenario scenario;
   private final FilterPlan plan;
   private final FilterWorkspace workspace;
-  private final IdentityHashMap<SensorModel, SensorPort> ports = new IdentityHashMap<>();
+  private final MeasurementPorts ports;
 
   /**
-   * Prepares a run.
+   * Prepares a run with the filter of a matching.
    *
    * @throws IllegalArgumentException if the matching cannot serve a model of the scenario
    */
   public Replayer(Scenario scenario, MomentMatching matching) {
+    this(scenario, FilterKind.of(matching));
+  }
+
+  /**
+   * Prepares a run.
+   *
+   * @throws IllegalArgumentException if the filter cannot serve a model of the scenario
+   */
+  public Replayer(Scenario scenario, FilterKind kind) {
     this.scenario = scenario;
-    this.plan = scenario.plan(matching);
+    this.plan = scenario.plan(kind);
     this.workspace = plan.workspace();
-    for (Step step : scenario.steps()) {
-      for (Measurement measurement : step.measurements()) {
-        ports.computeIfAbsent(measurement.sensor(), workspace::port);
-      }
-    }
+    this.ports = new MeasurementPorts(workspace, scenario.steps());
   }
 
   /** Runs all steps, up to the first that fails. */
   public RunResult run() {
-    FilterRun run = new FilterRun(scenario, plan, workspace, ports);
-    return run.complete();
+    return run(start(), Optional.empty());
+  }
+
+  /** Runs all steps, up to the first that fails, and then smooths what was done. */
+  public FilteredAndSmoothed runAndSmooth() {
+    Estimate start = start();
+    TrackSmoother smoother = new TrackSmoother(scenario, start);
+    RunResult filtered = run(start, Optional.of(smoother));
+    return new FilteredAndSmoothed(filtered, smoother.smooth(filtered));
+  }
+
+  private Estimate start() {
+    return plan.start(scenario.startTime(), scenario.start());
+  }
+
+  private RunResult run(Estimate start, Optional<TrackSmoother> smoother) {
+    return new FilterRun(scenario, workspace, ports, start, smoother).complete();
   }
 }

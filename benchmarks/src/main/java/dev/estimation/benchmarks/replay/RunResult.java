@@ -2,20 +2,21 @@ package dev.estimation.benchmarks.replay;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * What came out of one run.
  *
- * @param status {@link #OK}, or the step that failed and why
- * @param history the estimate after each step that was done
- * @param innovations what the measurements said
+ * @param status {@link #OK}, or the step that failed and why, or that updates did not converge
+ * @param history the estimate of each step that was done
+ * @param innovations what the measurements said; empty for a smoothed run, which has none
  * @param accuracy against truth, over the steps done
  * @param effort what it cost, a failed step included
  */
 public record RunResult(
     String status,
     List<Snapshot> history,
-    Innovations innovations,
+    Optional<Innovations> innovations,
     Accuracy accuracy,
     Effort effort) {
   /** The status of a run that came to its end. */

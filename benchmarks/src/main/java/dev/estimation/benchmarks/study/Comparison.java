@@ -1,10 +1,11 @@
 package dev.estimation.benchmarks.study;
 
 import dev.estimation.benchmarks.log.BadInputException;
+import dev.estimation.benchmarks.replay.FilterKind;
+import dev.estimation.benchmarks.replay.FilteredAndSmoothed;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.Replayer;
 import dev.estimation.benchmarks.replay.RunResult;
-import dev.estimation.core.matching.MomentMatching;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
@@ -17,16 +18,21 @@ final class Comparison {
   private final List<LoadedVariant> variants;
   private final List<Method> methods;
   private final boolean wholeState;
+  private final boolean smooth;
 
   /**
    * A comparison, not yet run.
    *
+   * @param wholeState whether points are drawn over the whole state
+   * @param smooth whether each run is followed by one of its smoothed track
    * @throws BadInputException if a method cannot serve a variant
    */
-  Comparison(List<LoadedVariant> variants, List<Method> methods, boolean wholeState) {
+  Comparison(
+      List<LoadedVariant> variants, List<Method> methods, boolean wholeState, boolean smooth) {
     this.variants = variants;
     this.methods = methods;
     this.wholeState = wholeState;
+    this.smooth = smooth;
     for (LoadedVariant variant : variants) {
       for (Method method : methods) {
         tryOut(variant, method);
@@ -46,17 +52,32 @@ final class Comparison {
   }
 
   private Optional<Replayer> replayer(LoadedVariant variant, Method method) {
-    MomentMatching matching = wholeState ? method.matching().overWholeInput() : method.matching();
-    return variant.scenario().map(scenario -> new Replayer(scenario, matching));
+    FilterKind kind = wholeState ? method.kind().overWholeState() : method.kind();
+    return variant.scenario().map(scenario -> new Replayer(scenario, kind));
   }
 
   /** Runs all, one after another, and hands each on as soon as it is done. */
   void run(Consumer<LabelledRun> consumer) {
     for (LoadedVariant variant : variants) {
       for (Method method : methods) {
-        Optional<RunResult> result = replayer(variant, method).map(Replayer::run);
-        consumer.accept(new LabelledRun(variant, method.typed(), wholeState, result));
+        if (smooth) {
+          runAndSmooth(variant, method, consumer);
+        } else {
+          Optional<RunResult> result = replayer(variant, method).map(Replayer::run);
+          consumer.accept(labelled(variant, method, false, result));
+        }
       }
     }
+  }
+
+  private void runAndSmooth(LoadedVariant variant, Method method, Consumer<LabelledRun> consumer) {
+    Optional<FilteredAndSmoothed> both = replayer(variant, method).map(Replayer::runAndSmooth);
+    consumer.accept(labelled(variant, method, false, both.map(FilteredAndSmoothed::filtered)));
+    consumer.accept(labelled(variant, method, true, both.map(FilteredAndSmoothed::smoothed)));
+  }
+
+  private LabelledRun labelled(
+      LoadedVariant variant, Method method, boolean smoothed, Optional<RunResult> result) {
+    return new LabelledRun(variant, method.typed(), wholeState, smoothed, result);
   }
 }

@@ -10,13 +10,34 @@ import java.util.Optional;
  * @param variant of which log
  * @param method as typed
  * @param wholeState whether points were drawn over the whole state
+ * @param smoothed whether the track was smoothed
  * @param result empty if the log does not have the variant
  */
 record LabelledRun(
-    LoadedVariant variant, String method, boolean wholeState, Optional<RunResult> result) {
+    LoadedVariant variant,
+    String method,
+    boolean wholeState,
+    boolean smoothed,
+    Optional<RunResult> result) {
+  private static final String SMOOTHED = " smoothed";
+
   /** {@return how the run ended, in one line} */
   String status() {
     String status = result.map(RunResult::status).orElse(variant.absence());
     return status.replaceAll("\\s+", " ");
+  }
+
+  /** {@return the method, and that it was smoothed if it was} */
+  String name() {
+    return smoothed ? method + SMOOTHED : method;
+  }
+
+  /** {@return the longest name that a run of these methods can have} */
+  static int longestName(Iterable<Method> methods) {
+    int longest = 0;
+    for (Method method : methods) {
+      longest = Math.max(longest, method.typed().length());
+    }
+    return longest + SMOOTHED.length();
   }
 }

@@ -1,11 +1,11 @@
 package dev.estimation.benchmarks.study;
 
-import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.benchmarks.replay.FilterKind;
 
 /**
- * A way of carrying moments, and the words in which it was asked for.
+ * A kind of filter, and the words in which it was asked for.
  *
  * @param typed as given
- * @param matching what it means
+ * @param kind what it means
  */
-record Method(String typed, MomentMatching matching) {}
+record Method(String typed, FilterKind kind) {}

@@ -2,20 +2,25 @@ package dev.estimation.benchmarks.study;
 
 import dev.estimation.benchmarks.log.BadInputException;
 import dev.estimation.benchmarks.log.DecimalNumber;
+import dev.estimation.benchmarks.replay.FilterKind;
 import dev.estimation.core.matching.Linearisation;
-import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.PointRule;
+import dev.estimation.core.points.RandomRule;
 import dev.estimation.core.points.UnscentedRule;
+import dev.estimation.filters.filter.IteratedUpdate;
 import java.util.List;
 
 /**
- * Reads methods: {@code linear}, {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number
- * less the dimension, as in {@code 3-n}), {@code cubature}, {@code hermite:NODES}.
+ * Reads methods: {@code linear}, {@code linear-iterated}, {@code linear-iterated:line-search},
+ * {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
+ * 3-n}), {@code cubature}, {@code hermite:NODES}, {@code random:COUNT,SEED}.
  */
 final class MethodParser {
-  static final String FORMS = "linear, unscented:ALPHA,BETA,KAPPA, cubature, hermite:NODES";
+  static final String FORMS = "linear, linear-iterated, linear-iterated:line-search,"
+      + " unscented:ALPHA,BETA,KAPPA, cubature, hermite:NODES, random:COUNT,SEED";
 
   /** What is run when nothing is asked for. */
   static final List<String> DEFAULT = List.of(
@@ -26,48 +31,72 @@ final class MethodParser {
       "cubature",
       "hermite:3");
 
+  private static final String LINE_SEARCH = "line-search";
   private static final String LESS_DIMENSION = "-n";
 
   private MethodParser() {}
 
   static Method parse(String typed) {
     try {
-      return new Method(typed, matching(typed));
+      return new Method(typed, kind(typed));
     } catch (IllegalArgumentException refused) {
       throw new BadInputException("method " + typed + ": " + refused.getMessage(), refused);
     }
   }
 
-  private static MomentMatching matching(String typed) {
+  private static FilterKind kind(String typed) {
     int colon = typed.indexOf(':');
     String name = colon < 0 ? typed : typed.substring(0, colon);
-    String[] numbers = colon < 0 ? new String[0] : typed.substring(colon + 1).split(",", -1);
+    String[] settings = colon < 0 ? new String[0] : typed.substring(colon + 1).split(",", -1);
     return switch (name) {
       case "linear" -> {
-        requireCount(typed, numbers, 0);
-        yield Linearisation.firstOrder();
+        requireCount(typed, settings, 0);
+        yield FilterKind.of(Linearisation.firstOrder());
       }
+      case "linear-iterated" -> FilterKind.iterated(iteration(typed, settings));
+      default -> FilterKind.of(PointMatching.of(rule(name, typed, settings)));
+    };
+  }
+
+  private static IteratedUpdate iteration(String typed, String[] settings) {
+    if (settings.length == 0) {
+      return IteratedUpdate.undamped();
+    }
+    if (settings.length == 1 && settings[0].equals(LINE_SEARCH)) {
+      return IteratedUpdate.lineSearch();
+    }
+    throw new BadInputException(
+        "method " + typed + ": only " + LINE_SEARCH + " may follow (forms: " + FORMS + ")");
+  }
+
+  private static PointRule rule(String name, String typed, String[] settings) {
+    return switch (name) {
       case "cubature" -> {
-        requireCount(typed, numbers, 0);
-        yield PointMatching.of(CubatureRule.degreeThree());
+        requireCount(typed, settings, 0);
+        yield CubatureRule.degreeThree();
       }
       case "unscented" -> {
-        requireCount(typed, numbers, 3);
-        yield PointMatching.of(unscented(typed, numbers));
+        requireCount(typed, settings, 3);
+        yield unscented(typed, settings);
       }
       case "hermite" -> {
-        requireCount(typed, numbers, 1);
-        yield PointMatching.of(GaussHermiteRule.product(nodes(typed, numbers[0])));
+        requireCount(typed, settings, 1);
+        yield GaussHermiteRule.product(wholeNumber(typed, "NODES", settings[0]));
+      }
+      case "random" -> {
+        requireCount(typed, settings, 2);
+        int count = wholeNumber(typed, "COUNT", settings[0]);
+        yield RandomRule.independent(count, seed(typed, settings[1])).standardised();
       }
       default ->
         throw new BadInputException("method must be one of " + FORMS + "; got '" + typed + "'");
     };
   }
 
-  private static void requireCount(String typed, String[] numbers, int wanted) {
-    if (numbers.length != wanted) {
+  private static void requireCount(String typed, String[] settings, int wanted) {
+    if (settings.length != wanted) {
       throw new BadInputException("method " + typed + ": must have " + wanted + " numbers, got "
-          + numbers.length + " (forms: " + FORMS + ")");
+          + settings.length + " (forms: " + FORMS + ")");
     }
   }
 
@@ -89,12 +118,25 @@ final class MethodParser {
             "method " + typed + ": " + what + " must be a finite number, got '" + text + "'"));
   }
 
-  private static int nodes(String typed, String text) {
+  private static int wholeNumber(String typed, String what, String text) {
     try {
       return Integer.parseInt(text);
     } catch (NumberFormatException notWhole) {
-      throw new BadInputException(
-          "method " + typed + ": NODES must be a whole number, got '" + text + "'", notWhole);
+      throw notWhole(typed, what, text, notWhole);
     }
+  }
+
+  private static long seed(String typed, String text) {
+    try {
+      return Long.parseLong(text);
+    } catch (NumberFormatException notWhole) {
+      throw notWhole(typed, "SEED", text, notWhole);
+    }
+  }
+
+  private static BadInputException notWhole(
+      String typed, String what, String text, NumberFormatException cause) {
+    return new BadInputException(
+        "method " + typed + ": " + what + " must be a whole number, got '" + text + "'", cause);
   }
 }

@@ -1,10 +1,6 @@
 package dev.estimation.benchmarks.study;
 
-import dev.estimation.benchmarks.cases.balloon.BalloonCase;
-import dev.estimation.benchmarks.cases.uwb.UwbCase;
-import dev.estimation.benchmarks.cases.vessel.VesselCase;
 import dev.estimation.benchmarks.log.BadInputException;
-import dev.estimation.benchmarks.log.LogFolder;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.ReplayCase;
 import java.io.PrintWriter;
@@ -23,10 +19,11 @@ import picocli.CommandLine.Spec;
     name = "replay",
     description = "Replays a log with several methods; without arguments, a simulated flight.")
 final class ReplayCommand implements Callable<Integer> {
-  private static final String DEMO = "demo";
-
-  @Option(names = "--case", paramLabel = "NAME", description = "vessel, uwb or demo (the default)")
-  private String caseName = DEMO;
+  @Option(
+      names = "--case",
+      paramLabel = "NAME",
+      description = "vessel, uwb, robot, gnss or demo (the default)")
+  private String caseName = CaseOpener.DEMO;
 
   @Option(names = "--variant", paramLabel = "NAME", description = "repeatable; all if not given")
   private List<String> variants = new ArrayList<>();
@@ -43,6 +40,9 @@ final class ReplayCommand implements Callable<Integer> {
   @Option(names = "--whole-state", description = "draw points over the whole state in updates too")
   private boolean wholeState;
 
+  @Option(names = "--smooth", description = "follow each run by one of its smoothed track")
+  private boolean smooth;
+
   @Option(
       names = "--out",
       paramLabel = "FOLDER",
@@ -58,12 +58,12 @@ final class ReplayCommand implements Callable<Integer> {
   @Override
   public Integer call() {
     List<Method> chosenMethods = chosenMethods();
-    ReplayCase replayed = open();
+    ReplayCase replayed = new CaseOpener(caseName, log, uwb).open();
     List<LoadedVariant> loaded = load(replayed);
     ResultsFolder folder = ResultsFolder.prepare(out);
-    Comparison comparison = new Comparison(loaded, chosenMethods, wholeState);
+    Comparison comparison = new Comparison(loaded, chosenMethods, wholeState, smooth);
     PrintWriter console = spec.commandLine().getOut();
-    ResultTable table = new ResultTable(console);
+    ResultTable table = new ResultTable(console, LabelledRun.longestName(chosenMethods));
     ResultsDocument document = new ResultsDocument(caseName, log);
     comparison.run(run -> {
       table.print(run);
@@ -78,37 +78,6 @@ final class ReplayCommand implements Callable<Integer> {
   private List<Method> chosenMethods() {
     List<String> typed = methods.isEmpty() ? MethodParser.DEFAULT : methods;
     return new LinkedHashSet<>(typed).stream().map(MethodParser::parse).toList();
-  }
-
-  private ReplayCase open() {
-    if (!caseName.equals("uwb")) {
-      uwb.requireUnused(caseName);
-    }
-    return switch (caseName) {
-      case "vessel" -> new VesselCase(requireLog());
-      case "uwb" -> new UwbCase(requireLog(), uwb.settings());
-      case DEMO -> {
-        requireNoLog();
-        yield new BalloonCase();
-      }
-      default ->
-        throw new BadInputException(
-            "--case must be one of vessel, uwb, demo; got '" + caseName + "'");
-    };
-  }
-
-  private void requireNoLog() {
-    if (log != null) {
-      throw new BadInputException("case demo is simulated and reads no --log, got " + log
-          + "; name the log's --case: vessel or uwb");
-    }
-  }
-
-  private LogFolder requireLog() {
-    if (log == null) {
-      throw new BadInputException("case " + caseName + " wants --log FOLDER, got none");
-    }
-    return LogFolder.open(log);
   }
 
   private List<LoadedVariant> load(ReplayCase replayed) {

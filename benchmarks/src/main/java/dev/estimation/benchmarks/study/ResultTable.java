@@ -3,31 +3,45 @@ package dev.estimation.benchmarks.study;
 import dev.estimation.benchmarks.replay.Accuracy;
 import dev.estimation.benchmarks.replay.Innovations;
 import dev.estimation.benchmarks.replay.RunResult;
+import dev.estimation.benchmarks.replay.Score;
 import dev.estimation.filters.consistency.ChiSquareBounds;
 import java.io.PrintWriter;
 import java.util.Locale;
+import java.util.Optional;
 
-/** Prints runs as one table a variant, as they come. */
+/**
+ * Prints runs as one table a variant, as they come. A smoothed run has a line of its own; what it
+ * does not have is a dash. Headings have columns where truth tells them.
+ */
 final class ResultTable {
   private final PrintWriter out;
+  private final String methodColumn;
   private String title = "";
+  private boolean headed;
   private int degreesOfFreedom;
 
-  ResultTable(PrintWriter out) {
+  /**
+   * A table.
+   *
+   * @param nameWidth characters of the longest name of a run
+   */
+  ResultTable(PrintWriter out, int nameWidth) {
     this.out = out;
+    this.methodColumn = "%-" + nameWidth + "s";
   }
 
   void print(LabelledRun run) {
     String next = run.variant().label() + " (variant " + run.variant().name() + ")";
     if (!next.equals(title)) {
       title = next;
+      headed = run.result().map(RunResult::accuracy).flatMap(Accuracy::heading).isPresent();
       printHead();
     }
     if (run.result().isPresent()) {
-      printRow(run.method(), run.result().get());
+      printRow(run.name(), run.result().get());
     }
     if (!run.status().equals(RunResult.OK)) {
-      out.println("  " + run.method() + ": " + run.status());
+      out.println("  " + run.name() + ": " + run.status());
     }
     out.flush();
   }
@@ -35,39 +49,45 @@ final class ResultTable {
   private void printHead() {
     out.println();
     out.println(title);
-    row("", "position", "error (m)", "NEES", "inside", "NIS per", "gated", "", "", "time per");
-    row(
-        "method",
-        "rmse",
-        "max",
-        "mean",
-        "95 %",
-        "degree",
-        "rows",
-        "evaluations",
-        "Jacobians",
-        "step (us)");
+    begin("", "position", "error (m)");
+    if (headed) {
+      out.printf(" %10s %11s", "heading", "error (rad)");
+    }
+    end("NEES", "inside", "NIS per", "gated", "", "", "time per");
+    begin("method", "rmse", "max");
+    if (headed) {
+      out.printf(" %10s %11s", "rmse", "max");
+    }
+    end("mean", "95 %", "degree", "rows", "evaluations", "Jacobians", "step (us)");
   }
 
-  private void printRow(String method, RunResult result) {
+  private void printRow(String name, RunResult result) {
     Accuracy accuracy = result.accuracy();
-    Innovations innovations = result.innovations();
-    degreesOfFreedom = Math.max(degreesOfFreedom, accuracy.degreesOfFreedom());
-    row(
-        method,
-        number(accuracy.rmse()),
-        number(accuracy.max()),
+    if (accuracy.count() > 0) {
+      degreesOfFreedom = accuracy.degreesOfFreedom();
+    }
+    begin(name, number(accuracy.position().rmse()), number(accuracy.position().max()));
+    if (headed) {
+      Score heading = accuracy.heading().orElse(new Score(Double.NaN, Double.NaN));
+      out.printf(" %10s %11s", number(heading.rmse()), number(heading.max()));
+    }
+    Optional<Innovations> innovations = result.innovations();
+    end(
         number(accuracy.neesMean()),
         percent(accuracy.insideFraction()),
-        number(innovations.meanPerDegree()),
-        innovations.rejectedRows().size(),
+        number(innovations.map(Innovations::meanPerDegree).orElse(Double.NaN)),
+        innovations.map(said -> "" + said.rejectedRows().size()).orElse("-"),
         result.effort().evaluations(),
         result.effort().jacobians(),
         number(result.nanosPerStep() / 1000));
   }
 
-  private void row(Object... cells) {
-    out.printf(Locale.ROOT, "%-22s %10s %10s %10s %8s %10s %6s %12s %10s %10s%n", cells);
+  private void begin(String name, String rmse, String max) {
+    out.printf(methodColumn + " %10s %10s", name, rmse, max);
+  }
+
+  private void end(Object... cells) {
+    out.printf(" %10s %8s %10s %6s %12s %10s %10s%n", cells);
   }
 
   /** Prints how to read the columns. */
@@ -77,9 +97,10 @@ final class ResultTable {
       ChiSquareBounds bounds = ChiSquareBounds.twoSided(0.95, degreesOfFreedom);
       out.printf(
           Locale.ROOT,
-          "NEES: normalised error squared of the position, %d degrees of freedom. Honest"
+          "NEES: normalised error squared of the %s, %d degrees of freedom. Honest"
               + " covariances have a mean%n  of about %d and 95 %% of the values inside"
               + " [%.3f, %.3f] (column inside 95 %%).%n",
+          headed ? "position and heading" : "position",
           degreesOfFreedom,
           degreesOfFreedom,
           bounds.lower(),

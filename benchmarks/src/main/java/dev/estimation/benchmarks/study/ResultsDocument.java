@@ -6,10 +6,15 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import dev.estimation.benchmarks.replay.Accuracy;
 import dev.estimation.benchmarks.replay.Innovations;
 import dev.estimation.benchmarks.replay.RunResult;
+import dev.estimation.benchmarks.replay.Score;
 import dev.estimation.benchmarks.replay.Snapshot;
 import dev.estimation.core.gaussian.Gaussian;
 
-/** Runs as JSON. A number that does not exist is null, never zero and never NaN. */
+/**
+ * Runs as JSON. What does not exist is null, never zero and never NaN. A smoothed run has no
+ * innovations: its rejected rows are null too, since an empty list would say that none were rejected.
+ * It asks no model, so its evaluations and Jacobians are 0; its time is that of the way back alone.
+ */
 final class ResultsDocument {
   private final ObjectNode root = JsonNodeFactory.instance.objectNode();
   private final ArrayNode runs;
@@ -35,9 +40,10 @@ final class ResultsDocument {
     node.put("variant", run.variant().name());
     node.put("method", run.method());
     node.put("wholeState", run.wholeState());
-    node.put("smoothed", false);
+    node.put("smoothed", run.smoothed());
     node.put("status", run.status());
-    run.result().ifPresentOrElse(result -> fill(node, result), () -> fillAbsent(node));
+    run.result()
+        .ifPresentOrElse(result -> fill(node, result), () -> fillAbsent(node, run.smoothed()));
   }
 
   private static void fill(ObjectNode node, RunResult result) {
@@ -45,12 +51,14 @@ final class ResultsDocument {
     node.put("evaluations", result.effort().evaluations());
     node.put("jacobians", result.effort().jacobians());
     putNumber(node, "nanosPerStep", result.nanosPerStep());
-    Innovations innovations = result.innovations();
-    ArrayNode rejected = node.putArray("rejectedRows");
-    innovations.rejectedRows().forEach(rejected::add);
-    putNumber(node, "logLikelihood", innovations.logLikelihood());
+    result.innovations().ifPresentOrElse(said -> putRows(node, said), () -> putNoRows(node));
     putAccuracy(node, result.accuracy());
-    putInnovations(node, innovations);
+    result
+        .innovations()
+        .filter(said -> said.accepted() > 0)
+        .ifPresentOrElse(
+            said -> putNumber(node.putObject("nis"), "meanPerDegree", said.meanPerDegree()),
+            () -> node.putNull("nis"));
     putFinal(node, result);
     ArrayNode checkpoints = node.putArray("checkpoints");
     for (Snapshot snapshot : result.checkpoints()) {
@@ -60,12 +68,27 @@ final class ResultsDocument {
     }
   }
 
-  private static void fillAbsent(ObjectNode node) {
+  private static void putRows(ObjectNode node, Innovations innovations) {
+    ArrayNode rejected = node.putArray("rejectedRows");
+    innovations.rejectedRows().forEach(rejected::add);
+    putNumber(node, "logLikelihood", innovations.logLikelihood());
+  }
+
+  private static void putNoRows(ObjectNode node) {
+    node.putNull("rejectedRows");
+    node.putNull("logLikelihood");
+  }
+
+  private static void fillAbsent(ObjectNode node, boolean smoothed) {
     node.put("steps", 0);
     node.putNull("evaluations");
     node.putNull("jacobians");
     node.putNull("nanosPerStep");
-    node.putArray("rejectedRows");
+    if (smoothed) {
+      node.putNull("rejectedRows");
+    } else {
+      node.putArray("rejectedRows");
+    }
     node.putNull("logLikelihood");
     node.putObject("scores").putNull("position");
     node.putNull("nees");
@@ -76,26 +99,26 @@ final class ResultsDocument {
 
   private static void putAccuracy(ObjectNode node, Accuracy accuracy) {
     ObjectNode scores = node.putObject("scores");
+    putScore(scores, "position", accuracy.position());
+    accuracy.heading().ifPresent(heading -> putScore(scores, "heading", heading));
     if (accuracy.count() == 0) {
-      scores.putNull("position");
       node.putNull("nees");
       return;
     }
-    ObjectNode position = scores.putObject("position");
-    putNumber(position, "rmse", accuracy.rmse());
-    putNumber(position, "max", accuracy.max());
     ObjectNode nees = node.putObject("nees");
     nees.put("degreesOfFreedom", accuracy.degreesOfFreedom());
     putNumber(nees, "mean", accuracy.neesMean());
     putNumber(nees, "insideFraction", accuracy.insideFraction());
   }
 
-  private static void putInnovations(ObjectNode node, Innovations innovations) {
-    if (innovations.accepted() == 0) {
-      node.putNull("nis");
-    } else {
-      putNumber(node.putObject("nis"), "meanPerDegree", innovations.meanPerDegree());
+  private static void putScore(ObjectNode scores, String name, Score score) {
+    if (Double.isNaN(score.rmse())) {
+      scores.putNull(name);
+      return;
     }
+    ObjectNode node = scores.putObject(name);
+    putNumber(node, "rmse", score.rmse());
+    putNumber(node, "max", score.max());
   }
 
   private static void putFinal(ObjectNode node, RunResult result) {

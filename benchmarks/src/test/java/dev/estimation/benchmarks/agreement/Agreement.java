@@ -2,15 +2,18 @@ package dev.estimation.benchmarks.agreement;
 
 import static org.junit.jupiter.api.Assertions.assertAll;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import dev.estimation.benchmarks.replay.Accuracy;
 import dev.estimation.benchmarks.replay.Innovations;
 import dev.estimation.benchmarks.replay.RunResult;
+import dev.estimation.benchmarks.replay.Score;
 import dev.estimation.benchmarks.replay.Snapshot;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 
 /** Holds a run against what the independent program computed for it. */
 final class Agreement {
@@ -37,24 +40,41 @@ final class Agreement {
         () -> checkAccuracy(expected),
         () -> checkInnovations(expected),
         () -> checkCheckpoints(checkpoints),
-        () -> checkFinal(expected.get("final")));
+        () -> checkEnd(expected));
   }
 
   private void checkAccuracy(JsonNode expected) {
     Accuracy accuracy = result.accuracy();
     JsonNode nees = expected.get("nees");
+    String position = expected.has("rmse_position_m") ? "position_m" : "position_3d_m";
     assertEquals(expected.get("rows_scored").asLong(), accuracy.count());
     assertEquals(nees.get("dof").asInt(), accuracy.degreesOfFreedom());
     assertAll(
-        () -> checkScore("rmse", expected.get("rmse_position_m"), accuracy.rmse()),
-        () -> checkScore("max", expected.get("max_position_m"), accuracy.max()),
-        () -> checkScore("NEES", nees.get("mean"), accuracy.neesMean()),
-        () -> checkScore(
+        () -> checkScore(expected, position, accuracy.position()),
+        () -> checkHeading(expected, accuracy.heading()),
+        () -> checkRelative("NEES", nees.get("mean"), accuracy.neesMean()),
+        () -> checkRelative(
             "inside", nees.get("fraction_inside_two_sided_95"), accuracy.insideFraction()));
   }
 
+  private void checkHeading(JsonNode expected, Optional<Score> heading) {
+    assertEquals(expected.has("rmse_heading_rad"), heading.isPresent(), "heading is scored");
+    heading.ifPresent(score -> checkScore(expected, "heading_rad", score));
+  }
+
+  private void checkScore(JsonNode expected, String what, Score score) {
+    assertAll(
+        () -> checkRelative("rmse " + what, expected.get("rmse_" + what), score.rmse()),
+        () -> checkRelative("max " + what, expected.get("max_" + what), score.max()));
+  }
+
   private void checkInnovations(JsonNode expected) {
-    Innovations innovations = result.innovations();
+    if (filter.smoothed()) {
+      assertFalse(expected.has("nis"), "a smoothed track has no innovations");
+      assertTrue(result.innovations().isEmpty(), "a smoothed track has no innovations");
+      return;
+    }
+    Innovations innovations = result.innovations().orElseThrow();
     List<Double> rejected = Arrays.stream(ReferenceFiles.numbers(expected.get("rejected_rows")))
         .boxed()
         .toList();
@@ -62,17 +82,18 @@ final class Agreement {
         innovations.rejectedRows().stream().map(Integer::doubleValue).toList();
     assertEquals(rejected, actual, "rejected rows");
     assertEquals(expected.get("nis").get("updates").asInt(), innovations.accepted());
-    checkScore("NIS", expected.get("nis").get("mean_per_dof"), innovations.meanPerDegree());
+    checkRelative("NIS", expected.get("nis").get("mean_per_dof"), innovations.meanPerDegree());
+    double logLikelihood = expected.get("log_likelihood").asDouble();
     assertEquals(
-        expected.get("log_likelihood").asDouble(),
+        logLikelihood,
         innovations.logLikelihood(),
-        filter.logLikelihoodLimit(),
+        filter.limits().logLikelihoodNear(logLikelihood),
         "log-likelihood");
   }
 
-  private void checkScore(String what, JsonNode expected, double actual) {
+  private void checkRelative(String what, JsonNode expected, double actual) {
     double value = expected.asDouble();
-    assertEquals(value, actual, filter.scoreLimit() * Math.abs(value), what);
+    assertEquals(value, actual, filter.limits().score() * Math.abs(value), what);
   }
 
   private void checkCheckpoints(List<String[]> checkpoints) {
@@ -94,14 +115,23 @@ final class Agreement {
     checkDistance("checkpoints", distance);
   }
 
-  private void checkFinal(JsonNode expected) {
-    Snapshot last = result.history().get(result.steps() - 1);
+  /** The files hold where a filter ended, and where a smoother ended: at the first step. */
+  private void checkEnd(JsonNode expected) {
+    if (filter.smoothed()) {
+      checkEstimate("first", result.history().get(0), expected.get("first"));
+    } else {
+      checkEstimate("final", result.history().get(result.steps() - 1), expected.get("final"));
+    }
+  }
+
+  private void checkEstimate(String where, Snapshot snapshot, JsonNode expected) {
+    assertEquals(expected.get("time_s").asDouble(), snapshot.time(), 1e-9, "time, " + where);
     EstimateDistance distance = new EstimateDistance();
     double[] covariance = Arrays.stream(rows(expected.get("covariance")))
         .flatMapToDouble(Arrays::stream)
         .toArray();
-    distance.add(last.estimate(), ReferenceFiles.numbers(expected.get("mean")), covariance);
-    checkDistance("final", distance);
+    distance.add(snapshot.estimate(), ReferenceFiles.numbers(expected.get("mean")), covariance);
+    checkDistance(where, distance);
   }
 
   private static double[][] rows(JsonNode matrix) {
@@ -113,8 +143,8 @@ final class Agreement {
   private void checkDistance(String where, EstimateDistance distance) {
     double largest = distance.largest();
     assertTrue(
-        largest <= filter.distanceLimit(),
-        filter.name() + ": distance at " + where + " must be at most " + filter.distanceLimit()
-            + " standard deviations, got " + largest);
+        largest <= filter.limits().distance(),
+        filter.name() + ": distance at " + where + " must be at most "
+            + filter.limits().distance() + " standard deviations, got " + largest);
   }
 }

@@ -11,6 +11,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.DynamicTest;
 
 /**
@@ -40,12 +41,11 @@ final class ReferenceFiles {
   }
 
   /** {@return the rows of a file of checkpoints, cells split, header left out} */
-  static List<String[]> checkpoints(String fileName) {
+  static Stream<String[]> checkpoints(String fileName) {
     return read(FOLDER.resolve("cases").resolve(fileName))
         .lines()
         .skip(1)
-        .map(line -> line.split(","))
-        .toList();
+        .map(line -> line.split(","));
   }
 
   static LogFolder log(String name) {

@@ -6,6 +6,7 @@ import dev.estimation.core.function.CentralDifferences;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
+import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
 import dev.estimation.filters.model.DifferentiableSensor;
 
 /** Holds analytic Jacobians against central differences. */
@@ -26,6 +27,30 @@ public final class JacobianCheck {
     model.moveJacobian(state, none, 0, dt, analytic);
     VectorFunction move = (input, given, output) -> model.move(input, none, 0, dt, output);
     compare(model.stateSpace(), model.stateSpace(), move, state, none, scales, analytic, tolerance);
+  }
+
+  /** Compares both Jacobians of a noise-driven motion at noise 0, as {@link #motion}. */
+  public static void noiseDriven(
+      DifferentiableNoiseDrivenMotion model,
+      double[] state,
+      double[] control,
+      double dt,
+      double[] scales,
+      double[] noiseScales,
+      double tolerance) {
+    double[] noNoise = new double[noiseScales.length];
+    double[] byState = new double[state.length * state.length];
+    double[] byNoise = new double[state.length * noiseScales.length];
+    model.moveJacobians(state, control, 0, dt, byState, byNoise);
+    VectorFunction ofState =
+        (input, given, output) -> model.move(input, noNoise, control, 0, dt, output);
+    VectorFunction ofNoise =
+        (input, given, output) -> model.move(state, input, control, 0, dt, output);
+    Space space = model.stateSpace();
+    Space noise = Space.reals(noiseScales.length);
+    double[] none = new double[0];
+    compare(space, space, ofState, state, none, scales, byState, tolerance);
+    compare(noise, space, ofNoise, noNoise, none, noiseScales, byNoise, tolerance);
   }
 
   /** Compares at a state, as {@link #motion}. */

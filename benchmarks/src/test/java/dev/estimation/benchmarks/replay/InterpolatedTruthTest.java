@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.estimation.core.space.Space;
 import org.junit.jupiter.api.Test;
 
 class InterpolatedTruthTest {
@@ -62,6 +63,23 @@ class InterpolatedTruthTest {
     builder.add(1, true, 3, 4);
     assertTrue(builder.build().orElseThrow().at(1, values));
     assertArrayEquals(new double[] {3, 4}, values, 0);
+  }
+
+  /** From 3.0 to -3.0 the shorter way leads over pi: 0.283 rad, not 6. */
+  @Test
+  void headingsTakeTheShorterArc() {
+    InterpolatedTruth.Builder builder =
+        new InterpolatedTruth.Builder(1, Space.reals(1).and(Space.angles(1)), 0, 2);
+    builder.add(0, true, -3, 3);
+    builder.add(1, true, 3, -3);
+    Truth truth = builder.build().orElseThrow();
+    double arc = 2 * Math.PI - 6;
+    assertTrue(truth.at(0.25, values));
+    assertArrayEquals(new double[] {-1.5, 3 + arc / 4}, values, 1e-15); // roundings of 3, as below
+    assertTrue(truth.at(0.75, values));
+    assertArrayEquals(new double[] {1.5, -3 - arc / 4}, values, 1e-15);
+    assertTrue(truth.at(1, values));
+    assertArrayEquals(new double[] {3, -3}, values, 1e-15);
   }
 
   @Test

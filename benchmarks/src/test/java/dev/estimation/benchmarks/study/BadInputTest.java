@@ -1,18 +1,14 @@
 package dev.estimation.benchmarks.study;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
-import static org.junit.jupiter.api.Assertions.assertFalse;
-import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.Arrays;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
-import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 
 /** Whatever is wrong from outside is told in one line, with exit code 2 and nothing written. */
@@ -22,13 +18,19 @@ class BadInputTest {
 
   private Path vessel;
   private Path uwb;
+  private Path robot;
+  private Path gnss;
   private Path out;
+  private Refusals refusals;
 
   @BeforeEach
   void makeLogs() throws IOException {
     vessel = SyntheticLog.vessel(folder.resolve("harbour"));
     uwb = SyntheticLog.uwb(folder.resolve("yard"));
+    robot = SyntheticLog.robot(folder.resolve("hall"));
+    gnss = SyntheticLog.gnss(folder.resolve("mast"));
     out = folder.resolve("out");
+    refusals = new Refusals(out);
   }
 
   @ParameterizedTest
@@ -42,10 +44,16 @@ class BadInputTest {
         "replay --case ship",
         "replay --case vessel",
         "replay --case uwb",
+        "replay --case robot",
+        "replay --case gnss",
         "replay --variant near",
         "replay --method spline",
         "replay --method hermite:1",
         "replay --method unscented:1,2,-3",
+        "replay --method random:5",
+        "replay --method random:5,1",
+        "replay --method linear-iterated:damped",
+        "replay --smooth=twice",
         "replay --lag 1",
         "replay --case demo --near-start 1,2",
         "replay --log somewhere"
@@ -70,7 +78,10 @@ class BadInputTest {
   void namesWhatWasWrongAndWhatWouldDo() {
     assertRefused(replay("vessel", vessel, "--variant", "near"), "near", "target1-cv");
     assertRefused(replay("uwb", uwb, "--variant", "target1-cv"), "target1-cv", "offset");
-    assertRefused(replay("ship", vessel), "ship", "vessel, uwb, demo");
+    assertRefused(replay("ship", vessel), "ship", "vessel, uwb, robot, gnss, demo");
+    assertRefused(replay("robot", robot, "--variant", "far"), "far", "near, wide");
+    assertRefused(replay("gnss", gnss, "--variant", "near"), "near", "far");
+    assertRefused(replay("robot", robot, "--method", "random:4,1"), "random:4,1", "near");
     assertRefused(replay("uwb", uwb, "--lag", "soon"), "--lag", "soon");
     assertRefused(replay("uwb", uwb, "--bias", "NaN"), "--bias", "NaN");
     assertRefused(replay("uwb", uwb, "--near-start", "1"), "--near-start", "X,Y");
@@ -80,62 +91,6 @@ class BadInputTest {
     assertRefused(replay("vessel", folder.resolve("none")), "none");
     assertRefused(replay("vessel", vessel.resolve("scans.csv")), "scans.csv");
     assertRefused(replay("vessel", ""), "log folder");
-  }
-
-  @ParameterizedTest
-  @CsvSource({
-    "scans.csv, '30,3.6', '30,x', 'line 4|time_s'",
-    "scans.csv, '30,3.6', '30,NaN', 'line 4|time_s|NaN'",
-    "scans.csv, '30,3.6', '10,3.6', 'line 4|scan_id|unique'",
-    "scans.csv, '3.6,radar,5,0', '3.6,radar,,0', 'line 4|ownship_north_m'",
-    "scans.csv, 'sensor', 'device', 'line 1|sensor'",
-    "detections.csv, '103,0.52', ',0.52', 'line 3|range_m'",
-    "detections.csv, ',,0.52', ',far,0.52', 'line 4|range_m'",
-    "detections.csv, '30,0,', '10,4,', 'line 3|detection_id|unique'",
-    "labels.csv, '31,2,1', '32,2,1', 'line 4|scan_id|32'",
-    "labels.csv, '31,2,1', '31,3,1', 'line 4|detection_id|3'",
-    "labels.csv, '31,2,1', '31,2,one', 'line 4|target_id|one'",
-    "groundtruth.csv, '3.5,1,99', '3.5,1,north', 'line 4|north_m|north'",
-    "groundtruth.csv, 'north_m', 'y', 'line 1|north_m'"
-  })
-  void tellsWhereAVesselLogIsBroken(String file, String text, String by, String parts)
-      throws IOException {
-    SyntheticLog.spoil(vessel, file, text, by);
-    assertRefused(replay("vessel", vessel), (file + "|" + parts).split("\\|"));
-  }
-
-  @ParameterizedTest
-  @CsvSource({
-    "anchors.csv, 'B,0', 'A,0', 'line 3|anchor_id|unique'",
-    "anchors.csv, '-8', 'Infinity', 'line 3|y_m|Infinity'",
-    "ranges.csv, '1.5,B', '1.5,C', 'line 4|anchor_id|C'",
-    "ranges.csv, '1.5,B,4.6', '1.5,B', 'line 4|cells'",
-    "ranges.csv, 'range_m', 'distance', 'line 1|range_m'",
-    "groundtruth.csv, '-2.4', '?', 'line 4|x_m|?'"
-  })
-  void tellsWhereAUwbLogIsBroken(String file, String text, String by, String parts)
-      throws IOException {
-    SyntheticLog.spoil(uwb, file, text, by);
-    assertRefused(replay("uwb", uwb), (file + "|" + parts).split("\\|"));
-  }
-
-  @ParameterizedTest
-  @ValueSource(strings = {"scans.csv", "detections.csv", "labels.csv"})
-  void wantsTheFilesOfAVesselLog(String file) throws IOException {
-    Files.writeString(vessel.resolve(file), "");
-    assertRefused(replay("vessel", vessel), file, "empty");
-    Files.delete(vessel.resolve(file));
-    assertRefused(replay("vessel", vessel), file, "not found");
-  }
-
-  @ParameterizedTest
-  @ValueSource(strings = {"anchors.csv", "ranges.csv"})
-  void wantsTheFilesOfAUwbLog(String file) throws IOException {
-    String header = Files.readAllLines(uwb.resolve(file)).get(0);
-    Files.writeString(uwb.resolve(file), header + "\n");
-    assertRefused(replay("uwb", uwb), file, "no rows");
-    Files.delete(uwb.resolve(file));
-    assertRefused(replay("uwb", uwb), file, "not found");
   }
 
   @Test
@@ -156,20 +111,10 @@ class BadInputTest {
   }
 
   private Object[] replay(String caseName, Object log, String... more) {
-    Object[] all = {"replay", "--case", caseName, "--log", log, "--out", out};
-    Object[] whole = Arrays.copyOf(all, all.length + more.length);
-    System.arraycopy(more, 0, whole, all.length, more.length);
-    return whole;
+    return refusals.replay(caseName, log, more);
   }
 
   private void assertRefused(Object[] arguments, String... parts) {
-    StudyRun run = StudyRun.of(arguments);
-    assertEquals(2, run.code(), run.err());
-    assertEquals(1, run.err().lines().count(), run.err());
-    assertTrue(run.err().startsWith("study: "), run.err());
-    for (String part : parts) {
-      assertTrue(run.err().contains(part), () -> "wanted '" + part + "' in " + run.err());
-    }
-    assertFalse(Files.isRegularFile(out.resolve("results.json")), "nothing may be written");
+    refusals.assertRefused(arguments, parts);
   }
 }

@@ -40,12 +40,36 @@ class MethodParserTest {
     Method method = MethodParser.parse(typed);
     assertEquals(typed, method.typed());
     MatchingWorkspace work =
-        method.matching().workspace(Space.reals(2), Space.reals(1), SUM_OF_SQUARES);
+        method.kind().matching().workspace(Space.reals(2), Space.reals(1), SUM_OF_SQUARES);
     Moments input = new Moments(Space.reals(2));
     input.set(Gaussian.independent(new double[2], new double[] {1, 1}));
     work.carry(input, new double[0], null);
     assertEquals(2, work.output().mean()[0], 1e-13); // rounding of sums of a few numbers
     assertEquals(variance, work.output().covariance().get(0, 0), 1e-12);
+  }
+
+  /** The mean of the sum of squares is 2 for standardised draws, whatever they are. */
+  @Test
+  void readsRandomDraws() {
+    Method method = MethodParser.parse("random:50,-7");
+    MatchingWorkspace work =
+        method.kind().matching().workspace(Space.reals(2), Space.reals(1), SUM_OF_SQUARES);
+    Moments input = new Moments(Space.reals(2));
+    input.set(Gaussian.independent(new double[2], new double[] {1, 1}));
+    work.carry(input, new double[0], null);
+    assertEquals(2, work.output().mean()[0], 1e-13);
+    assertEquals(51, work.evaluations(), "the draws and the mean");
+  }
+
+  @Test
+  void readsIteratedUpdates() {
+    Method full = MethodParser.parse("linear-iterated");
+    Method searched = MethodParser.parse("linear-iterated:line-search");
+    assertEquals("linear-iterated", full.typed());
+    assertEquals("linear-iterated:line-search", searched.typed());
+    assertTrue(full.kind().iteration().isPresent());
+    assertTrue(searched.kind().iteration().isPresent());
+    assertTrue(MethodParser.parse("linear").kind().iteration().isEmpty());
   }
 
   @Test
@@ -61,6 +85,9 @@ class MethodParserTest {
         "Linear",
         "linear:",
         "linear:1",
+        "linear-iterated:",
+        "linear-iterated:line",
+        "linear-iterated:line-search,line-search",
         "cubature:3",
         "unscented",
         "unscented:1,2",
@@ -80,6 +107,13 @@ class MethodParserTest {
         "hermite:3.5",
         "hermite:101",
         "hermite:3,3",
+        "random",
+        "random:10",
+        "random:1,5",
+        "random:10,x",
+        "random:1e3,5",
+        "random:10,0.5",
+        "random:10,5,5",
         "spline"
       })
   void refusesTheRestInOneLine(String typed) {

@@ -122,6 +122,22 @@ class ReplayCommandTest {
   }
 
   @Test
+  void headingsHaveColumnsWhereTruthTellsThem() throws IOException {
+    Path log = SyntheticLog.robot(folder.resolve("hall"));
+    StudyRun robot = StudyRun.of("replay", "--case", "robot", "--log", log, "--out", folder);
+    assertEquals(0, robot.code(), robot.err());
+    assertTrue(robot.out().contains("error (rad)"), robot.out());
+    assertTrue(robot.out().contains("of the position and heading, 3 degrees"), robot.out());
+    JsonNode runs = StudyRun.results(folder).get("runs");
+    assertEquals("hall", runs.at("/0/label").asText());
+    assertEquals("hall-wide-start", runs.at("/6/label").asText());
+    assertTrue(runs.at("/0/scores/heading/rmse").isDouble());
+    StudyRun demo = StudyRun.of("replay", "--out", folder, "--method", "linear");
+    assertFalse(demo.out().contains("error (rad)"), demo.out());
+    assertFalse(StudyRun.results(folder).at("/runs/0/scores").has("heading"));
+  }
+
+  @Test
   void anEarlierFileIsReplacedAndNothingElseIsLeft() throws IOException {
     Path out = Files.createDirectory(folder.resolve("out"));
     Files.writeString(out.resolve("results.json"), "old");

@@ -3,6 +3,8 @@ package dev.estimation.benchmarks.study;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
 
 /** Small made-up logs in the layout of the recorded ones, to be spoilt by tests. */
 final class SyntheticLog {
@@ -59,6 +61,65 @@ final class SyntheticLog {
         "2.0,A,4.6");
     write(folder, "groundtruth.csv", "time_s,x_m,y_m", "0.5,-2.5,-4", "1.0,-2.5,-4", "1.5,-2.4,-4");
     return folder;
+  }
+
+  /** Six steps, the last one by a sighting; the second landmark is never seen. */
+  static Path robot(Path folder) throws IOException {
+    Files.createDirectories(folder);
+    write(
+        folder,
+        "odometry.csv",
+        "time_s,forward_velocity_m_per_s,angular_velocity_rad_per_s",
+        "1.0,0.2,0.1",
+        "1.5,0.2,0.1",
+        "2.0,0.3,0.0");
+    write(folder, "landmarks.csv", "landmark_id,x_m,y_m", "L1,4,0", "L2,0,4");
+    write(
+        folder,
+        "measurements.csv",
+        "time_s,landmark_id,range_m,bearing_rad",
+        "0.5,L1,9,0",
+        "1.5,L1,3.9,-0.05",
+        "1.75,L1,3.85,-0.07",
+        "1.8,L1,3.8,-0.07",
+        "2.2,L1,3.7,-0.1",
+        "2.4,L1,1,1");
+    write(
+        folder,
+        "groundtruth.csv",
+        "time_s,x_m,y_m,heading_rad",
+        "0.9,0,0,0",
+        "1.2,0.04,0,0.02",
+        "1.5,0.1,0,0.05",
+        "1.8,0.16,0.01,0.08",
+        "2.3,0.3,0.02,0.1");
+    return folder;
+  }
+
+  /** Four epochs of 5, 4, 6 and 5 satellites around the receiver at (6 371 000, 0, 0). */
+  static Path gnss(Path folder) throws IOException {
+    Files.createDirectories(folder);
+    int[] satellites = {5, 4, 6, 5};
+    List<String> lines = new ArrayList<>();
+    lines.add("time_s,satellite_id,pseudorange_l1_m,sat_x_m,sat_y_m,sat_z_m,sat_clock_m,"
+        + "ionosphere_model_m,troposphere_model_m,elevation_rad");
+    for (int epoch = 0; epoch < satellites.length; epoch++) {
+      for (int i = 0; i < satellites[epoch]; i++) {
+        lines.add(pseudorange(30 * epoch, i, 0.4 + 0.2 * i));
+      }
+    }
+    write(folder, "pseudoranges.csv", lines.toArray(new String[0]));
+    write(folder, "truth.csv", "x_m,y_m,z_m", "6371000,0,0");
+    return folder;
+  }
+
+  /** Exact, with a receiver clock of 50 m, for a satellite 22 000 km away. */
+  private static String pseudorange(int time, int satellite, double elevation) {
+    double up = 22e6 * Math.sin(elevation);
+    double along = 22e6 * Math.cos(elevation);
+    double azimuth = 1.3 * satellite;
+    return time + ",S" + satellite + "," + (22e6 + 50 - 1000 + 3 + 2) + "," + (6371e3 + up) + ","
+        + along * Math.cos(azimuth) + "," + along * Math.sin(azimuth) + ",1000,3,2," + elevation;
   }
 
   static void write(Path folder, String name, String... lines) throws IOException {

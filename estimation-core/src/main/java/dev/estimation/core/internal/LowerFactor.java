@@ -2,6 +2,7 @@ package dev.estimation.core.internal;
 
 import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.decomposition.TriangularSolver_DDRM;
 
 /**
  * Lower Cholesky factors of covariance matrices. An object owns its factor and remembers where the
@@ -13,10 +14,15 @@ import org.ejml.data.DMatrixRMaj;
 public final class LowerFactor {
   private static final double EPSILON = 0x1p-52;
 
+  /** Pivots above this fraction of their diagonal entry need no closer look. */
+  private static final double NEARLY_ZERO = 1e-3;
+
   private final int size;
   private final int[] order;
   private final DMatrixRMaj columns;
+  private final double[] inverse;
   private final double[] growth;
+  private int growthKnown;
   private int failedPivot = -1;
   private double failedValue;
 
@@ -40,6 +46,7 @@ public final class LowerFactor {
     this.size = order.length;
     this.order = order.clone();
     this.columns = new DMatrixRMaj(size, columnCount);
+    this.inverse = new double[columnCount];
     this.growth = new double[columnCount];
   }
 
@@ -76,52 +83,84 @@ public final class LowerFactor {
     return factor(matrix, false);
   }
 
+  /** Row by row: the entries left of the diagonal, then the pivot. */
   private boolean factor(DMatrixRMaj matrix, boolean definite) {
     double[] p = matrix.data;
     double[] b = columns.data;
     int n = size;
     int k = columns.numCols;
-    for (int c = 0; c < k; c++) {
-      int row = order[c];
-      double variance = p[row * n + row];
-      double bound = definite ? variance : bound(p, row, c);
-      double threshold = n * EPSILON * bound;
-      double pivot = variance - dot(b, row * k, row * k, c);
-      if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE && bound <= Double.MAX_VALUE)
-          || (definite && !(pivot > threshold))) {
-        return fail(c, pivot);
+    growthKnown = 0;
+    for (int q = 0; q < n; q++) {
+      int row = order[q];
+      int known = Math.min(q, k);
+      for (int c = 0; c < known; c++) {
+        double rest = p[row * n + order[c]] - dot(b, row * k, order[c] * k, c);
+        if (inverse[c] == 0 && !vanishes(rest, p, row, c)) {
+          return fail(c, 0);
+        }
+        b[row * k + c] = rest * inverse[c];
       }
-      for (int q = 0; q < c; q++) {
-        b[order[q] * k + c] = 0;
-      }
-      for (int q = c + 1; q < n; q++) {
-        int r = order[q];
-        b[r * k + c] = p[r * n + row] - dot(b, r * k, row * k, c);
-      }
-      double scale;
-      if (pivot <= threshold && columnVanishes(p, c)) {
-        scale = 0;
-      } else if (pivot > 0) {
-        scale = 1 / Math.sqrt(pivot);
-      } else {
-        return fail(c, pivot);
-      }
-      growth[c] = bound * scale * scale;
-      b[row * k + c] = pivot * scale;
-      for (int q = c + 1; q < n; q++) {
-        b[order[q] * k + c] *= scale;
+      if (q < k) {
+        double pivot = p[row * (n + 1)] - dot(b, row * k, row * k, q);
+        if (!setPivot(pivot, p, q, definite)) {
+          return fail(q, pivot);
+        }
       }
     }
     failedPivot = -1;
     return true;
   }
 
+  /** Sets the diagonal entry and zeros right of it; false if the pivot is not allowed. */
+  private boolean setPivot(double pivot, double[] p, int q, boolean definite) {
+    int row = order[q];
+    int k = columns.numCols;
+    double variance = p[row * (size + 1)];
+    double root = 0;
+    if (pivot > NEARLY_ZERO * variance && pivot <= Double.MAX_VALUE) {
+      root = Math.sqrt(pivot);
+    } else if (definite) {
+      if (!(pivot > size * EPSILON * variance && pivot <= Double.MAX_VALUE)) {
+        return false;
+      }
+      root = Math.sqrt(pivot);
+    } else {
+      double bound = bound(p, row, q);
+      double threshold = size * EPSILON * bound;
+      if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE && bound <= Double.MAX_VALUE)) {
+        return false;
+      }
+      root = pivot > threshold ? Math.sqrt(pivot) : 0;
+    }
+    double[] b = columns.data;
+    b[row * k + q] = root;
+    inverse[q] = root == 0 ? 0 : 1 / root;
+    for (int c = q + 1; c < k; c++) {
+      b[row * k + c] = 0;
+    }
+    return true;
+  }
+
+  private boolean vanishes(double rest, double[] p, int row, int c) {
+    double unit = size * EPSILON * Math.sqrt(bound(p, order[c], c));
+    return Math.abs(rest) <= unit * Math.sqrt(bound(p, row, c));
+  }
+
   /**
    * The rounding of a pivot is about eps times this: its diagonal entry, and the rounding of earlier
    * pivots in the measure in which their columns carry it on. With the diagonal entry alone, exact
-   * constraints such as x1 = x0 + x2 would be refused now and then.
+   * constraints such as x1 = x0 + x2 would be refused now and then. Asked for small pivots only.
    */
   private double bound(double[] p, int row, int c) {
+    for (; growthKnown < c; growthKnown++) {
+      int earlier = order[growthKnown];
+      double scale = inverse[growthKnown];
+      growth[growthKnown] = sum(p, earlier, growthKnown) * scale * scale;
+    }
+    return sum(p, row, c);
+  }
+
+  private double sum(double[] p, int row, int c) {
     double[] b = columns.data;
     int k = columns.numCols;
     double sum = p[row * (size + 1)];
@@ -129,18 +168,6 @@ public final class LowerFactor {
       sum += b[row * k + q] * b[row * k + q] * growth[q];
     }
     return sum;
-  }
-
-  private boolean columnVanishes(double[] p, int c) {
-    double unit = size * EPSILON * Math.sqrt(bound(p, order[c], c));
-    for (int q = c + 1; q < size; q++) {
-      int r = order[q];
-      double residual = columns.data[r * columns.numCols + c];
-      if (!(Math.abs(residual) <= unit * Math.sqrt(bound(p, r, c)))) {
-        return false;
-      }
-    }
-    return true;
   }
 
   private boolean fail(int pivot, double value) {
@@ -182,6 +209,7 @@ public final class LowerFactor {
    */
   public void set(LowerFactor other) {
     System.arraycopy(other.columns.data, 0, columns.data, 0, columns.getNumElements());
+    System.arraycopy(other.inverse, 0, inverse, 0, inverse.length);
     failedPivot = other.failedPivot;
     failedValue = other.failedValue;
   }
@@ -192,14 +220,7 @@ public final class LowerFactor {
    * @param b n numbers, updated
    */
   public void solveLower(double[] b) {
-    double[] l = columns.data;
-    for (int r = 0; r < size; r++) {
-      double sum = b[r];
-      for (int c = 0; c < r; c++) {
-        sum -= l[r * size + c] * b[c];
-      }
-      b[r] = sum / l[r * size + r];
-    }
+    TriangularSolver_DDRM.solveL(columns.data, b, size);
   }
 
   /**
@@ -215,16 +236,14 @@ public final class LowerFactor {
       for (int c = 0; c < r; c++) {
         sum -= l[r * size + c] * b[start + c];
       }
-      double pivot = l[r * (size + 1)];
-      b[start + r] = pivot == 0 ? 0 : sum / pivot;
+      b[start + r] = sum * inverse[r];
     }
     for (int r = size - 1; r >= 0; r--) {
       double sum = b[start + r];
       for (int c = r + 1; c < size; c++) {
         sum -= l[c * size + r] * b[start + c];
       }
-      double pivot = l[r * (size + 1)];
-      b[start + r] = pivot == 0 ? 0 : sum / pivot;
+      b[start + r] = sum * inverse[r];
     }
   }
 

@@ -28,6 +28,15 @@ public final class SymmetricMatrix {
   }
 
   /**
+   * {@return whether every entry is finite}
+   *
+   * @param matrix checked
+   */
+  public static boolean allFinite(DMatrixRMaj matrix) {
+    return Checks.allFinite(matrix.data, matrix.numRows * matrix.numCols);
+  }
+
+  /**
    * {@return the row-major index of the first entry that is not finite, or -1}
    *
    * @param matrix square

@@ -6,12 +6,12 @@ import org.ejml.data.DMatrixRMaj;
 
 /**
  * The factor B of the part of an input covariance that a few active inputs carry: P[:, a] = B B[a, :]'
- * (regression of all inputs on the active ones). If all are active in natural order, B is a copy of the
- * lower factor of the moments, which may change before B is used.
+ * (regression of all inputs on the active ones). If the active ones are the first, in natural order, B
+ * is a copy of the first columns of the lower factor that the moments have anyway.
  */
 final class ActiveFactor {
   private final int[] active;
-  private final boolean whole;
+  private final boolean leading;
   private final LowerFactor ordered;
   private final DMatrixRMaj columns;
   private int failedPivot;
@@ -28,14 +28,14 @@ final class ActiveFactor {
       order[next++] = index;
       taken[index] = true;
     }
-    this.whole = natural && next == dimension;
+    this.leading = natural;
     for (int index = 0; index < dimension; index++) {
       if (!taken[index]) {
         order[next++] = index;
       }
     }
-    this.ordered = whole ? null : new LowerFactor(order, active.length);
-    this.columns = whole ? new DMatrixRMaj(dimension, dimension) : ordered.columns();
+    this.ordered = leading ? null : new LowerFactor(order, active.length);
+    this.columns = leading ? new DMatrixRMaj(dimension, active.length) : ordered.columns();
   }
 
   /** Makes B; false if the covariance is not positive semi-definite. */
@@ -45,8 +45,8 @@ final class ActiveFactor {
       failedValue = input.failedValue();
       return false;
     }
-    if (whole) {
-      columns.setTo(input.lowerFactor());
+    if (leading) {
+      copyColumns(input.lowerFactor());
       return true;
     }
     if (!ordered.factorSemidefinite(input.covariance())) {
@@ -55,6 +55,13 @@ final class ActiveFactor {
       return false;
     }
     return true;
+  }
+
+  private void copyColumns(DMatrixRMaj lower) {
+    int k = columns.numCols;
+    for (int row = 0; row < columns.numRows; row++) {
+      System.arraycopy(lower.data, row * lower.numCols, columns.data, row * k, k);
+    }
   }
 
   /** What was wrong when {@link #factor} was last false. */

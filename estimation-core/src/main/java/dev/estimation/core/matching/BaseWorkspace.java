@@ -64,7 +64,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
       return matched;
     }
     addNoise(covariance, additiveNoise);
-    return Checks.allFinite(mean) && SymmetricMatrix.firstNotFinite(covariance) < 0
+    return Checks.allFinite(mean) && SymmetricMatrix.allFinite(covariance)
         ? MatchingStatus.MATCHED
         : MatchingStatus.OUTPUT_NOT_FINITE;
   }
@@ -76,15 +76,21 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   }
 
   private boolean isFinite(double[] mean) {
+    if (Checks.allFinite(mean)) {
+      return true;
+    }
     failedIndex = Checks.firstNotFinite(mean);
-    failedValue = failedIndex < 0 ? 0 : mean[failedIndex];
-    return failedIndex < 0;
+    failedValue = mean[failedIndex];
+    return false;
   }
 
   private boolean isFinite(DMatrixRMaj noise) {
+    if (SymmetricMatrix.allFinite(noise)) {
+      return true;
+    }
     failedIndex = SymmetricMatrix.firstNotFinite(noise);
-    failedValue = failedIndex < 0 ? 0 : noise.data[failedIndex];
-    return failedIndex < 0;
+    failedValue = noise.data[failedIndex];
+    return false;
   }
 
   /**

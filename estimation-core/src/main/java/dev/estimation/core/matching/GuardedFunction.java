@@ -37,12 +37,11 @@ final class GuardedFunction {
     Arrays.fill(output, UNFILLED);
     function.evaluate(input, given, output);
     evaluations++;
-    int bad = Checks.firstNotFinite(output);
-    if (bad < 0) {
+    if (Checks.allFinite(output)) {
       return true;
     }
-    failedComponent = bad;
-    failedValue = output[bad];
+    failedComponent = Checks.firstNotFinite(output);
+    failedValue = output[failedComponent];
     size = output.length;
     return false;
   }

@@ -13,6 +13,7 @@ final class LinearWorkspace extends BaseWorkspace {
   private final Jacobian jacobian;
   private final double[] derivatives;
   private final double[] zero;
+  private final double[] ones;
   private final int differenceEvaluations;
 
   LinearWorkspace(Space input, Space output, VectorFunction function, double[] inputScales) {
@@ -22,6 +23,8 @@ final class LinearWorkspace extends BaseWorkspace {
     this.differenceEvaluations = analytic != null ? 0 : 2 * active.count();
     this.derivatives = new double[output.dimension() * input.dimension()];
     this.zero = new double[output.dimension()];
+    this.ones = new double[active.count()];
+    Arrays.fill(ones, 1);
   }
 
   private static Jacobian differences(
@@ -44,25 +47,29 @@ final class LinearWorkspace extends BaseWorkspace {
       return MatchingStatus.JACOBIAN_NOT_FINITE;
     }
     fillCross();
-    Products.fillInnerProduct(cross.data, active.count(), outputSpace.dimension(), covariance);
+    Products.fillInnerProduct(
+        cross.data, ones, active.count(), outputSpace.dimension(), covariance);
     outputSpace.displace(centre, zero, outputMean); // brings angles into their range
     return MatchingStatus.MATCHED;
   }
 
-  /** W = (G B)', over active inputs. */
+  /** W = (G B)', over active inputs; Jacobians have many zeros, B is lower triangular there. */
   private void fillCross() {
     double[] factor = active.columns().data;
+    double[] w = cross.data;
     int k = active.count();
     int n = inputSpace.dimension();
     int m = outputSpace.dimension();
-    for (int c = 0; c < k; c++) {
+    Arrays.fill(w, 0);
+    for (int a = 0; a < k; a++) {
+      int row = active.input(a);
       for (int r = 0; r < m; r++) {
-        double sum = 0;
-        for (int a = 0; a < k; a++) {
-          int row = active.input(a);
-          sum += derivatives[r * n + row] * factor[row * k + c];
+        double derivative = derivatives[r * n + row];
+        if (derivative != 0) {
+          for (int c = 0; c <= a; c++) {
+            w[c * m + r] += derivative * factor[row * k + c];
+          }
         }
-        cross.data[c * m + r] = sum;
       }
     }
   }

@@ -9,76 +9,101 @@ import java.util.Arrays;
 /** Carries moments by points; see {@link PointMatching} for the formulas. */
 class PointWorkspace extends BaseWorkspace {
   final UnitPoints points;
+  final double[] shift;
+
+  /** The deviations d_i, one row a point. */
+  final double[] deviations;
+
+  private final double[] weights;
   private final double[] displacement;
   private final double[] point;
   private final double[] image;
-  final double[] deviation;
-  final double[] shift;
+  private final double[] deviation;
 
   PointWorkspace(Space input, Space output, VectorFunction function, UnitPoints points) {
     super(input, output, function);
     this.points = points;
+    this.weights = new double[points.size()];
+    Arrays.setAll(weights, points::weight);
     this.displacement = new double[input.dimension()];
     this.point = new double[input.storage()];
     this.image = new double[output.storage()];
     this.deviation = new double[output.dimension()];
+    this.deviations = new double[points.size() * output.dimension()];
     this.shift = new double[output.dimension()];
   }
 
   @Override
   MatchingStatus match(double[] mean, double[] given, double[] outputMean, double[] covariance) {
-    Arrays.fill(shift, 0);
-    Arrays.fill(covariance, 0);
-    Arrays.fill(cross.data, 0);
-    for (int i = 0; i < points.size(); i++) {
+    int m = shift.length;
+    for (int i = 0; i < weights.length; i++) {
       place(i, mean);
       if (!function.evaluate(point, given, image)) {
         return MatchingStatus.FUNCTION_NOT_FINITE;
       }
       outputSpace.difference(image, centre, deviation);
-      addDeviation(points.weight(i), covariance);
-      addCross(i);
-      keep(i);
+      System.arraycopy(deviation, 0, deviations, i * m, m);
     }
+    fillShift();
+    fillCross();
+    Products.fillInnerProduct(deviations, weights, weights.length, m, covariance);
     double centreFactor = points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
     Products.addSquare(centreFactor, shift, covariance);
     outputSpace.displace(centre, shift, outputMean);
     return MatchingStatus.MATCHED;
   }
 
-  /** For those who need every deviation once more. */
-  void keep(int i) {}
-
   /** Sets {@link #point} to m + L xi_i. */
   private void place(int i, double[] mean) {
-    double[] factor = active.columns().data;
-    int columns = active.count();
-    for (int a = 0; a < columns; a++) {
-      int row = active.input(a);
-      double sum = 0;
-      for (int entry = points.start(i); entry < points.start(i + 1); entry++) {
-        sum += factor[row * columns + points.axis(entry)] * points.coordinate(entry);
-      }
-      displacement[row] = sum;
+    int first = points.start(i);
+    int end = points.start(i + 1);
+    addColumn(first, true);
+    for (int entry = first + 1; entry < end; entry++) {
+      addColumn(entry, false);
     }
     inputSpace.displace(mean, displacement, point);
   }
 
-  private void addDeviation(double weight, double[] covariance) {
-    for (int r = 0; r < deviation.length; r++) {
-      shift[r] += weight * deviation[r];
+  /** Adds a column of L times a coordinate to the displacement, or starts it. */
+  private void addColumn(int entry, boolean start) {
+    double[] factor = active.columns().data;
+    double[] target = displacement;
+    double coordinate = points.coordinate(entry);
+    int columns = active.count();
+    int axis = points.axis(entry);
+    for (int a = 0; a < columns; a++) {
+      int row = active.input(a);
+      double moved = factor[row * columns + axis] * coordinate;
+      target[row] = start ? moved : target[row] + moved;
     }
-    Products.addSquare(weight, deviation, covariance);
   }
 
-  private void addCross(int i) {
-    int m = deviation.length;
+  /** delta = sum w_i d_i. */
+  private void fillShift() {
+    int m = shift.length;
+    Arrays.fill(shift, 0);
+    for (int i = 0, at = 0; i < weights.length; i++) {
+      double weight = weights[i];
+      for (int r = 0; r < m; r++, at++) {
+        shift[r] += weight * deviations[at];
+      }
+    }
+  }
+
+  /** W = sum w_i xi_i d_i'. */
+  private void fillCross() {
+    int m = shift.length;
     double[] w = cross.data;
-    for (int entry = points.start(i); entry < points.start(i + 1); entry++) {
-      double factor = points.weight(i) * points.coordinate(entry);
-      int row = points.axis(entry) * m;
-      for (int c = 0; c < m; c++) {
-        w[row + c] += factor * deviation[c];
+    Arrays.fill(w, 0);
+    for (int i = 0; i < weights.length; i++) {
+      int end = points.start(i + 1);
+      for (int entry = points.start(i); entry < end; entry++) {
+        double factor = weights[i] * points.coordinate(entry);
+        int row = points.axis(entry) * m;
+        int at = i * m;
+        for (int c = 0; c < m; c++) {
+          w[row + c] += factor * deviations[at + c];
+        }
       }
     }
   }

@@ -4,25 +4,18 @@ import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 
-/** Carries moments by independent draws, about their sample means, and keeps the deviations. */
+/** Carries moments by independent draws, about their sample means. */
 final class SampleWorkspace extends PointWorkspace implements SampledWorkspace {
-  private final double[] deviations;
   private final double[] pointMean;
 
   SampleWorkspace(Space input, Space output, VectorFunction function, UnitPoints points) {
     super(input, output, function, points);
-    this.deviations = new double[points.size() * output.dimension()];
     this.pointMean = new double[points.dimension()];
     for (int i = 0; i < points.size(); i++) {
       for (int entry = points.start(i); entry < points.start(i + 1); entry++) {
         pointMean[points.axis(entry)] += points.weight(i) * points.coordinate(entry);
       }
     }
-  }
-
-  @Override
-  void keep(int i) {
-    System.arraycopy(deviation, 0, deviations, i * deviation.length, deviation.length);
   }
 
   /** From sums over N about the sample mean to division by N - 1, in P_zz and in W. */

@@ -11,9 +11,15 @@ import java.util.Arrays;
  */
 public final class FlatSpace implements Space {
   private final boolean[] angle;
+  private final boolean anyAngle;
 
   private FlatSpace(boolean[] angle) {
     this.angle = angle;
+    boolean any = false;
+    for (boolean one : angle) {
+      any |= one;
+    }
+    this.anyAngle = any;
   }
 
   static FlatSpace reals(int count) {
@@ -66,16 +72,28 @@ public final class FlatSpace implements Space {
   @Override
   public void difference(double[] a, double[] b, double[] tangent) {
     for (int i = 0; i < angle.length; i++) {
-      double difference = a[i] - b[i];
-      tangent[i] = angle[i] ? Angle.wrap(difference) : difference;
+      tangent[i] = a[i] - b[i];
+    }
+    if (anyAngle) {
+      wrapAngles(tangent);
     }
   }
 
   @Override
   public void displace(double[] point, double[] tangent, double[] result) {
     for (int i = 0; i < angle.length; i++) {
-      double moved = point[i] + tangent[i];
-      result[i] = angle[i] ? Angle.wrap(moved) : moved;
+      result[i] = point[i] + tangent[i];
+    }
+    if (anyAngle) {
+      wrapAngles(result);
+    }
+  }
+
+  private void wrapAngles(double[] values) {
+    for (int i = 0; i < angle.length; i++) {
+      if (angle[i]) {
+        values[i] = Angle.wrap(values[i]);
+      }
     }
   }
 

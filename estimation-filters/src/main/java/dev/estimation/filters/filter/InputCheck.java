@@ -9,10 +9,10 @@ final class InputCheck {
   private double value;
 
   boolean isFinite(String what, double[] values) {
-    int bad = Checks.firstNotFinite(values);
-    if (bad < 0) {
+    if (Checks.allFinite(values)) {
       return true;
     }
+    int bad = Checks.firstNotFinite(values);
     name = what;
     index = bad;
     value = values[bad];

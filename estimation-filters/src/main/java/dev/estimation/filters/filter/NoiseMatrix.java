@@ -11,6 +11,8 @@ final class NoiseMatrix {
   private final DMatrixRMaj matrix;
   private final LowerFactor factor;
   private final boolean definite;
+  private final double[] accepted;
+  private boolean anyAccepted;
 
   /**
    * Room for a noise covariance.
@@ -22,6 +24,7 @@ final class NoiseMatrix {
     this.matrix = new DMatrixRMaj(dimension, dimension);
     this.factor = new LowerFactor(dimension);
     this.definite = definite;
+    this.accepted = new double[dimension * dimension];
   }
 
   /** The array for the model to fill, all zeros. */
@@ -30,7 +33,19 @@ final class NoiseMatrix {
     return matrix.data;
   }
 
+  /** Checks what was filled; a matrix equal to the last one accepted needs no second check. */
   boolean isValid() {
+    if (anyAccepted && Arrays.equals(matrix.data, accepted)) {
+      return true;
+    }
+    anyAccepted = isCovariance();
+    if (anyAccepted) {
+      System.arraycopy(matrix.data, 0, accepted, 0, accepted.length);
+    }
+    return anyAccepted;
+  }
+
+  private boolean isCovariance() {
     return SymmetricMatrix.firstNotFinite(matrix) < 0
         && firstBadVariance() < 0
         && SymmetricMatrix.firstAsymmetric(matrix) < 0

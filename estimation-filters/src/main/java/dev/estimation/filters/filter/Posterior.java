@@ -7,7 +7,6 @@ import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
-import org.ejml.data.DMatrixRMaj;
 
 /**
  * The estimate given a measurement. With S = L L' the covariance of the innovation nu and C = B W the
@@ -16,14 +15,17 @@ import org.ejml.data.DMatrixRMaj;
 final class Posterior {
   private final Space space;
   private final Moments moments;
-  private final DMatrixRMaj gainFactor;
+  private final double[] gainRows;
+  private final double[] negatives;
   private final double[] column;
   private final double[] correction;
 
   Posterior(Space state, int measurementDimension) {
     this.space = state;
     this.moments = new Moments(state);
-    this.gainFactor = new DMatrixRMaj(state.dimension(), measurementDimension);
+    this.gainRows = new double[measurementDimension * state.dimension()];
+    this.negatives = new double[measurementDimension];
+    Arrays.fill(negatives, -1);
     this.column = new double[measurementDimension];
     this.correction = new double[state.dimension()];
   }
@@ -35,15 +37,13 @@ final class Posterior {
   /** Sets the covariance, and the mean by the innovation. */
   void condition(Moments prior, MatchingWorkspace matching, Innovation innovation) {
     fillCovariance(prior, matching, innovation);
-    double[] g = gainFactor.data;
     double[] whitened = innovation.whitened();
-    int m = whitened.length;
-    for (int r = 0; r < correction.length; r++) {
-      double shift = 0;
-      for (int j = 0; j < m; j++) {
-        shift += g[r * m + j] * whitened[j];
+    int d = correction.length;
+    Arrays.fill(correction, 0);
+    for (int j = 0; j < whitened.length; j++) {
+      for (int r = 0; r < d; r++) {
+        correction[r] += gainRows[j * d + r] * whitened[j];
       }
-      correction[r] = shift;
     }
     space.displace(prior.mean(), correction, moments.changeMean());
   }
@@ -54,29 +54,36 @@ final class Posterior {
     System.arraycopy(mean, 0, moments.changeMean(), 0, mean.length);
   }
 
+  /** P - G G', with the rows of G' at hand. */
   private void fillCovariance(Moments prior, MatchingWorkspace matching, Innovation innovation) {
-    fillGainFactor(matching, innovation);
-    double[] lower = moments.changeCovariance().data;
+    fillGainRows(matching, innovation);
     int d = correction.length;
-    Products.fillDifference(prior.covariance().data, gainFactor.data, d, column.length, lower);
+    double[] p = prior.covariance().data;
+    double[] lower = moments.changeCovariance().data;
+    Products.fillInnerProduct(gainRows, negatives, negatives.length, d, lower);
+    for (int r = 0; r < d; r++) {
+      for (int c = 0; c <= r; c++) {
+        lower[r * d + c] += p[r * d + c];
+      }
+    }
     SymmetricMatrix.mirrorLower(moments.covariance());
   }
 
-  /** G = B (L^-1 W')', formed row by row of W. */
-  private void fillGainFactor(MatchingWorkspace matching, Innovation innovation) {
+  /** G' = L^-1 W' B', m x d, a row of W at a time. */
+  private void fillGainRows(MatchingWorkspace matching, Innovation innovation) {
     double[] b = matching.inputFactor().data;
     double[] w = matching.unitCrossCovariance().data;
-    double[] g = gainFactor.data;
     int k = matching.unitCrossCovariance().numRows;
     int m = column.length;
-    Arrays.fill(g, 0);
+    int d = correction.length;
+    Arrays.fill(gainRows, 0);
     for (int a = 0; a < k; a++) {
       System.arraycopy(w, a * m, column, 0, m);
       innovation.whiten(column);
-      for (int r = 0; r < correction.length; r++) {
-        double factor = b[r * k + a];
-        for (int j = 0; j < m; j++) {
-          g[r * m + j] += factor * column[j];
+      for (int j = 0; j < m; j++) {
+        double factor = column[j];
+        for (int r = 0; r < d; r++) {
+          gainRows[j * d + r] += factor * b[r * k + a];
         }
       }
     }
@@ -84,10 +91,14 @@ final class Posterior {
 
   /** Whether the result can be an estimate. */
   StepStatus check() {
-    if (!Checks.allFinite(moments.mean())
-        || SymmetricMatrix.firstNotFinite(moments.covariance()) >= 0) {
+    if (!Checks.allFinite(moments.mean())) {
       return StepStatus.RESULT_NOT_FINITE;
     }
-    return moments.factor() ? StepStatus.APPLIED : StepStatus.NOT_DEFINITE;
+    if (moments.factor()) {
+      return StepStatus.APPLIED;
+    }
+    return SymmetricMatrix.firstNotFinite(moments.covariance()) < 0
+        ? StepStatus.NOT_DEFINITE
+        : StepStatus.RESULT_NOT_FINITE;
   }
 }

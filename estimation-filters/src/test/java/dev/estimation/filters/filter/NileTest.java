@@ -15,11 +15,12 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /**
- * The local level model on the annual flow of the Nile, with every matching. 1e-12: the rounding of
- * 100 steps; the values are printed to 17 digits.
+ * The local level model on the annual flow of the Nile, with every matching. 4e-12: the first
+ * update takes a variance of 1e7 down to 15076, which multiplies its few roundings by 663; the values
+ * are printed to 17 digits.
  */
 class NileTest {
-  private static final double TOLERANCE = 1e-12;
+  private static final double TOLERANCE = 4e-12;
 
   static List<Named<MomentMatching>> matchings() {
     return Matchings.all();

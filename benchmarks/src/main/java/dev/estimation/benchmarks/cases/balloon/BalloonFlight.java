@@ -8,6 +8,7 @@ import dev.estimation.benchmarks.replay.Step;
 import dev.estimation.core.gaussian.Gaussian;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalDouble;
 import java.util.Random;
 
 /**
@@ -58,7 +59,7 @@ final class BalloonFlight {
       steps.add(new Step(time, List.of(measure())));
     }
     Gaussian start = Gaussian.independent(START_MEAN, START_DEVIATIONS);
-    return new Scenario(motion, GATE, start, steps, truth.build());
+    return new Scenario(motion, OptionalDouble.of(GATE), start, steps, truth.build());
   }
 
   /** Moves by the model and adds noise of its process covariance, axis by axis. */

@@ -7,6 +7,7 @@ import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.core.gaussian.Gaussian;
 import java.util.List;
+import java.util.OptionalDouble;
 
 /**
  * A tag placed by ranges, from three starts: {@code near} the true place, {@code offset} from it,
@@ -56,7 +57,7 @@ public final class UwbCase implements ReplayCase {
     double[] deviations = {positionDeviation, positionDeviation, 1, 1};
     Scenario scenario = new Scenario(
         new ConstantVelocity(ACCELERATION_DENSITY, ACCELERATION_DENSITY),
-        GATE,
+        OptionalDouble.of(GATE),
         Gaussian.independent(mean, deviations),
         log.steps(),
         log.truth());

@@ -1,5 +1,6 @@
 package dev.estimation.benchmarks.cases.vessel;
 
+import dev.estimation.benchmarks.cases.motion.TurnArc;
 import dev.estimation.benchmarks.cases.motion.WhiteAcceleration;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;

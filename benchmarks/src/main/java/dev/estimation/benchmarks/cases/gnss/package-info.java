@@ -1,0 +1,2 @@
+/** A receiver at rest, placed by pseudoranges to satellites. */
+package dev.estimation.benchmarks.cases.gnss;

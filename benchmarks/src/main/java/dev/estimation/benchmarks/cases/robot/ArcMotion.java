@@ -1,0 +1,89 @@
+package dev.estimation.benchmarks.cases.robot;
+
+import dev.estimation.benchmarks.cases.motion.TurnArc;
+import dev.estimation.core.space.FlatSpace;
+import dev.estimation.core.space.Space;
+import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
+
+/**
+ * A robot that holds its commanded speed and turn rate over each step, both disturbed by white
+ * noise, and so drives an arc. State: x, y (m), heading (rad). Control: speed (m/s), turn rate
+ * (rad/s). Noise is added to the two controls. With u half the angle turned, the chord is speed dt
+ * sin(u)/u long and points to heading + u. <i>Immutable.</i>
+ */
+final class ArcMotion implements DifferentiableNoiseDrivenMotion {
+  private static final FlatSpace SPACE = Space.reals(2).and(Space.angles(1));
+
+  private final double speedDensity;
+  private final double turnDensity;
+
+  /**
+   * The model.
+   *
+   * @param speedDensity spectral density of the noise of the speed (m^2/s)
+   * @param turnDensity spectral density of the noise of the turn rate (rad^2/s)
+   */
+  ArcMotion(double speedDensity, double turnDensity) {
+    this.speedDensity = speedDensity;
+    this.turnDensity = turnDensity;
+  }
+
+  @Override
+  public FlatSpace stateSpace() {
+    return SPACE;
+  }
+
+  @Override
+  public int controlDimension() {
+    return 2;
+  }
+
+  @Override
+  public int noiseDimension() {
+    return 2;
+  }
+
+  @Override
+  public void move(
+      double[] state, double[] noise, double[] control, double time, double dt, double[] next) {
+    double speed = control[0] + noise[0];
+    double u = (control[1] + noise[1]) * dt / 2;
+    double chord = speed * dt * TurnArc.along(u);
+    next[0] = state[0] + chord * Math.cos(state[2] + u);
+    next[1] = state[1] + chord * Math.sin(state[2] + u);
+    next[2] = state[2] + 2 * u;
+  }
+
+  @Override
+  public void moveJacobians(
+      double[] state,
+      double[] control,
+      double time,
+      double dt,
+      double[] byState,
+      double[] byNoise) {
+    double u = control[1] * dt / 2;
+    double cos = Math.cos(state[2] + u);
+    double sin = Math.sin(state[2] + u);
+    double along = TurnArc.along(u);
+    double alongRate = TurnArc.alongDerivative(u);
+    double chord = control[0] * dt * along;
+    double byTurn = control[0] * dt * dt / 2;
+    byState[0] = 1;
+    byState[2] = -chord * sin;
+    byState[4] = 1;
+    byState[5] = chord * cos;
+    byState[8] = 1;
+    byNoise[0] = dt * along * cos;
+    byNoise[1] = byTurn * (alongRate * cos - along * sin);
+    byNoise[2] = dt * along * sin;
+    byNoise[3] = byTurn * (alongRate * sin + along * cos);
+    byNoise[5] = dt;
+  }
+
+  @Override
+  public void noiseCovariance(double[] control, double time, double dt, double[] covariance) {
+    covariance[0] = speedDensity / dt;
+    covariance[3] = turnDensity / dt;
+  }
+}

@@ -4,9 +4,14 @@ import static dev.estimation.testing.Agreement.assertNames;
 import static dev.estimation.testing.Agreement.assertWithin;
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.matching.Linearisation;
 import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.core.space.Space;
+import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
 import dev.estimation.filters.testing.Bits;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
@@ -78,6 +83,36 @@ class NoiseDrivenTest {
         "LinearNoiseDriven");
   }
 
+  /**
+   * A motion that reads the second of three state components and the first of two noises: points in
+   * two dimensions give what points in all five give, where the spread does not depend on that.
+   */
+  @ParameterizedTest
+  @MethodSource("matchings")
+  void pointsAreDrawnOverActiveStatesAndNoises(MomentMatching matching) {
+    RandomGaussians random = new RandomGaussians(6);
+    Gaussian prior = random.gaussian(3);
+    Bent bent = new Bent(random.covariance(2));
+    FilterPlan plan = FilterPlan.of(bent, matching);
+    FilterWorkspace work = plan.workspace();
+    Estimate estimate = plan.start(0, prior);
+    assertEquals(StepStatus.APPLIED, work.predict(estimate, 1));
+    FilterPlan exact = FilterPlan.of(bent, Linearisation.firstOrder().overWholeInput());
+    if (work.jacobians() == 1) {
+      Estimate whole = exact.start(0, prior);
+      exact.workspace().predict(whole, 1);
+      for (int i = 0; i < 3; i++) {
+        // 1e-14: the same sums in another order.
+        assertWithin("variance", whole.covariance(i, i), estimate.covariance(i, i), 1e-14, 10);
+      }
+    }
+    // The product of two independent normal numbers x and n: mean 0 of n times x.
+    assertWithin("mean", 0, estimate.mean(0), 1e-12, 1);
+    boolean overActive = work.evaluations() <= 9;
+    boolean overAll = work.evaluations() == 11 || work.evaluations() == 243;
+    assertTrue(overActive || overAll, "evaluations " + work.evaluations());
+  }
+
   @Test
   void evaluationsCountStateAndNoise() {
     RandomGaussians random = new RandomGaussians(5);
@@ -86,5 +121,50 @@ class NoiseDrivenTest {
     FilterWorkspace work = plan.workspace();
     work.predict(plan.start(0, random.gaussian(3)), 1);
     assertEquals(2 * 5 + 1, work.evaluations());
+  }
+
+  /** Reads state 1 and noise 0. */
+  private record Bent(DMatrixRMaj q) implements DifferentiableNoiseDrivenMotion {
+    @Override
+    public Space stateSpace() {
+      return Space.reals(3);
+    }
+
+    @Override
+    public int noiseDimension() {
+      return 2;
+    }
+
+    @Override
+    public Structure structure() {
+      return Structure.UNKNOWN.withActiveInputs(1, 3);
+    }
+
+    @Override
+    public void move(
+        double[] state, double[] noise, double[] control, double time, double dt, double[] next) {
+      next[0] = state[1] * noise[0];
+      next[1] = state[1];
+      next[2] = state[1] + noise[0];
+    }
+
+    @Override
+    public void moveJacobians(
+        double[] state,
+        double[] control,
+        double time,
+        double dt,
+        double[] byState,
+        double[] byNoise) {
+      byState[4] = 1;
+      byState[7] = 1;
+      byNoise[0] = state[1];
+      byNoise[4] = 1;
+    }
+
+    @Override
+    public void noiseCovariance(double[] control, double time, double dt, double[] covariance) {
+      System.arraycopy(q.data, 0, covariance, 0, 4);
+    }
   }
 }

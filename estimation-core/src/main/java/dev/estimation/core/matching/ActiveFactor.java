@@ -77,6 +77,10 @@ final class ActiveFactor {
     return active.length;
   }
 
+  int[] inputs() {
+    return active.clone();
+  }
+
   /** The input of an active index. */
   int input(int index) {
     return active[index];

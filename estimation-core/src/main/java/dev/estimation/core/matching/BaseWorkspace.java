@@ -3,8 +3,10 @@ package dev.estimation.core.matching;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
+import dev.estimation.core.internal.Products;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.space.Space;
+import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 
 /** What all matchings share: checks, the factor of the input, the image of the centre, the results. */
@@ -19,6 +21,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   private final Moments output;
   private MatchingStatus status = MatchingStatus.MATCHED;
   private final double[] handed;
+  private final double[] minusOnes;
   private int failedIndex;
   private double failedValue;
 
@@ -32,6 +35,8 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     this.centre = new double[outputSpace.storage()];
     this.output = new Moments(outputSpace);
     this.handed = new double[inputSpace.storage()];
+    this.minusOnes = new double[active.count()];
+    Arrays.fill(minusOnes, -1);
   }
 
   @Override
@@ -63,6 +68,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     if (matched != MatchingStatus.MATCHED) {
       return matched;
     }
+    noteNoise(additiveNoise);
     addNoise(covariance, additiveNoise);
     return Checks.allFinite(mean) && SymmetricMatrix.allFinite(covariance)
         ? MatchingStatus.MATCHED
@@ -115,6 +121,9 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     }
   }
 
+  /** For those who need the noise once more. */
+  void noteNoise(DMatrixRMaj noise) {}
+
   private static void addNoise(DMatrixRMaj covariance, DMatrixRMaj noise) {
     if (noise != null) {
       int size = covariance.numRows * covariance.numRows;
@@ -138,6 +147,24 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   @Override
   public final DMatrixRMaj unitCrossCovariance() {
     return cross;
+  }
+
+  @Override
+  public final int[] activeInputs() {
+    return active.inputs();
+  }
+
+  @Override
+  public void unexplainedCovariance(DMatrixRMaj result) {
+    int m = outputSpace.dimension();
+    Products.fillInnerProduct(cross.data, minusOnes, active.count(), m, result.data);
+    double[] total = output.covariance().data;
+    for (int r = 0; r < m; r++) {
+      for (int c = 0; c <= r; c++) {
+        result.data[r * m + c] += total[r * m + c];
+      }
+    }
+    SymmetricMatrix.mirrorLower(result);
   }
 
   @Override

@@ -7,6 +7,7 @@ import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.Products;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
+import org.ejml.data.DMatrixRMaj;
 
 /** Carries moments by the Jacobian at the mean; see {@link Linearisation}. */
 final class LinearWorkspace extends BaseWorkspace {
@@ -14,6 +15,7 @@ final class LinearWorkspace extends BaseWorkspace {
   private final double[] derivatives;
   private final double[] zero;
   private final double[] ones;
+  private final DMatrixRMaj noise;
   private final int differenceEvaluations;
 
   LinearWorkspace(Space input, Space output, VectorFunction function, double[] inputScales) {
@@ -25,6 +27,7 @@ final class LinearWorkspace extends BaseWorkspace {
     this.zero = new double[output.dimension()];
     this.ones = new double[active.count()];
     Arrays.fill(ones, 1);
+    this.noise = new DMatrixRMaj(output.dimension(), output.dimension());
   }
 
   private static Jacobian differences(
@@ -72,6 +75,20 @@ final class LinearWorkspace extends BaseWorkspace {
         }
       }
     }
+  }
+
+  @Override
+  void noteNoise(DMatrixRMaj additive) {
+    if (additive == null) {
+      noise.zero();
+    } else {
+      noise.setTo(additive);
+    }
+  }
+
+  @Override
+  public void unexplainedCovariance(DMatrixRMaj result) {
+    result.setTo(noise);
   }
 
   @Override

@@ -39,6 +39,19 @@ public interface MatchingWorkspace {
   /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */
   DMatrixRMaj unitCrossCovariance();
 
+  /** {@return the inputs that the function reads, in the order of the columns of B; a copy} */
+  int[] activeInputs();
+
+  /**
+   * The covariance of what a regression on the input does not explain of the output, additive noise
+   * included: P_zz - W'W. Linearisation gives the noise itself, without a rounding. Not positive
+   * semi-definite only where negative weights have made it so; an update would then give an indefinite
+   * covariance.
+   *
+   * @param result filled, m x m
+   */
+  void unexplainedCovariance(DMatrixRMaj result);
+
   /** {@return the function evaluations of the last call, those for numerical derivatives included} */
   int evaluations();
 

@@ -9,22 +9,24 @@ import org.ejml.data.DMatrixRMaj;
 
 /**
  * The rounds of an {@link IteratedUpdate}, in unit coordinates s of the prior: x = m + B s. As H B =
- * W', a round is s_new = W S^-1 (z - h(x) + W' s), all taken at x. Confined to one thread.
+ * W', a round is the least squares of (z - h(x) + W' s) - W' s_new and s_new, all taken at x. Confined
+ * to one thread.
  */
 final class GaussNewton {
   private static final double SUFFICIENT_DECREASE = 1e-4;
   private static final double SHORTEST_STEP = 1e-10;
+  private static final double EPSILON = 0x1p-52;
 
-  /** A decrease of the cost below this fraction of it is lost in rounding. */
-  private static final double ROUNDING = 0x1p-48;
+  /** Steps below this, in prior standard deviations, that no longer shrink are rounding. */
+  private static final double ROUNDING_STEP = 1e-6;
 
   private final IteratedUpdate settings;
   private final MatchingWorkspace matching;
-  private final Innovation innovation;
   private final NoiseMatrix noise;
   private final Space state;
   private final Space measured;
   private final Moments iterate;
+  private final UnitLeastSquares squares;
   private final double[] unit;
   private final double[] step;
   private final double[] trial;
@@ -41,19 +43,18 @@ final class GaussNewton {
   GaussNewton(
       IteratedUpdate settings,
       MatchingWorkspace matching,
-      Innovation innovation,
       NoiseMatrix noise,
       Space state,
       Space measured) {
     this.settings = settings;
     this.matching = matching;
-    this.innovation = innovation;
     this.noise = noise;
     this.state = state;
     this.measured = measured;
     int k = matching.unitCrossCovariance().numRows;
     int m = measured.dimension();
     this.iterate = new Moments(state);
+    this.squares = new UnitLeastSquares(k, m);
     this.unit = new double[k];
     this.step = new double[k];
     this.trial = new double[k];
@@ -64,8 +65,8 @@ final class GaussNewton {
   }
 
   /**
-   * Iterates from the prior mean, at which {@code matching} and {@code innovation} must stand. On
-   * APPLIED both stand at the result, {@link #mean()}.
+   * Iterates from the prior mean, at which the matching must stand. On APPLIED it stands at the result,
+   * {@link #mean()}.
    */
   StepStatus run(Moments from, double[] nextGiven, double[] nextMeasurement) {
     prior = from;
@@ -76,35 +77,33 @@ final class GaussNewton {
     iterate.set(prior);
     Arrays.fill(unit, 0);
     measured.difference(measurement, matching.output().mean(), residual);
+    double previous = Double.POSITIVE_INFINITY;
     for (int round = 0; round < settings.maximumRounds(); round++) {
       fillStep();
-      boolean last = length(step) < settings.tolerance();
-      StepStatus moved = settings.searchesLine() && !last ? search() : go(1);
+      double length = length(step);
+      boolean settled =
+          length < settings.tolerance() || (length < ROUNDING_STEP && length >= previous);
+      StepStatus moved = settings.searchesLine() && !settled ? search() : go(1);
       if (moved != StepStatus.APPLIED) {
         return moved;
       }
       System.arraycopy(trial, 0, unit, 0, unit.length);
-      if (!innovation.factor(matching.output().covariance())) {
-        return StepStatus.NOT_DEFINITE;
-      }
-      if (last) {
+      if (settled) {
         return StepStatus.APPLIED;
       }
+      previous = length;
     }
     return StepStatus.NOT_CONVERGED;
   }
 
-  /** step = W S^-1 (residual + W' s) - s, by L^-1 on both sides. */
+  /** The step to the solution of the linearised problem. */
   private void fillStep() {
-    double[] w = matching.unitCrossCovariance().data;
-    int m = target.length;
-    System.arraycopy(residual, 0, target, 0, m);
+    System.arraycopy(residual, 0, target, 0, target.length);
     addProduct(unit, target);
-    innovation.whiten(target);
+    squares.reduce(matching.unitCrossCovariance(), noise.factor(), target);
+    squares.solve(step);
     for (int a = 0; a < unit.length; a++) {
-      System.arraycopy(w, a * m, column, 0, m);
-      innovation.whiten(column);
-      step[a] = dot(column, target) - unit[a];
+      step[a] -= unit[a];
     }
   }
 
@@ -165,7 +164,7 @@ final class GaussNewton {
   /** Halves the step until the cost falls as its slope promises. */
   private StepStatus search() {
     double before = cost(unit);
-    double allowed = before + ROUNDING * before;
+    double allowed = before + rounding(before);
     double slope = slope();
     StepStatus moved = StepStatus.NOT_CONVERGED;
     for (double length = 1; length > SHORTEST_STEP; length /= 2) {
@@ -183,6 +182,13 @@ final class GaussNewton {
     System.arraycopy(residual, 0, column, 0, column.length);
     noise.whiten(column);
     return 0.5 * (dot(s, s) + dot(column, column));
+  }
+
+  /** By how much rounding of the measurement alone can change the cost: |L^-1 r| eps |L^-1 z|. */
+  private double rounding(double cost) {
+    System.arraycopy(measurement, 0, column, 0, column.length);
+    noise.whiten(column);
+    return 4 * EPSILON * (cost + Math.sqrt(2 * cost) * Math.sqrt(dot(column, column)));
   }
 
   /** The slope of the cost along the step, where the residual changes by -W' step. */

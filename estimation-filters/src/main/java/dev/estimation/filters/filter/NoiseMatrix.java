@@ -68,6 +68,11 @@ final class NoiseMatrix {
     factor.solveLower(v);
   }
 
+  /** The lower factor, after {@link #isValid()} was true. */
+  LowerFactor factor() {
+    return factor;
+  }
+
   DMatrixRMaj matrix() {
     return matrix;
   }

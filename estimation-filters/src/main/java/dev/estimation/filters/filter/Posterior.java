@@ -2,103 +2,137 @@ package dev.estimation.filters.filter;
 
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
+import dev.estimation.core.internal.LowerFactor;
 import dev.estimation.core.internal.Products;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
+import org.ejml.data.DMatrixRMaj;
 
 /**
- * The estimate given a measurement. With S = L L' the covariance of the innovation nu and C = B W the
- * cross-covariance, G = C L^-T: mean + G L^-1 nu, P - G G'. Confined to one thread.
+ * The estimate given a measurement: mean m + D' z and covariance P - B B' + D'D, with D and z from {@link
+ * UnitLeastSquares}. P - B B' is what the inputs that are not active have of their own; the rows of active
+ * ones are zero and are not computed. In exact arithmetic the same as m + K nu, P - K S K'. Confined to
+ * one thread.
  */
 final class Posterior {
   private final Space space;
+  private final MatchingWorkspace matching;
   private final Moments moments;
-  private final double[] gainRows;
-  private final double[] negatives;
-  private final double[] column;
+  private final UnitLeastSquares squares;
+  private final LowerFactor unexplained;
+  private final DMatrixRMaj unexplainedCovariance;
+  private final boolean[] active;
+  private final double[] root;
+  private final double[] ones;
   private final double[] correction;
 
-  Posterior(Space state, int measurementDimension) {
+  Posterior(Space state, MatchingWorkspace matching) {
     this.space = state;
+    this.matching = matching;
+    int k = matching.unitCrossCovariance().numRows;
+    int m = matching.unitCrossCovariance().numCols;
+    int d = state.dimension();
     this.moments = new Moments(state);
-    this.gainRows = new double[measurementDimension * state.dimension()];
-    this.negatives = new double[measurementDimension];
-    Arrays.fill(negatives, -1);
-    this.column = new double[measurementDimension];
-    this.correction = new double[state.dimension()];
+    this.squares = new UnitLeastSquares(k, m);
+    this.unexplained = new LowerFactor(m);
+    this.unexplainedCovariance = new DMatrixRMaj(m, m);
+    this.active = new boolean[d];
+    for (int input : matching.activeInputs()) {
+      active[input] = true;
+    }
+    this.root = new double[k * d];
+    this.ones = new double[k];
+    Arrays.fill(ones, 1);
+    this.correction = new double[d];
   }
 
   Moments moments() {
     return moments;
   }
 
-  /** Sets the covariance, and the mean by the innovation. */
-  void condition(Moments prior, MatchingWorkspace matching, Innovation innovation) {
-    fillCovariance(prior, matching, innovation);
-    double[] whitened = innovation.whitened();
+  /** Conditions the prior on an innovation; the matching must stand at the prior. */
+  StepStatus condition(Moments prior, double[] innovation) {
+    if (!factorUnexplained()) {
+      return StepStatus.NOT_DEFINITE;
+    }
+    squares.reduce(matching.unitCrossCovariance(), unexplained, innovation);
+    fillCovariance(prior);
     int d = correction.length;
     Arrays.fill(correction, 0);
-    for (int j = 0; j < whitened.length; j++) {
+    for (int c = 0; c < ones.length; c++) {
+      double target = squares.target(c);
       for (int r = 0; r < d; r++) {
-        correction[r] += gainRows[j * d + r] * whitened[j];
+        correction[r] += root[c * d + r] * target;
       }
     }
     space.displace(prior.mean(), correction, moments.changeMean());
+    return check();
   }
 
-  /** Sets the covariance, and the mean to one found otherwise. */
-  void condition(Moments prior, MatchingWorkspace matching, Innovation innovation, double[] mean) {
-    fillCovariance(prior, matching, innovation);
+  /** Takes a mean found otherwise, and the covariance of the matching as it stands now. */
+  StepStatus conditionAt(Moments prior, double[] mean, double[] innovation) {
+    if (!factorUnexplained()) {
+      return StepStatus.NOT_DEFINITE;
+    }
+    squares.reduce(matching.unitCrossCovariance(), unexplained, innovation);
+    fillCovariance(prior);
     System.arraycopy(mean, 0, moments.changeMean(), 0, mean.length);
+    return check();
   }
 
-  /** P - G G', with the rows of G' at hand. */
-  private void fillCovariance(Moments prior, MatchingWorkspace matching, Innovation innovation) {
-    fillGainRows(matching, innovation);
+  private boolean factorUnexplained() {
+    matching.unexplainedCovariance(unexplainedCovariance);
+    return unexplained.factorDefinite(unexplainedCovariance);
+  }
+
+  private void fillCovariance(Moments prior) {
+    squares.fillRoot(matching.inputFactor(), root);
     int d = correction.length;
-    double[] p = prior.covariance().data;
     double[] lower = moments.changeCovariance().data;
-    Products.fillInnerProduct(gainRows, negatives, negatives.length, d, lower);
-    for (int r = 0; r < d; r++) {
-      for (int c = 0; c <= r; c++) {
-        lower[r * d + c] += p[r * d + c];
-      }
+    Products.fillInnerProduct(root, ones, ones.length, d, lower);
+    if (ones.length < d) {
+      addInactive(prior.covariance().data, matching.inputFactor().data, lower);
     }
     SymmetricMatrix.mirrorLower(moments.covariance());
   }
 
-  /** G' = L^-1 W' B', m x d, a row of W at a time. */
-  private void fillGainRows(MatchingWorkspace matching, Innovation innovation) {
-    double[] b = matching.inputFactor().data;
-    double[] w = matching.unitCrossCovariance().data;
-    int k = matching.unitCrossCovariance().numRows;
-    int m = column.length;
+  /** Adds P - B B' where neither input is active. */
+  private void addInactive(double[] p, double[] b, double[] lower) {
     int d = correction.length;
-    Arrays.fill(gainRows, 0);
-    for (int a = 0; a < k; a++) {
-      System.arraycopy(w, a * m, column, 0, m);
-      innovation.whiten(column);
-      for (int j = 0; j < m; j++) {
-        double factor = column[j];
-        for (int r = 0; r < d; r++) {
-          gainRows[j * d + r] += factor * b[r * k + a];
+    int k = ones.length;
+    for (int r = 0; r < d; r++) {
+      for (int c = 0; c <= r && !active[r]; c++) {
+        if (!active[c]) {
+          double sum = p[r * d + c];
+          for (int a = 0; a < k; a++) {
+            sum -= b[r * k + a] * b[c * k + a];
+          }
+          lower[r * d + c] += sum;
         }
       }
     }
   }
 
   /** Whether the result can be an estimate. */
-  StepStatus check() {
+  private StepStatus check() {
     if (!Checks.allFinite(moments.mean())) {
       return StepStatus.RESULT_NOT_FINITE;
     }
     if (moments.factor()) {
       return StepStatus.APPLIED;
     }
-    return SymmetricMatrix.firstNotFinite(moments.covariance()) < 0
+    return SymmetricMatrix.allFinite(moments.covariance())
         ? StepStatus.NOT_DEFINITE
         : StepStatus.RESULT_NOT_FINITE;
+  }
+
+  /** Why the last conditioning was NOT_DEFINITE. */
+  String failure() {
+    return unexplained.failedPivot() >= 0
+        ? "negative weights leave no definite covariance to the measurement: "
+            + unexplained.failure()
+        : "updated covariance is not positive semi-definite: " + moments.factorFailure();
   }
 }

@@ -48,11 +48,11 @@ public final class SensorPort {
     this.noise = new NoiseMatrix("measurementNoise", m, true);
     this.innovation = new Innovation(space);
     this.innovationCovariance = new DMatrixRMaj(m, m);
-    this.posterior = new Posterior(stateSpace, m);
+    this.posterior = new Posterior(stateSpace, matching);
     this.mean = new double[stateSpace.storage()];
     this.iteration = plan.iteration() == null
         ? null
-        : new GaussNewton(plan.iteration(), matching, innovation, noise, stateSpace, space);
+        : new GaussNewton(plan.iteration(), matching, noise, stateSpace, space);
   }
 
   /**
@@ -134,17 +134,14 @@ public final class SensorPort {
 
   private StepStatus condition(Moments prior, double[] measurement, double[] given) {
     if (iteration == null) {
-      posterior.condition(prior, matching, innovation);
-      return posterior.check();
+      return posterior.condition(prior, innovation.value());
     }
     StepStatus iterated = iteration.run(prior, given, measurement);
     evaluations += iteration.evaluations();
     jacobians += iteration.jacobians();
-    if (iterated != StepStatus.APPLIED) {
-      return iterated;
-    }
-    posterior.condition(prior, matching, innovation, iteration.mean());
-    return posterior.check();
+    return iterated == StepStatus.APPLIED
+        ? posterior.conditionAt(prior, iteration.mean(), innovation.value())
+        : iterated;
   }
 
   /** {@return the innovation of the last update that was applied or gated; read only} */
@@ -222,7 +219,6 @@ public final class SensorPort {
     if (Double.isNaN(innovation.squared())) {
       return innovation.failure();
     }
-    return "updated covariance is not positive semi-definite: "
-        + posterior.moments().factorFailure();
+    return posterior.failure();
   }
 }

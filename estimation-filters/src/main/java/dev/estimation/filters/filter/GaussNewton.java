@@ -89,6 +89,7 @@ final class GaussNewton {
       }
       System.arraycopy(trial, 0, unit, 0, unit.length);
       if (settled) {
+        reduce();
         return StepStatus.APPLIED;
       }
       previous = length;
@@ -98,13 +99,17 @@ final class GaussNewton {
 
   /** The step to the solution of the linearised problem. */
   private void fillStep() {
-    System.arraycopy(residual, 0, target, 0, target.length);
-    addProduct(unit, target);
-    squares.reduce(matching.unitCrossCovariance(), noise.factor(), target);
+    reduce();
     squares.solve(step);
     for (int a = 0; a < unit.length; a++) {
       step[a] -= unit[a];
     }
+  }
+
+  private void reduce() {
+    System.arraycopy(residual, 0, target, 0, target.length);
+    addProduct(unit, target);
+    squares.reduce(matching.unitCrossCovariance(), noise.factor(), target);
   }
 
   /** result += W' s. */
@@ -207,6 +212,11 @@ final class GaussNewton {
       sum += a[i] * b[i];
     }
     return sum;
+  }
+
+  /** The update, linearised at the result. */
+  UnitLeastSquares squares() {
+    return squares;
   }
 
   double[] mean() {

@@ -1,26 +1,37 @@
 package dev.estimation.filters.filter;
 
-import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.LowerFactor;
+import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import org.ejml.data.DMatrixRMaj;
 
-/** An innovation, its covariance factored, and how likely it was. Confined to one thread. */
+/**
+ * An innovation nu, its covariance S, and how likely it was. With T = S - W'W and the reduction of {@link
+ * UnitLeastSquares}, nu' S^-1 nu is what the least squares leave, and ln det S = ln det T + ln det R'R: both
+ * keep their digits where S itself is nearly singular. Confined to one thread.
+ */
 final class Innovation {
   private static final double LOG_TWO_PI = Math.log(2 * Math.PI);
 
   private final Space space;
-  private final LowerFactor factor;
+  private final MatchingWorkspace matching;
+  private final UnitLeastSquares squares;
+  private final LowerFactor unexplained;
+  private final DMatrixRMaj unexplainedCovariance;
+  private final DMatrixRMaj covariance;
   private final double[] value;
-  private final double[] whitened;
   private double squared = Double.NaN;
   private double logLikelihood = Double.NaN;
 
-  Innovation(Space space) {
+  Innovation(Space space, MatchingWorkspace matching) {
     this.space = space;
-    this.factor = new LowerFactor(space.dimension());
-    this.value = new double[space.dimension()];
-    this.whitened = new double[space.dimension()];
+    this.matching = matching;
+    int m = space.dimension();
+    this.squares = new UnitLeastSquares(matching.unitCrossCovariance().numRows, m);
+    this.unexplained = new LowerFactor(m);
+    this.unexplainedCovariance = new DMatrixRMaj(m, m);
+    this.covariance = new DMatrixRMaj(m, m);
+    this.value = new double[m];
   }
 
   void clear() {
@@ -28,37 +39,33 @@ final class Innovation {
     logLikelihood = Double.NaN;
   }
 
-  /** Factors the covariance S = L L' of a predicted measurement; false if it is not definite. */
-  boolean factor(DMatrixRMaj covariance) {
-    return factor.factorDefinite(covariance);
-  }
-
-  /** Finds nu = z - mean, L^-1 nu, the normalised square and the log-likelihood. */
-  void weigh(Moments predicted, double[] measurement) {
-    space.difference(measurement, predicted.mean(), value);
-    int m = value.length;
-    System.arraycopy(value, 0, whitened, 0, m);
-    factor.solveLower(whitened);
-    double sum = 0;
-    for (int i = 0; i < m; i++) {
-      sum += whitened[i] * whitened[i];
+  /** Weighs a measurement against the prediction at which the matching stands; false if T is not definite. */
+  boolean weigh(double[] measurement) {
+    space.difference(measurement, matching.output().mean(), value);
+    covariance.setTo(matching.output().covariance());
+    matching.unexplainedCovariance(unexplainedCovariance);
+    if (!unexplained.factorDefinite(unexplainedCovariance)) {
+      return false;
     }
-    squared = sum;
-    logLikelihood = -0.5 * (sum + factor.logDeterminant() + m * LOG_TWO_PI);
+    squares.reduce(matching.unitCrossCovariance(), unexplained, value);
+    squared = squares.restSquared();
+    double logDeterminant = unexplained.logDeterminant() + squares.logDeterminant();
+    logLikelihood = -0.5 * (squared + logDeterminant + value.length * LOG_TWO_PI);
+    return true;
   }
 
-  /** Overwrites v with L^-1 v. */
-  void whiten(double[] v) {
-    factor.solveLower(v);
+  /** The update in unit coordinates, reduced. */
+  UnitLeastSquares squares() {
+    return squares;
   }
 
   double[] value() {
     return value;
   }
 
-  /** L^-1 nu. */
-  double[] whitened() {
-    return whitened;
+  /** S. */
+  DMatrixRMaj covariance() {
+    return covariance;
   }
 
   double squared() {
@@ -69,7 +76,9 @@ final class Innovation {
     return logLikelihood;
   }
 
+  /** Why {@link #weigh} was false. */
   String failure() {
-    return "covariance of the innovation is not positive definite: " + factor.failure();
+    return "covariance of the innovation, less what the state explains of it, is not positive definite: "
+        + unexplained.failure();
   }
 }

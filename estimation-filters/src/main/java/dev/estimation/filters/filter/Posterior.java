@@ -2,13 +2,11 @@ package dev.estimation.filters.filter;
 
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
-import dev.estimation.core.internal.LowerFactor;
 import dev.estimation.core.internal.Products;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
-import org.ejml.data.DMatrixRMaj;
 
 /**
  * The estimate given a measurement: mean m + D' z and covariance P - B B' + D'D, with D and z from {@link
@@ -20,9 +18,6 @@ final class Posterior {
   private final Space space;
   private final MatchingWorkspace matching;
   private final Moments moments;
-  private final UnitLeastSquares squares;
-  private final LowerFactor unexplained;
-  private final DMatrixRMaj unexplainedCovariance;
   private final boolean[] active;
   private final double[] root;
   private final double[] ones;
@@ -32,12 +27,8 @@ final class Posterior {
     this.space = state;
     this.matching = matching;
     int k = matching.unitCrossCovariance().numRows;
-    int m = matching.unitCrossCovariance().numCols;
     int d = state.dimension();
     this.moments = new Moments(state);
-    this.squares = new UnitLeastSquares(k, m);
-    this.unexplained = new LowerFactor(m);
-    this.unexplainedCovariance = new DMatrixRMaj(m, m);
     this.active = new boolean[d];
     for (int input : matching.activeInputs()) {
       active[input] = true;
@@ -52,13 +43,9 @@ final class Posterior {
     return moments;
   }
 
-  /** Conditions the prior on an innovation; the matching must stand at the prior. */
-  StepStatus condition(Moments prior, double[] innovation) {
-    if (!factorUnexplained()) {
-      return StepStatus.NOT_DEFINITE;
-    }
-    squares.reduce(matching.unitCrossCovariance(), unexplained, innovation);
-    fillCovariance(prior);
+  /** Conditions the prior by a reduced update, at whose centre the matching must stand. */
+  StepStatus condition(Moments prior, UnitLeastSquares squares) {
+    fillCovariance(prior, squares);
     int d = correction.length;
     Arrays.fill(correction, 0);
     for (int c = 0; c < ones.length; c++) {
@@ -71,23 +58,14 @@ final class Posterior {
     return check();
   }
 
-  /** Takes a mean found otherwise, and the covariance of the matching as it stands now. */
-  StepStatus conditionAt(Moments prior, double[] mean, double[] innovation) {
-    if (!factorUnexplained()) {
-      return StepStatus.NOT_DEFINITE;
-    }
-    squares.reduce(matching.unitCrossCovariance(), unexplained, innovation);
-    fillCovariance(prior);
+  /** Takes the covariance of a reduced update and a mean found otherwise. */
+  StepStatus condition(Moments prior, UnitLeastSquares squares, double[] mean) {
+    fillCovariance(prior, squares);
     System.arraycopy(mean, 0, moments.changeMean(), 0, mean.length);
     return check();
   }
 
-  private boolean factorUnexplained() {
-    matching.unexplainedCovariance(unexplainedCovariance);
-    return unexplained.factorDefinite(unexplainedCovariance);
-  }
-
-  private void fillCovariance(Moments prior) {
+  private void fillCovariance(Moments prior, UnitLeastSquares squares) {
     squares.fillRoot(matching.inputFactor(), root);
     int d = correction.length;
     double[] lower = moments.changeCovariance().data;
@@ -126,13 +104,5 @@ final class Posterior {
     return SymmetricMatrix.allFinite(moments.covariance())
         ? StepStatus.NOT_DEFINITE
         : StepStatus.RESULT_NOT_FINITE;
-  }
-
-  /** Why the last conditioning was NOT_DEFINITE. */
-  String failure() {
-    return unexplained.failedPivot() >= 0
-        ? "negative weights leave no definite covariance to the measurement: "
-            + unexplained.failure()
-        : "updated covariance is not positive semi-definite: " + moments.factorFailure();
   }
 }

@@ -27,7 +27,6 @@ public final class SensorPort {
   private final MatchingWorkspace matching;
   private final NoiseMatrix noise;
   private final Innovation innovation;
-  private final DMatrixRMaj innovationCovariance;
   private final Posterior posterior;
   private final GaussNewton iteration;
   private final double[] mean;
@@ -46,8 +45,7 @@ public final class SensorPort {
     this.gateLimit = plan.gateLimit(m);
     this.matching = plan.matching().workspace(stateSpace, space, new SensorFunction(sensor));
     this.noise = new NoiseMatrix("measurementNoise", m, true);
-    this.innovation = new Innovation(space);
-    this.innovationCovariance = new DMatrixRMaj(m, m);
+    this.innovation = new Innovation(space, matching);
     this.posterior = new Posterior(stateSpace, matching);
     this.mean = new double[stateSpace.storage()];
     this.iteration = plan.iteration() == null
@@ -118,12 +116,9 @@ public final class SensorPort {
     if (matched != MatchingStatus.MATCHED) {
       return StepStatus.of(matched);
     }
-    DMatrixRMaj covariance = matching.output().covariance();
-    if (!innovation.factor(covariance)) {
+    if (!innovation.weigh(measurement)) {
       return StepStatus.NOT_DEFINITE;
     }
-    System.arraycopy(covariance.data, 0, innovationCovariance.data, 0, covariance.getNumElements());
-    innovation.weigh(matching.output(), measurement);
     if (innovation.squared() > gateLimit) {
       return StepStatus.GATED;
     }
@@ -134,13 +129,13 @@ public final class SensorPort {
 
   private StepStatus condition(Moments prior, double[] measurement, double[] given) {
     if (iteration == null) {
-      return posterior.condition(prior, innovation.value());
+      return posterior.condition(prior, innovation.squares());
     }
     StepStatus iterated = iteration.run(prior, given, measurement);
     evaluations += iteration.evaluations();
     jacobians += iteration.jacobians();
     return iterated == StepStatus.APPLIED
-        ? posterior.conditionAt(prior, iteration.mean(), innovation.value())
+        ? posterior.condition(prior, iteration.squares(), iteration.mean())
         : iterated;
   }
 
@@ -151,7 +146,7 @@ public final class SensorPort {
 
   /** {@return the covariance of that innovation; read only} */
   public DMatrixRMaj innovationCovariance() {
-    return innovationCovariance;
+    return innovation.covariance();
   }
 
   /**
@@ -219,6 +214,7 @@ public final class SensorPort {
     if (Double.isNaN(innovation.squared())) {
       return innovation.failure();
     }
-    return posterior.failure();
+    return "updated covariance is not positive semi-definite: "
+        + posterior.moments().factorFailure();
   }
 }

@@ -58,6 +58,25 @@ final class UnitLeastSquares {
     }
   }
 
+  /** The square of what the solution leaves of L^-1 y: y' (T + W'W)^-1 y. */
+  double restSquared() {
+    double sum = 0;
+    for (int i = k; i < m + k; i++) {
+      double rest = stack[i * width + k];
+      sum += rest * rest;
+    }
+    return sum;
+  }
+
+  /** ln det R'R. */
+  double logDeterminant() {
+    double sum = 0;
+    for (int r = 0; r < k; r++) {
+      sum += Math.log(Math.abs(stack[r * width + r]));
+    }
+    return 2 * sum;
+  }
+
   /** z, of which B s is D' z. */
   double target(int row) {
     return stack[row * width + k];

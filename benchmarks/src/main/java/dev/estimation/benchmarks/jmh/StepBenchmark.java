@@ -25,14 +25,14 @@ import org.openjdk.jmh.annotations.Setup;
 import org.openjdk.jmh.annotations.State;
 
 /**
- * One prediction and one update of the {@link TurnProblem}: 10 000 steps from the same start, a step
+ * One prediction and one update of the {@link TurnProblem}: 20 000 steps from the same start, a step
  * at a time. {@code modelOnly} is what the models alone cost in the textbook step: 11 moves, 11 looks.
  */
 @BenchmarkMode(Mode.AverageTime)
 @OutputTimeUnit(TimeUnit.NANOSECONDS)
 @OperationsPerInvocation(StepBenchmark.STEPS)
 public class StepBenchmark {
-  static final int STEPS = 10_000;
+  static final int STEPS = 20_000;
 
   /** The measurements that every benchmark follows. */
   @State(Scope.Thread)

@@ -2,6 +2,7 @@ package dev.estimation.benchmarks.replay;
 
 import dev.estimation.filters.filter.Estimate;
 import dev.estimation.filters.filter.FilterWorkspace;
+import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
 import java.util.ArrayList;
 import java.util.List;
@@ -82,17 +83,18 @@ final class FilterRun {
   private boolean update(Measurement measurement) {
     MeasurementPort port = ports.of(measurement);
     StepStatus status = port.update(estimate, measurement);
-    evaluations += port.evaluations();
-    jacobians += port.jacobians();
+    SensorPort told = port.last();
+    evaluations += told.evaluations();
+    jacobians += told.jacobians();
     switch (status) {
-      case APPLIED -> innovations.accept(port);
+      case APPLIED -> innovations.accept(told);
       case GATED -> innovations.reject();
       case NOT_CONVERGED -> {
         innovations.skip();
         skipped.add(history.size(), estimate.time());
       }
       default -> {
-        failure = port.failure();
+        failure = told.failure();
         return false;
       }
     }

@@ -1,5 +1,6 @@
 package dev.estimation.benchmarks.replay;
 
+import dev.estimation.filters.filter.SensorPort;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -12,10 +13,10 @@ final class InnovationTally {
   private double squared;
   private double logLikelihood;
 
-  void accept(MeasurementPort port) {
+  void accept(SensorPort port) {
     rows++;
     accepted++;
-    degrees += port.degreesOfFreedom();
+    degrees += port.innovation().length;
     squared += port.normalisedInnovationSquared();
     logLikelihood += port.logLikelihood();
   }

@@ -9,54 +9,14 @@ import dev.estimation.filters.filter.StepStatus;
 interface MeasurementPort {
   StepStatus update(Estimate estimate, Measurement measurement);
 
-  /** How many numbers the innovation of the last update has. */
-  int degreesOfFreedom();
-
-  double normalisedInnovationSquared();
-
-  double logLikelihood();
-
-  int evaluations();
-
-  int jacobians();
-
-  String failure();
+  /** What the last update has to tell. */
+  SensorPort last();
 
   /** A port for single rows. */
-  record Single(SensorPort port) implements MeasurementPort {
+  record Single(SensorPort last) implements MeasurementPort {
     @Override
     public StepStatus update(Estimate estimate, Measurement measurement) {
-      return port.update(estimate, measurement.sharedValue(), measurement.sharedGiven());
-    }
-
-    @Override
-    public int degreesOfFreedom() {
-      return port.innovation().length;
-    }
-
-    @Override
-    public double normalisedInnovationSquared() {
-      return port.normalisedInnovationSquared();
-    }
-
-    @Override
-    public double logLikelihood() {
-      return port.logLikelihood();
-    }
-
-    @Override
-    public int evaluations() {
-      return port.evaluations();
-    }
-
-    @Override
-    public int jacobians() {
-      return port.jacobians();
-    }
-
-    @Override
-    public String failure() {
-      return port.failure();
+      return last.update(estimate, measurement.sharedValue(), measurement.sharedGiven());
     }
   }
 
@@ -69,33 +29,8 @@ interface MeasurementPort {
     }
 
     @Override
-    public int degreesOfFreedom() {
-      return port.innovation().length;
-    }
-
-    @Override
-    public double normalisedInnovationSquared() {
-      return port.normalisedInnovationSquared();
-    }
-
-    @Override
-    public double logLikelihood() {
-      return port.logLikelihood();
-    }
-
-    @Override
-    public int evaluations() {
-      return port.evaluations();
-    }
-
-    @Override
-    public int jacobians() {
-      return port.jacobians();
-    }
-
-    @Override
-    public String failure() {
-      return port.failure();
+    public SensorPort last() {
+      return port.last();
     }
   }
 }

@@ -23,7 +23,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 class StepBenchmarkTest {
   private final StepBenchmark.Track track = new StepBenchmark.Track();
 
-  /** 1e-9 standard deviations after 10 000 steps: two ways of writing the same sums. */
+  /** 1e-9 standard deviations after 20 000 steps: two ways of writing the same sums. */
   @Test
   void plainStepIsTheUnscentedStepOverTheWholeState() {
     StepBenchmark.Filter filter = filter("unscented-whole");

@@ -66,7 +66,10 @@ public final class Moments {
    * @param value copied from
    */
   public void set(Gaussian value) {
-    Checks.length("mean", mean, value.dimension());
+    if (value.dimension() != mean.length) {
+      throw new IllegalArgumentException("a Gaussian must have dimension " + mean.length
+          + " to be set here, got " + value.dimension());
+    }
     value.copyInto(mean, changeCovariance());
   }
 

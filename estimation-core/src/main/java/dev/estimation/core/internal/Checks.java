@@ -32,7 +32,8 @@ public final class Checks {
   public static void finite(String what, double... values) {
     for (int i = 0; i < values.length; i++) {
       if (!Double.isFinite(values[i])) {
-        throw new IllegalArgumentException(what + "[" + i + "] must be finite, got " + values[i]);
+        String place = values.length == 1 ? "" : "[" + i + "]";
+        throw new IllegalArgumentException(what + place + " must be finite, got " + values[i]);
       }
     }
   }

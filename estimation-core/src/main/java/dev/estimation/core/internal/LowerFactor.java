@@ -17,6 +17,9 @@ public final class LowerFactor {
   /** Pivots above this fraction of their diagonal entry need no closer look. */
   private static final double NEARLY_ZERO = 1e-3;
 
+  /** No pivot beyond this fraction of its diagonal entry passes for rounding, whatever came before. */
+  private static final double LARGEST_ROUNDING = 1e-6;
+
   private final int size;
   private final int[] order;
   private final DMatrixRMaj columns;
@@ -32,22 +35,21 @@ public final class LowerFactor {
    * @param size rows and columns
    */
   public LowerFactor(int size) {
-    this(naturalOrder(size), size);
+    this(naturalOrder(size));
   }
 
   /**
-   * The first columns of the factor that a matrix has when its rows and columns are taken in
-   * another order: B, n x k, rows in natural order, with P[:, a] = B B[a, :]' for a = order[0..k).
+   * Factors of matrices whose rows and columns are taken in another order: L with P = L L', rows in
+   * natural order; L[order, :] is lower triangular. The first k columns carry P[:, order[0..k)].
    *
    * @param order a permutation of 0..n-1, copied
-   * @param columnCount k, from 0 to n
    */
-  public LowerFactor(int[] order, int columnCount) {
+  public LowerFactor(int[] order) {
     this.size = order.length;
     this.order = order.clone();
-    this.columns = new DMatrixRMaj(size, columnCount);
-    this.inverse = new double[columnCount];
-    this.growth = new double[columnCount];
+    this.columns = new DMatrixRMaj(size, size);
+    this.inverse = new double[size];
+    this.growth = new double[size];
   }
 
   private static int[] naturalOrder(int size) {
@@ -56,7 +58,7 @@ public final class LowerFactor {
     return order;
   }
 
-  /** {@return the factor, or its first columns, of the last success} */
+  /** {@return the factor; a failed attempt leaves it in part} */
   public DMatrixRMaj columns() {
     return columns;
   }
@@ -88,23 +90,19 @@ public final class LowerFactor {
     double[] p = matrix.data;
     double[] b = columns.data;
     int n = size;
-    int k = columns.numCols;
     growthKnown = 0;
     for (int q = 0; q < n; q++) {
       int row = order[q];
-      int known = Math.min(q, k);
-      for (int c = 0; c < known; c++) {
-        double rest = p[row * n + order[c]] - dot(b, row * k, order[c] * k, c);
+      for (int c = 0; c < q; c++) {
+        double rest = p[row * n + order[c]] - dot(b, row * n, order[c] * n, c);
         if (inverse[c] == 0 && !vanishes(rest, p, row, c)) {
           return fail(c, 0);
         }
-        b[row * k + c] = rest * inverse[c];
+        b[row * n + c] = rest * inverse[c];
       }
-      if (q < k) {
-        double pivot = p[row * (n + 1)] - dot(b, row * k, row * k, q);
-        if (!setPivot(pivot, p, q, definite)) {
-          return fail(q, pivot);
-        }
+      double pivot = p[row * (n + 1)] - dot(b, row * n, row * n, q);
+      if (!setPivot(pivot, p, q, definite)) {
+        return fail(q, pivot);
       }
     }
     failedPivot = -1;
@@ -114,31 +112,34 @@ public final class LowerFactor {
   /** Sets the diagonal entry and zeros right of it; false if the pivot is not allowed. */
   private boolean setPivot(double pivot, double[] p, int q, boolean definite) {
     int row = order[q];
-    int k = columns.numCols;
     double variance = p[row * (size + 1)];
-    double root = 0;
-    if (pivot > NEARLY_ZERO * variance && pivot <= Double.MAX_VALUE) {
-      root = Math.sqrt(pivot);
-    } else if (definite) {
-      if (!(pivot > size * EPSILON * variance && pivot <= Double.MAX_VALUE)) {
-        return false;
-      }
-      root = Math.sqrt(pivot);
-    } else {
-      double bound = bound(p, row, q);
-      double threshold = size * EPSILON * bound;
-      if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE && bound <= Double.MAX_VALUE)) {
-        return false;
-      }
-      root = pivot > threshold ? Math.sqrt(pivot) : 0;
+    double root = pivot > NEARLY_ZERO * variance && pivot <= Double.MAX_VALUE
+        ? Math.sqrt(pivot)
+        : smallRoot(pivot, p, q, definite);
+    if (!(root >= 0)) {
+      return false;
     }
     double[] b = columns.data;
-    b[row * k + q] = root;
+    b[row * size + q] = root;
     inverse[q] = root == 0 ? 0 : 1 / root;
-    for (int c = q + 1; c < k; c++) {
-      b[row * k + c] = 0;
+    for (int c = q + 1; c < size; c++) {
+      b[row * size + c] = 0;
     }
     return true;
+  }
+
+  /** The root of a pivot that is small or worse: zero for a zero variance, NaN if it is not allowed. */
+  private double smallRoot(double pivot, double[] p, int q, boolean definite) {
+    double variance = p[order[q] * (size + 1)];
+    double bound = definite ? variance : bound(p, order[q], q);
+    double threshold = Math.min(size * EPSILON * bound, LARGEST_ROUNDING * variance);
+    if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE && bound <= Double.MAX_VALUE)) {
+      return Double.NaN;
+    }
+    if (pivot > threshold) {
+      return Math.sqrt(pivot);
+    }
+    return definite ? Double.NaN : 0;
   }
 
   private boolean vanishes(double rest, double[] p, int row, int c) {
@@ -162,10 +163,9 @@ public final class LowerFactor {
 
   private double sum(double[] p, int row, int c) {
     double[] b = columns.data;
-    int k = columns.numCols;
     double sum = p[row * (size + 1)];
     for (int q = 0; q < c; q++) {
-      sum += b[row * k + q] * b[row * k + q] * growth[q];
+      sum += b[row * size + q] * b[row * size + q] * growth[q];
     }
     return sum;
   }

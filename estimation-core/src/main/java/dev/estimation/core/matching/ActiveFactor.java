@@ -14,6 +14,7 @@ final class ActiveFactor {
   private final boolean leading;
   private final LowerFactor ordered;
   private final DMatrixRMaj columns;
+  private final DMatrixRMaj rest;
   private int failedPivot;
   private double failedValue;
 
@@ -34,11 +35,12 @@ final class ActiveFactor {
         order[next++] = index;
       }
     }
-    this.ordered = leading ? null : new LowerFactor(order, active.length);
-    this.columns = leading ? new DMatrixRMaj(dimension, active.length) : ordered.columns();
+    this.ordered = leading ? null : new LowerFactor(order);
+    this.columns = new DMatrixRMaj(dimension, active.length);
+    this.rest = new DMatrixRMaj(dimension, dimension - active.length);
   }
 
-  /** Makes B; false if the covariance is not positive semi-definite. */
+  /** Makes B and the rest; false if the covariance is not positive semi-definite. */
   boolean factor(Moments input) {
     if (!input.factor()) {
       failedPivot = input.failedPivot();
@@ -46,7 +48,7 @@ final class ActiveFactor {
       return false;
     }
     if (leading) {
-      copyColumns(input.lowerFactor());
+      split(input.lowerFactor());
       return true;
     }
     if (!ordered.factorSemidefinite(input.covariance())) {
@@ -54,13 +56,16 @@ final class ActiveFactor {
       failedValue = ordered.failedValue();
       return false;
     }
+    split(ordered.columns());
     return true;
   }
 
-  private void copyColumns(DMatrixRMaj lower) {
+  private void split(DMatrixRMaj lower) {
+    int n = columns.numRows;
     int k = columns.numCols;
-    for (int row = 0; row < columns.numRows; row++) {
-      System.arraycopy(lower.data, row * lower.numCols, columns.data, row * k, k);
+    for (int row = 0; row < n; row++) {
+      System.arraycopy(lower.data, row * n, columns.data, row * k, k);
+      System.arraycopy(lower.data, row * n + k, rest.data, row * (n - k), n - k);
     }
   }
 
@@ -77,8 +82,8 @@ final class ActiveFactor {
     return active.length;
   }
 
-  int[] inputs() {
-    return active.clone();
+  DMatrixRMaj rest() {
+    return rest;
   }
 
   /** The input of an active index. */

@@ -3,10 +3,8 @@ package dev.estimation.core.matching;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
-import dev.estimation.core.internal.Products;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.space.Space;
-import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 
 /** What all matchings share: checks, the factor of the input, the image of the centre, the results. */
@@ -21,7 +19,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   private final Moments output;
   private MatchingStatus status = MatchingStatus.MATCHED;
   private final double[] handed;
-  private final double[] minusOnes;
+  final DMatrixRMaj noise;
   private int failedIndex;
   private double failedValue;
 
@@ -35,8 +33,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     this.centre = new double[outputSpace.storage()];
     this.output = new Moments(outputSpace);
     this.handed = new double[inputSpace.storage()];
-    this.minusOnes = new double[active.count()];
-    Arrays.fill(minusOnes, -1);
+    this.noise = new DMatrixRMaj(outputSpace.dimension(), outputSpace.dimension());
   }
 
   @Override
@@ -68,8 +65,12 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     if (matched != MatchingStatus.MATCHED) {
       return matched;
     }
-    noteNoise(additiveNoise);
-    addNoise(covariance, additiveNoise);
+    if (additiveNoise == null) {
+      noise.zero();
+    } else {
+      noise.setTo(additiveNoise);
+    }
+    addNoise(covariance);
     return Checks.allFinite(mean) && SymmetricMatrix.allFinite(covariance)
         ? MatchingStatus.MATCHED
         : MatchingStatus.OUTPUT_NOT_FINITE;
@@ -121,15 +122,11 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     }
   }
 
-  /** For those who need the noise once more. */
-  void noteNoise(DMatrixRMaj noise) {}
-
-  private static void addNoise(DMatrixRMaj covariance, DMatrixRMaj noise) {
-    if (noise != null) {
-      int size = covariance.numRows * covariance.numRows;
-      for (int i = 0; i < size; i++) {
-        covariance.data[i] += noise.data[i];
-      }
+  /** Adds the noise of this call, and mirrors the lower triangle. */
+  final void addNoise(DMatrixRMaj covariance) {
+    int size = covariance.numRows * covariance.numRows;
+    for (int i = 0; i < size; i++) {
+      covariance.data[i] += noise.data[i];
     }
     SymmetricMatrix.mirrorLower(covariance);
   }
@@ -145,26 +142,21 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   }
 
   @Override
+  public final DMatrixRMaj restFactor() {
+    return active.rest();
+  }
+
+  @Override
   public final DMatrixRMaj unitCrossCovariance() {
     return cross;
   }
 
-  @Override
-  public final int[] activeInputs() {
-    return active.inputs();
-  }
-
-  @Override
-  public void unexplainedCovariance(DMatrixRMaj result) {
+  final void requireOutputShape(DMatrixRMaj matrix) {
     int m = outputSpace.dimension();
-    Products.fillInnerProduct(cross.data, minusOnes, active.count(), m, result.data);
-    double[] total = output.covariance().data;
-    for (int r = 0; r < m; r++) {
-      for (int c = 0; c <= r; c++) {
-        result.data[r * m + c] += total[r * m + c];
-      }
+    if (matrix.numRows != m || matrix.numCols != m) {
+      throw new IllegalArgumentException("a matrix of the output must be " + m + " x " + m
+          + ", got " + matrix.numRows + " x " + matrix.numCols);
     }
-    SymmetricMatrix.mirrorLower(result);
   }
 
   @Override

@@ -15,7 +15,6 @@ final class LinearWorkspace extends BaseWorkspace {
   private final double[] derivatives;
   private final double[] zero;
   private final double[] ones;
-  private final DMatrixRMaj noise;
   private final int differenceEvaluations;
 
   LinearWorkspace(Space input, Space output, VectorFunction function, double[] inputScales) {
@@ -27,7 +26,6 @@ final class LinearWorkspace extends BaseWorkspace {
     this.zero = new double[output.dimension()];
     this.ones = new double[active.count()];
     Arrays.fill(ones, 1);
-    this.noise = new DMatrixRMaj(output.dimension(), output.dimension());
   }
 
   private static Jacobian differences(
@@ -78,16 +76,8 @@ final class LinearWorkspace extends BaseWorkspace {
   }
 
   @Override
-  void noteNoise(DMatrixRMaj additive) {
-    if (additive == null) {
-      noise.zero();
-    } else {
-      noise.setTo(additive);
-    }
-  }
-
-  @Override
   public void unexplainedCovariance(DMatrixRMaj result) {
+    requireOutputShape(result);
     result.setTo(noise);
   }
 

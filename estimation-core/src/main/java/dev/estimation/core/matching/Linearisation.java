@@ -8,12 +8,14 @@ import dev.estimation.core.space.Space;
  * Jacobian at the mean.
  *
  * <p>Formed as W'W, so P_zz is positive semi-definite by construction. Zero variances are valid; NaN
- * in the Jacobian is the status {@link MatchingStatus#JACOBIAN_NOT_FINITE}. Accuracy: the error of the
- * mean is half the trace of the Hessian times the covariance, the covariance misses the square of
- * that; nothing in the result tells how large they are.
+ * in the Jacobian is the status {@link MatchingStatus#JACOBIAN_NOT_FINITE}. Accuracy: to
+ * leading order the mean of component i errs by tr(H_i P) / 2 and the covariance of i and j misses tr(H_i P
+ * H_j P) / 2, H the Hessians; nothing in the result tells how large these are.
  *
  * <p>Cost: 1 evaluation and 1 Jacobian, analytic where the function has one. Where it has none, input
- * scales must be given and central differences take 2 evaluations more for each active input.
+ * scales must be given, one for each input, and central differences take 2 evaluations more for each
+ * active input. A motion with noise inside has state and noise as its inputs: its scales do not fit a
+ * sensor, so one of the two must know its Jacobian.
  * <i>Immutable.</i> Source: Jazwinski 1970, <i>Stochastic Processes and Filtering Theory</i>, section
  * 8.3 (from memory).
  */

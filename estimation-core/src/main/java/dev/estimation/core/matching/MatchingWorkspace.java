@@ -36,15 +36,20 @@ public interface MatchingWorkspace {
   /** {@return B, n x k; read only, valid until the next call} */
   DMatrixRMaj inputFactor();
 
+  /**
+   * The factor of what the inputs that are not active have of their own: the covariance of the input is
+   * B B' plus this times its transpose. Its rows of active inputs are zero.
+   *
+   * @return n x (n - k); read only, valid until the next call
+   */
+  DMatrixRMaj restFactor();
+
   /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */
   DMatrixRMaj unitCrossCovariance();
 
-  /** {@return the inputs that the function reads, in the order of the columns of B; a copy} */
-  int[] activeInputs();
-
   /**
    * The covariance of what a regression on the input does not explain of the output, additive noise
-   * included: P_zz - W'W. Linearisation gives the noise itself, without a rounding. Not positive
+   * included: P_zz - W'W, formed without that subtraction. Linearisation gives the noise itself. Not positive
    * semi-definite only where negative weights have made it so; an update would then give an indefinite
    * covariance.
    *

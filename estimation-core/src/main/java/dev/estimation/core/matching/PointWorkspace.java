@@ -5,6 +5,7 @@ import dev.estimation.core.internal.Products;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
+import org.ejml.data.DMatrixRMaj;
 
 /** Carries moments by points; see {@link PointMatching} for the formulas. */
 class PointWorkspace extends BaseWorkspace {
@@ -15,6 +16,8 @@ class PointWorkspace extends BaseWorkspace {
   final double[] deviations;
 
   private final double[] weights;
+  private final double[] residuals;
+  private final double centreFactor;
   private final double[] displacement;
   private final double[] point;
   private final double[] image;
@@ -23,6 +26,7 @@ class PointWorkspace extends BaseWorkspace {
   PointWorkspace(Space input, Space output, VectorFunction function, UnitPoints points) {
     super(input, output, function);
     this.points = points;
+    this.centreFactor = points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
     this.weights = new double[points.size()];
     Arrays.setAll(weights, points::weight);
     this.displacement = new double[input.dimension()];
@@ -30,6 +34,7 @@ class PointWorkspace extends BaseWorkspace {
     this.image = new double[output.storage()];
     this.deviation = new double[output.dimension()];
     this.deviations = new double[points.size() * output.dimension()];
+    this.residuals = new double[deviations.length];
     this.shift = new double[output.dimension()];
   }
 
@@ -47,7 +52,6 @@ class PointWorkspace extends BaseWorkspace {
     fillShift();
     fillCross();
     Products.fillInnerProduct(deviations, weights, weights.length, m, covariance);
-    double centreFactor = points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
     Products.addSquare(centreFactor, shift, covariance);
     outputSpace.displace(centre, shift, outputMean);
     return MatchingStatus.MATCHED;
@@ -57,7 +61,11 @@ class PointWorkspace extends BaseWorkspace {
   private void place(int i, double[] mean) {
     int first = points.start(i);
     int end = points.start(i + 1);
-    addColumn(first, true);
+    if (first == end) {
+      Arrays.fill(displacement, 0);
+    } else {
+      addColumn(first, true);
+    }
     for (int entry = first + 1; entry < end; entry++) {
       addColumn(entry, false);
     }
@@ -106,5 +114,30 @@ class PointWorkspace extends BaseWorkspace {
         }
       }
     }
+  }
+
+  /**
+   * With r_i = d_i - W' xi_i: sum w_i r_i r_i' + (wc_0 - wm_0 - 1) delta delta' + noise. The same as P_zz -
+   * W'W where the points have mean 0 and covariance I, without subtracting large numbers.
+   */
+  @Override
+  public void unexplainedCovariance(DMatrixRMaj result) {
+    requireOutputShape(result);
+    int m = shift.length;
+    System.arraycopy(deviations, 0, residuals, 0, deviations.length);
+    double[] w = cross.data;
+    for (int i = 0; i < weights.length; i++) {
+      int end = points.start(i + 1);
+      for (int entry = points.start(i); entry < end; entry++) {
+        double coordinate = points.coordinate(entry);
+        int row = points.axis(entry) * m;
+        for (int c = 0; c < m; c++) {
+          residuals[i * m + c] -= coordinate * w[row + c];
+        }
+      }
+    }
+    Products.fillInnerProduct(residuals, weights, weights.length, m, result.data);
+    Products.addSquare(centreFactor, shift, result.data);
+    addNoise(result);
   }
 }

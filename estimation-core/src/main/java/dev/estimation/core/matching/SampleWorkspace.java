@@ -1,16 +1,23 @@
 package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.internal.Products;
+import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
+import java.util.Arrays;
+import org.ejml.data.DMatrixRMaj;
 
 /** Carries moments by independent draws, about their sample means. */
 final class SampleWorkspace extends PointWorkspace implements SampledWorkspace {
   private final double[] pointMean;
+  private final double[] minusOnes;
 
   SampleWorkspace(Space input, Space output, VectorFunction function, UnitPoints points) {
     super(input, output, function, points);
     this.pointMean = new double[points.dimension()];
+    this.minusOnes = new double[points.dimension()];
+    Arrays.fill(minusOnes, -1);
     for (int i = 0; i < points.size(); i++) {
       for (int entry = points.start(i); entry < points.start(i + 1); entry++) {
         pointMean[points.axis(entry)] += points.weight(i) * points.coordinate(entry);
@@ -33,6 +40,21 @@ final class SampleWorkspace extends PointWorkspace implements SampledWorkspace {
       }
     }
     return matched;
+  }
+
+  /** P_zz - W'W: these points have a covariance of their own, not I. */
+  @Override
+  public void unexplainedCovariance(DMatrixRMaj result) {
+    requireOutputShape(result);
+    int m = shift.length;
+    Products.fillInnerProduct(cross.data, minusOnes, pointMean.length, m, result.data);
+    double[] total = output().covariance().data;
+    for (int r = 0; r < m; r++) {
+      for (int c = 0; c <= r; c++) {
+        result.data[r * m + c] += total[r * m + c];
+      }
+    }
+    SymmetricMatrix.mirrorLower(result);
   }
 
   @Override

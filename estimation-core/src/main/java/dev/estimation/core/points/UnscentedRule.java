@@ -25,7 +25,8 @@ public final class UnscentedRule implements PointRule {
   private final IntToDoubleFunction kappa;
 
   private UnscentedRule(double alpha, double beta, IntToDoubleFunction kappa) {
-    Checks.finite("alpha and beta", alpha, beta);
+    Checks.finite("alpha", alpha);
+    Checks.finite("beta", beta);
     if (!(alpha > 0)) {
       throw new IllegalArgumentException("alpha must be > 0, got " + alpha);
     }

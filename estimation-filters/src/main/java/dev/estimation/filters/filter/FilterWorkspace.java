@@ -20,6 +20,10 @@ public final class FilterWorkspace {
   private StepStatus status = StepStatus.APPLIED;
   private int evaluations;
   private int jacobians;
+  private boolean interrupted;
+  private Estimate moved;
+  private double movedFrom = Double.NaN;
+  private double movedTo = Double.NaN;
   private double stepTime = Double.NaN;
   private double estimateTime = Double.NaN;
 
@@ -79,8 +83,9 @@ public final class FilterWorkspace {
     jacobians = 0;
     stepTime = time;
     estimateTime = estimate.time();
-    status = StepStatus.APPLIED;
+    interrupted = true;
     status = predictChecked(estimate, time, control);
+    interrupted = false;
     return status;
   }
 
@@ -97,12 +102,17 @@ public final class FilterWorkspace {
     if (time == estimateTime) {
       return StepStatus.APPLIED;
     }
+    moved = null;
+    movedFrom = Double.NaN;
     StepStatus carried =
         transition.carry(estimate.moments(), control, estimateTime, time - estimateTime);
     evaluations = transition.evaluations();
     jacobians = transition.jacobians();
     if (carried == StepStatus.APPLIED) {
       estimate.replace(time, transition.output());
+      moved = estimate;
+      movedFrom = estimateTime;
+      movedTo = time;
     }
     return carried;
   }
@@ -110,23 +120,31 @@ public final class FilterWorkspace {
   /**
    * What a smoother needs of the last prediction that moved an estimate in time.
    *
+   * @param estimate that was moved, and has not been moved since
    * @param cross filled with the cross-covariance of the state before and after, d x d
    * @return the predicted moments; read only, valid until the next prediction
-   * @throws IllegalStateException if the last prediction was not applied, or was over no time
+   * @throws IllegalStateException if this workspace did not move the estimate last, to its time
    */
-  public Moments prediction(DMatrixRMaj cross) {
-    if (status != StepStatus.APPLIED || !(stepTime > estimateTime)) {
-      throw new IllegalStateException(
-          "the last prediction must have moved an estimate in time, got "
-              + (failure().isEmpty() ? "one over no time" : failure()));
+  public Moments prediction(Estimate estimate, DMatrixRMaj cross) {
+    int d = plan.stateSpace().dimension();
+    if (cross.numRows != d || cross.numCols != d) {
+      throw new IllegalArgumentException(
+          "cross must be " + d + " x " + d + ", got " + cross.numRows + " x " + cross.numCols);
+    }
+    if (moved != estimate || movedTo != estimate.time()) {
+      throw new IllegalStateException("the last prediction of this workspace must have moved the"
+          + " estimate to t = " + estimate.time() + " s, it "
+          + (moved == null
+              ? "moved none"
+              : "moved " + (moved == estimate ? "it" : "another") + " to t = " + movedTo + " s"));
     }
     transition.crossCovariance(cross);
     return transition.output();
   }
 
-  /** {@return the time (s) from which the last prediction went} */
-  public double predictedFrom() {
-    return estimateTime;
+  /** {@return the time (s) from which the last prediction went that moved an estimate; NaN if none} */
+  public double movedFrom() {
+    return movedFrom;
   }
 
   /** {@return the function evaluations of the last prediction} */
@@ -141,11 +159,11 @@ public final class FilterWorkspace {
 
   /** {@return why the last prediction was not applied, in words; empty if it was} */
   public String failure() {
-    if (status == StepStatus.APPLIED) {
+    if (status == StepStatus.APPLIED && !interrupted) {
       return "";
     }
-    return reason() + " (motion model " + transition.name() + ", prediction from t = "
-        + estimateTime + " s to " + stepTime + " s)";
+    return (interrupted ? "the model threw an exception" : reason()) + " (motion model "
+        + transition.name() + ", prediction from t = " + estimateTime + " s to " + stepTime + " s)";
   }
 
   private String reason() {

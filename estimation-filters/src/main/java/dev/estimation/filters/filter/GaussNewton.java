@@ -72,6 +72,14 @@ final class GaussNewton {
     prior = from;
     given = nextGiven;
     measurement = nextMeasurement;
+    StepStatus ended = iterate();
+    prior = null; // what belongs to the caller is not kept
+    given = null;
+    measurement = null;
+    return ended;
+  }
+
+  private StepStatus iterate() {
     evaluations = 0;
     jacobians = 0;
     iterate.set(prior);

@@ -3,6 +3,7 @@ package dev.estimation.filters.filter;
 import dev.estimation.core.internal.LowerFactor;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
+import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -35,6 +36,7 @@ final class Innovation {
   }
 
   void clear() {
+    Arrays.fill(value, Double.NaN);
     squared = Double.NaN;
     logLikelihood = Double.NaN;
   }

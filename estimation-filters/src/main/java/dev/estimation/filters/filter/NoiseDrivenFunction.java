@@ -18,6 +18,10 @@ final class NoiseDrivenFunction implements VectorFunction {
 
   NoiseDrivenFunction(NoiseDrivenMotion model) {
     this.model = model;
+    if (model.noiseDimension() < 1) {
+      throw new IllegalArgumentException("noise dimension must be 1 or more, got "
+          + model.noiseDimension() + " (motion model " + model.getClass().getSimpleName() + ")");
+    }
     int d = model.stateSpace().dimension();
     this.state = new double[model.stateSpace().storage()];
     this.noise = new double[model.noiseDimension()];

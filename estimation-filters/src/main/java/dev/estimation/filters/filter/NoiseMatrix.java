@@ -11,7 +11,7 @@ final class NoiseMatrix {
   private final DMatrixRMaj matrix;
   private final LowerFactor factor;
   private final boolean definite;
-  private final double[] accepted;
+  private final DMatrixRMaj accepted;
   private boolean anyAccepted;
 
   /**
@@ -24,7 +24,7 @@ final class NoiseMatrix {
     this.matrix = new DMatrixRMaj(dimension, dimension);
     this.factor = new LowerFactor(dimension);
     this.definite = definite;
-    this.accepted = new double[dimension * dimension];
+    this.accepted = new DMatrixRMaj(dimension, dimension);
   }
 
   /** The array for the model to fill, all zeros. */
@@ -35,12 +35,12 @@ final class NoiseMatrix {
 
   /** Checks what was filled; a matrix equal to the last one accepted needs no second check. */
   boolean isValid() {
-    if (anyAccepted && Arrays.equals(matrix.data, accepted)) {
+    if (anyAccepted && Arrays.equals(matrix.data, accepted.data)) {
       return true;
     }
     anyAccepted = isCovariance();
     if (anyAccepted) {
-      System.arraycopy(matrix.data, 0, accepted, 0, accepted.length);
+      accepted.setTo(matrix);
     }
     return anyAccepted;
   }
@@ -73,8 +73,9 @@ final class NoiseMatrix {
     return factor;
   }
 
+  /** A copy of what was accepted: the model may still hold the array that it filled. */
   DMatrixRMaj matrix() {
-    return matrix;
+    return accepted;
   }
 
   /** What was wrong when {@link #isValid()} was false. */

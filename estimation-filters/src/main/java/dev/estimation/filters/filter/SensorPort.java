@@ -13,8 +13,8 @@ import org.ejml.data.DMatrixRMaj;
  *
  * <p>Several measurements of one time are updates one after another, or one update of stacked rows
  * ({@link StackedPort}). With d the dimension of the state, m of the measurement and k its active
- * inputs, an update costs the evaluations of the matching, the noise, and about d k m + d^2 m / 2 + d^3
- * / 6 operations. <i>Confined to one thread</i>; serves any number of estimates of its plan; allocates
+ * inputs, an update costs the evaluations of the matching, the noise, and about m^3 / 6 + 2 (m + k) k^2
+ * + d^3 operations. <i>Confined to one thread</i>; serves any number of estimates of its plan; allocates
  * only when built and in {@link #failure()}.
  */
 public final class SensorPort {
@@ -32,6 +32,7 @@ public final class SensorPort {
   private final double[] mean;
   private final InputCheck input = new InputCheck();
   private StepStatus status = StepStatus.APPLIED;
+  private boolean interrupted;
   private double estimateTime;
   private int evaluations;
   private int jacobians;
@@ -81,8 +82,9 @@ public final class SensorPort {
     jacobians = 0;
     innovation.clear();
     estimateTime = estimate.time();
-    status = StepStatus.APPLIED;
+    interrupted = true;
     status = updateChecked(estimate, measurement, given);
+    interrupted = false;
     return status;
   }
 
@@ -135,11 +137,11 @@ public final class SensorPort {
     evaluations += iteration.evaluations();
     jacobians += iteration.jacobians();
     return iterated == StepStatus.APPLIED
-        ? posterior.condition(prior, iteration.squares(), iteration.mean())
+        ? posterior.take(iteration.squares(), iteration.mean())
         : iterated;
   }
 
-  /** {@return the innovation of the last update that was applied or gated; read only} */
+  /** {@return the innovation of the last update; NaN if it did not come that far; read only} */
   public double[] innovation() {
     return innovation.value();
   }
@@ -181,10 +183,11 @@ public final class SensorPort {
 
   /** {@return why the last update was not applied, in words; empty if it was} */
   public String failure() {
-    if (status == StepStatus.APPLIED) {
+    if (status == StepStatus.APPLIED && !interrupted) {
       return "";
     }
-    return reason() + " (sensor model " + name + ", update at t = " + estimateTime + " s)";
+    return (interrupted ? "the model threw an exception" : reason()) + " (sensor model " + name
+        + ", update at t = " + estimateTime + " s)";
   }
 
   private String reason() {
@@ -194,7 +197,7 @@ public final class SensorPort {
       case INPUT_NOT_FINITE -> input.failure();
       case NOISE_NOT_VALID -> noise.failure();
       case NOT_CONVERGED ->
-        "the iterated update did not converge; a line search may (see IteratedUpdate)";
+        "the iterated update did not converge; a line search or a tighter prior may help";
       case NOT_DEFINITE -> indefinite();
       case RESULT_NOT_FINITE -> notFinite();
       default -> matching.failure();

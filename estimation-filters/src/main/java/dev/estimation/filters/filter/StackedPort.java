@@ -1,16 +1,15 @@
 package dev.estimation.filters.filter;
 
 import dev.estimation.filters.model.SensorModel;
-import org.ejml.data.DMatrixRMaj;
 
 /**
  * Where several rows of one sensor enter as one update: all pseudoranges of an epoch, say. The number of
  * rows may change from update to update, up to a maximum; the noise of different rows is independent.
  *
  * <p>Compared with updates one after another, the rows are linearised (or sampled) about the same
- * estimate, and the gate judges them together. Scratch for every number of rows is made at set-up: about
- * M^3 d numbers for at most M rows of one component in a state of dimension d. <i>Confined to one
- * thread</i>; allocates only when built and in {@link #failure()}.
+ * estimate, and the gate judges them together. Scratch for every number of rows is made at set-up: some M^3
+ * and M^2 d numbers for at most M rows of one component in a state of dimension d. <i>Confined to one
+ * thread</i>; allocates only when built and in {@link SensorPort#failure()}.
  */
 public final class StackedPort {
   private final String name;
@@ -33,7 +32,7 @@ public final class StackedPort {
     this.givens = new double[maximumRows][];
     for (int i = 0; i < maximumRows; i++) {
       int rows = i + 1;
-      StackedSensor stacked = StackedSensor.of(sensor, rows, plan.stateSpace().dimension());
+      StackedSensor stacked = StackedSensor.of(sensor, rows, plan.stateSpace());
       ports[i] = new SensorPort(plan, stacked, name + ", " + rows + " stacked rows");
       measurements[i] = new double[rows * width];
       givens[i] = new double[rows * givenWidth];
@@ -74,38 +73,12 @@ public final class StackedPort {
     }
   }
 
-  /** {@return the innovation of the last update, row after row; read only} */
-  public double[] innovation() {
-    return last.innovation();
-  }
-
-  /** {@return the covariance of that innovation; read only} */
-  public DMatrixRMaj innovationCovariance() {
-    return last.innovationCovariance();
-  }
-
-  /** {@return the normalised innovation squared of the last update; see {@link SensorPort}} */
-  public double normalisedInnovationSquared() {
-    return last.normalisedInnovationSquared();
-  }
-
-  /** {@return the log-likelihood of the last update; see {@link SensorPort}} */
-  public double logLikelihood() {
-    return last.logLikelihood();
-  }
-
-  /** {@return the function evaluations of the last update} */
-  public int evaluations() {
-    return last.evaluations();
-  }
-
-  /** {@return the Jacobians formed in the last update} */
-  public int jacobians() {
-    return last.jacobians();
-  }
-
-  /** {@return why the last update was not applied, in words; empty if it was} */
-  public String failure() {
-    return last.failure();
+  /**
+   * What the last update has to tell: innovation, likelihood, evaluations, failure.
+   *
+   * @return the port for as many rows as the last update had
+   */
+  public SensorPort last() {
+    return last;
   }
 }

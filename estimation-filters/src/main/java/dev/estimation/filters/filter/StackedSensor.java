@@ -14,25 +14,27 @@ class StackedSensor implements SensorModel {
   final int givenWidth;
   private final SensorModel sensor;
   private final Space space;
+  private final double[] rowState;
   private final double[] rowGiven;
   private final double[] rowMeasurement;
   private final double[] rowNoise;
 
-  private StackedSensor(SensorModel sensor, int rows) {
+  private StackedSensor(SensorModel sensor, int rows, Space state) {
     this.sensor = sensor;
     this.rows = rows;
     this.width = sensor.measurementSpace().dimension();
     this.givenWidth = sensor.givenDimension();
     this.space = stacked(sensor.measurementSpace(), rows);
+    this.rowState = new double[state.storage()];
     this.rowGiven = new double[givenWidth];
     this.rowMeasurement = new double[width];
     this.rowNoise = new double[width * width];
   }
 
-  static StackedSensor of(SensorModel sensor, int rows, int stateDimension) {
+  static StackedSensor of(SensorModel sensor, int rows, Space state) {
     return sensor instanceof DifferentiableSensor differentiable
-        ? new Differentiable(differentiable, rows, stateDimension)
-        : new StackedSensor(sensor, rows);
+        ? new Differentiable(differentiable, rows, state)
+        : new StackedSensor(sensor, rows, state);
   }
 
   private static Space stacked(Space row, int rows) {
@@ -62,7 +64,7 @@ class StackedSensor implements SensorModel {
     for (int row = 0; row < rows; row++) {
       // The row arrives filled with the NaN that marks what was left out.
       System.arraycopy(measurement, row * width, rowMeasurement, 0, width);
-      sensor.measure(state, givenOf(row, given), rowMeasurement);
+      sensor.measure(copied(state), givenOf(row, given), rowMeasurement);
       System.arraycopy(rowMeasurement, 0, measurement, row * width, width);
     }
   }
@@ -72,7 +74,7 @@ class StackedSensor implements SensorModel {
     int size = rows * width;
     for (int row = 0; row < rows; row++) {
       Arrays.fill(rowNoise, 0);
-      sensor.measurementNoise(state, givenOf(row, given), rowNoise);
+      sensor.measurementNoise(copied(state), givenOf(row, given), rowNoise);
       for (int i = 0; i < width; i++) {
         int start = (row * width + i) * size + row * width;
         System.arraycopy(rowNoise, i * width, covariance, start, width);
@@ -85,6 +87,12 @@ class StackedSensor implements SensorModel {
     return sensor.structure();
   }
 
+  /** A copy for each row, since a model may write on it, against its contract. */
+  final double[] copied(double[] state) {
+    System.arraycopy(state, 0, rowState, 0, rowState.length);
+    return rowState;
+  }
+
   final double[] givenOf(int row, double[] given) {
     System.arraycopy(given, row * givenWidth, rowGiven, 0, givenWidth);
     return rowGiven;
@@ -95,10 +103,10 @@ class StackedSensor implements SensorModel {
     private final DifferentiableSensor sensor;
     private final double[] rowJacobian;
 
-    Differentiable(DifferentiableSensor sensor, int rows, int stateDimension) {
-      super(sensor, rows);
+    Differentiable(DifferentiableSensor sensor, int rows, Space state) {
+      super(sensor, rows, state);
       this.sensor = sensor;
-      this.rowJacobian = new double[width * stateDimension];
+      this.rowJacobian = new double[width * state.dimension()];
     }
 
     @Override
@@ -106,7 +114,7 @@ class StackedSensor implements SensorModel {
       int size = rowJacobian.length;
       for (int row = 0; row < rows; row++) {
         Arrays.fill(rowJacobian, 0);
-        sensor.measureJacobian(state, givenOf(row, given), rowJacobian);
+        sensor.measureJacobian(copied(state), givenOf(row, given), rowJacobian);
         System.arraycopy(rowJacobian, 0, jacobian, row * size, size);
       }
     }

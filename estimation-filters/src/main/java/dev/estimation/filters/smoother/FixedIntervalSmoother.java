@@ -47,8 +47,8 @@ public final class FixedIntervalSmoother {
    *
    * @param work what predicted it, read
    * @param estimate after the step, read
-   * @throws IllegalStateException if the prediction does not go from the last recorded time to that of
-   *     the estimate
+   * @throws IllegalStateException if the workspace did not move this estimate last, from the last
+   *     recorded time to its own
    */
   public void record(FilterWorkspace work, Estimate estimate) {
     RecordedStep last = steps.get(steps.size() - 1);
@@ -56,13 +56,13 @@ public final class FixedIntervalSmoother {
       steps.set(steps.size() - 1, last.updated(estimate));
       return;
     }
-    if (work.predictedFrom() != last.time()) {
+    DMatrixRMaj cross = new DMatrixRMaj(space.dimension(), space.dimension());
+    Moments predicted = work.prediction(estimate, cross);
+    if (work.movedFrom() != last.time()) {
       throw new IllegalStateException(
           "every prediction must be recorded: the last record is at t = " + last.time()
-              + " s, the prediction went from t = " + work.predictedFrom() + " s");
+              + " s, the prediction went from t = " + work.movedFrom() + " s");
     }
-    DMatrixRMaj cross = new DMatrixRMaj(space.dimension(), space.dimension());
-    Moments predicted = work.prediction(cross);
     steps.add(RecordedStep.after(predicted, cross, estimate));
   }
 

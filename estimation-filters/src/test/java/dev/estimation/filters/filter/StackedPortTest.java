@@ -49,7 +49,7 @@ class StackedPortTest {
     double[] all = {21, 19, 20.5};
     assertEquals(StepStatus.APPLIED, stacked.update(together, 3, all, new double[0]));
     // 1e-13: roundings on numbers of order 10 to 20.
-    assertWithin("log-likelihood", sum, stacked.logLikelihood(), 1e-13, 10);
+    assertWithin("log-likelihood", sum, stacked.last().logLikelihood(), 1e-13, 10);
     for (int i = 0; i < 2; i++) {
       assertWithin("mean", apart.mean(i), together.mean(i), 1e-13, 20);
       assertWithin("variance", apart.covariance(i, i), together.covariance(i, i), 1e-13, 16);
@@ -67,7 +67,7 @@ class StackedPortTest {
     double[] spare = DISTANCES.clone();
     spare[2] = Double.NaN;
     assertEquals(StepStatus.APPLIED, port.update(two, 2, spare, PLACES));
-    assertEquals(2, port.innovation().length);
+    assertEquals(2, port.last().innovation().length);
     double[] exact = {DISTANCES[0], DISTANCES[1]};
     StackedPort fresh = plan.workspace().port(new Models.Distance(), 2);
     assertEquals(StepStatus.APPLIED, fresh.update(one, 2, exact, PLACES));
@@ -101,11 +101,12 @@ class StackedPortTest {
     double[] places = PLACES.clone();
     places[4] = Double.NaN;
     assertEquals(StepStatus.INPUT_NOT_FINITE, port.update(estimate, 3, DISTANCES, places));
-    assertNames(port.failure(), "given[4] must be finite, got NaN", "Distance, 3 stacked rows");
+    assertNames(
+        port.last().failure(), "given[4] must be finite, got NaN", "Distance, 3 stacked rows");
     places = PLACES.clone();
     places[5] = -1;
     assertEquals(StepStatus.NOISE_NOT_VALID, port.update(estimate, 3, DISTANCES, places));
-    assertNames(port.failure(), "measurementNoise[1][1] must be finite and > 0, got -1.0");
+    assertNames(port.last().failure(), "measurementNoise[1][1] must be finite and > 0, got -1.0");
     assertArrayEquals(before, Bits.of(estimate, 2));
     assertEquals(StepStatus.APPLIED, port.update(estimate, 3, DISTANCES, PLACES));
   }

@@ -34,9 +34,9 @@ public final class IteratedUpdate {
     return new IteratedUpdate(false, 1e-9, 50);
   }
 
-  /** {@return steps with a line search, tolerance 1e-9 standard deviations, at most 200 rounds} */
+  /** {@return steps with a line search, tolerance 1e-9 standard deviations, at most 500 rounds} */
   public static IteratedUpdate lineSearch() {
-    return new IteratedUpdate(true, 1e-9, 200);
+    return new IteratedUpdate(true, 1e-9, 500);
   }
 
   /**

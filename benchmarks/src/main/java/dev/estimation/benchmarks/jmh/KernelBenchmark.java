@@ -1,5 +1,6 @@
 package dev.estimation.benchmarks.jmh;
 
+import dev.estimation.core.internal.Householder;
 import dev.estimation.core.internal.LowerFactor;
 import dev.estimation.core.internal.Products;
 import java.util.SplittableRandom;
@@ -7,6 +8,8 @@ import java.util.concurrent.TimeUnit;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.ejml.dense.row.decomposition.chol.CholeskyDecompositionInner_DDRM;
+import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
+import org.ejml.interfaces.decomposition.QRDecomposition;
 import org.openjdk.jmh.annotations.Benchmark;
 import org.openjdk.jmh.annotations.BenchmarkMode;
 import org.openjdk.jmh.annotations.Mode;
@@ -32,6 +35,11 @@ public class KernelBenchmark {
   private DMatrixRMaj column;
   private LowerFactor ours;
   private CholeskyDecompositionInner_DDRM theirs;
+  private DMatrixRMaj stack;
+  private DMatrixRMaj stackCopy;
+  private DMatrixRMaj triangle;
+  private double[] work;
+  private QRDecomposition<DMatrixRMaj> reduction;
 
   /** A random covariance of condition about 10 and a vector. */
   @Setup
@@ -50,6 +58,12 @@ public class KernelBenchmark {
     ours = new LowerFactor(n);
     theirs = new CholeskyDecompositionInner_DDRM(true);
     ours.factorDefinite(covariance);
+    stack =
+        new DMatrixRMaj(n + 2, n + 1, true, random.doubles((n + 2L) * (n + 1)).toArray());
+    stackCopy = new DMatrixRMaj(n + 2, n + 1);
+    triangle = new DMatrixRMaj(n + 1, n + 1);
+    work = new double[stack.getNumElements()];
+    reduction = DecompositionFactory_DDRM.qr(n + 2, n + 1);
   }
 
   /** The lower Cholesky factor, the covariance kept. */
@@ -93,5 +107,21 @@ public class KernelBenchmark {
     CommonOps_DDRM.multRows(vector, copy);
     CommonOps_DDRM.multTransA(covariance, copy, result);
     return result;
+  }
+
+  /** An (n + 2) x n matrix to triangular form, the reflections applied to one more column. */
+  @Benchmark
+  public double[] reduceOurs() {
+    System.arraycopy(stack.data, 0, work, 0, work.length);
+    Householder.triangularise(work, n + 2, n + 1, n);
+    return work;
+  }
+
+  /** The same by EJML, the column handed to the decomposition with the others. */
+  @Benchmark
+  public DMatrixRMaj reduceEjml() {
+    stackCopy.setTo(stack);
+    reduction.decompose(stackCopy);
+    return reduction.getR(triangle, true);
   }
 }

@@ -37,10 +37,12 @@ final class ReplayCommand implements Callable<Integer> {
       description = "repeatable: " + MethodParser.FORMS + "; KAPPA may be N-n, n the dimension")
   private List<String> methods = new ArrayList<>();
 
-  @Option(names = "--whole-state", description = "draw points over the whole state in updates too")
+  @Option(
+      names = "--whole-state",
+      description = "draw points over the whole state, not over active inputs alone")
   private boolean wholeState;
 
-  @Option(names = "--smooth", description = "follow each run by one of its smoothed track")
+  @Option(names = "--smooth", description = "also smooth each run and report that")
   private boolean smooth;
 
   @Option(

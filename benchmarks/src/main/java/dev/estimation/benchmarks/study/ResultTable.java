@@ -108,7 +108,7 @@ final class ResultTable {
     }
     out.println("NIS: normalised innovation squared of accepted rows; honest: about 1 per degree.");
     out.println(
-        "Time: wall clock of one pass over the steps, without warm-up; it is not a benchmark.");
+        "Time: wall clock of one pass over the steps, after one untimed; rough, not a benchmark.");
     out.flush();
   }
 

@@ -12,7 +12,7 @@ import picocli.CommandLine.Spec;
 /** The study program. Exit codes: 0 done, 2 bad input (told in one line), 1 a fault of its own. */
 @Command(
     name = "study",
-    description = "Weighs ways of nonlinear state estimation against each other.",
+    description = "Compares filters on a recorded log.",
     subcommands = ReplayCommand.class)
 public final class Study implements Runnable {
   @Spec

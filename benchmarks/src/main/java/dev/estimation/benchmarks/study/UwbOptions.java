@@ -7,16 +7,28 @@ import picocli.CommandLine.Option;
 
 /** The options that only the case {@code uwb} has. */
 final class UwbOptions {
-  @Option(names = "--lag", paramLabel = "S", description = "uwb: how late ranges are stamped (s)")
+  @Option(
+      names = "--lag",
+      paramLabel = "S",
+      description = "uwb: how late ranges are stamped (s; default 0.20)")
   private String lag;
 
-  @Option(names = "--height", paramLabel = "M", description = "uwb: height of the tag (m)")
+  @Option(
+      names = "--height",
+      paramLabel = "M",
+      description = "uwb: height of the tag (m; default 1.3)")
   private String height;
 
-  @Option(names = "--bias", paramLabel = "M", description = "uwb: added to every range (m)")
+  @Option(
+      names = "--bias",
+      paramLabel = "M",
+      description = "uwb: added to every range (m; default 0)")
   private String bias;
 
-  @Option(names = "--near-start", paramLabel = "X,Y", description = "uwb: start of variant near")
+  @Option(
+      names = "--near-start",
+      paramLabel = "X,Y",
+      description = "uwb: start of variant near (m; default -2.5,-4.0)")
   private String nearStart;
 
   UwbSettings settings() {

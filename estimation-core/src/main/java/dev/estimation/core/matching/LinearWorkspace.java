@@ -32,8 +32,8 @@ final class LinearWorkspace extends BaseWorkspace {
       Space input, Space output, VectorFunction function, double[] inputScales) {
     if (inputScales == null) {
       throw new IllegalArgumentException(
-          "linearisation wants a Jacobian and the function offers none; add one to its"
-              + " structure, or give input scales for central differences");
+          "linearisation wants a Jacobian and the function offers none; offer one, or give"
+              + " input scales for central differences");
     }
     return new CentralDifferences(input, output, function, inputScales);
   }

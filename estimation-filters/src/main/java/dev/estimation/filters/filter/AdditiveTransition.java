@@ -18,10 +18,15 @@ final class AdditiveTransition extends Transition {
 
   private AdditiveTransition(MotionModel model, MotionFunction function, MomentMatching matching) {
     super(
-        model.getClass().getSimpleName(),
+        FilterPlan.nameOf(model),
         model.controlDimension(),
         new NoiseMatrix("processNoise", model.stateSpace().dimension(), false),
-        matching.workspace(model.stateSpace(), model.stateSpace(), function));
+        FilterPlan.workspace(
+            matching,
+            model.stateSpace(),
+            model.stateSpace(),
+            function,
+            "motion model " + FilterPlan.nameOf(model) + "; its Jacobian: DifferentiableMotion"));
     this.model = model;
     this.function = function;
   }

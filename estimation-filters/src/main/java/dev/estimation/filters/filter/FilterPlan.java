@@ -1,7 +1,9 @@
 package dev.estimation.filters.filter;
 
+import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.Linearisation;
+import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.CubatureRule;
@@ -135,6 +137,22 @@ public final class FilterPlan {
 
   Space stateSpace() {
     return stateSpace;
+  }
+
+  /** A matching workspace; a refusal names the model. */
+  static MatchingWorkspace workspace(
+      MomentMatching matching, Space input, Space output, VectorFunction function, String model) {
+    try {
+      return matching.workspace(input, output, function);
+    } catch (IllegalArgumentException refused) {
+      throw new IllegalArgumentException(refused.getMessage() + " (" + model + ")", refused);
+    }
+  }
+
+  /** What messages call a model. */
+  static String nameOf(Object model) {
+    String simple = model.getClass().getSimpleName();
+    return simple.isEmpty() ? model.getClass().getName() : simple;
   }
 
   Transition transition() {

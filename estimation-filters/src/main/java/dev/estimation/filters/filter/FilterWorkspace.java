@@ -40,7 +40,7 @@ public final class FilterWorkspace {
    * @throws IllegalArgumentException if the plan's matching cannot serve the model
    */
   public SensorPort port(SensorModel sensor) {
-    return new SensorPort(plan, sensor, sensor.getClass().getSimpleName());
+    return new SensorPort(plan, sensor, FilterPlan.nameOf(sensor));
   }
 
   /**

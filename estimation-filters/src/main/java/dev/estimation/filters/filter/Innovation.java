@@ -22,7 +22,6 @@ final class Innovation {
   private final DMatrixRMaj covariance;
   private final double[] value;
   private double squared = Double.NaN;
-  private double logLikelihood = Double.NaN;
 
   Innovation(Space space, MatchingWorkspace matching) {
     this.space = space;
@@ -38,7 +37,6 @@ final class Innovation {
   void clear() {
     Arrays.fill(value, Double.NaN);
     squared = Double.NaN;
-    logLikelihood = Double.NaN;
   }
 
   /** Weighs a measurement against the prediction at which the matching stands; false if T is not definite. */
@@ -51,8 +49,6 @@ final class Innovation {
     }
     squares.reduce(matching.unitCrossCovariance(), unexplained, value);
     squared = squares.restSquared();
-    double logDeterminant = unexplained.logDeterminant() + squares.logDeterminant();
-    logLikelihood = -0.5 * (squared + logDeterminant + value.length * LOG_TWO_PI);
     return true;
   }
 
@@ -74,8 +70,13 @@ final class Innovation {
     return squared;
   }
 
+  /** Found when asked for, as logarithms are dear beside a small update. */
   double logLikelihood() {
-    return logLikelihood;
+    if (Double.isNaN(squared)) {
+      return Double.NaN;
+    }
+    double logDeterminant = unexplained.logDeterminant() + squares.logDeterminant();
+    return -0.5 * (squared + logDeterminant + value.length * LOG_TWO_PI);
   }
 
   /** Why {@link #weigh} was false. */

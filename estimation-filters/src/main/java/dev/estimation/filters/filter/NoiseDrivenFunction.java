@@ -20,7 +20,7 @@ final class NoiseDrivenFunction implements VectorFunction {
     this.model = model;
     if (model.noiseDimension() < 1) {
       throw new IllegalArgumentException("noise dimension must be 1 or more, got "
-          + model.noiseDimension() + " (motion model " + model.getClass().getSimpleName() + ")");
+          + model.noiseDimension() + " (motion model " + FilterPlan.nameOf(model) + ")");
     }
     int d = model.stateSpace().dimension();
     this.state = new double[model.stateSpace().storage()];

@@ -27,10 +27,16 @@ final class NoiseDrivenTransition extends Transition {
       AppendedReals space,
       MomentMatching matching) {
     super(
-        model.getClass().getSimpleName(),
+        FilterPlan.nameOf(model),
         model.controlDimension(),
         new NoiseMatrix("noiseCovariance", model.noiseDimension(), false),
-        matching.workspace(space, model.stateSpace(), function));
+        FilterPlan.workspace(
+            matching,
+            space,
+            model.stateSpace(),
+            function,
+            "motion model " + FilterPlan.nameOf(model)
+                + "; its Jacobians: DifferentiableNoiseDrivenMotion"));
     this.model = model;
     this.function = function;
     this.joint = new Moments(space);

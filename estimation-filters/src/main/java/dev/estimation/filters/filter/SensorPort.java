@@ -44,7 +44,12 @@ public final class SensorPort {
     this.space = sensor.measurementSpace();
     int m = space.dimension();
     this.gateLimit = plan.gateLimit(m);
-    this.matching = plan.matching().workspace(stateSpace, space, new SensorFunction(sensor));
+    this.matching = FilterPlan.workspace(
+        plan.matching(),
+        stateSpace,
+        space,
+        new SensorFunction(sensor),
+        "sensor model " + name + "; its Jacobian: DifferentiableSensor");
     this.noise = new NoiseMatrix("measurementNoise", m, true);
     this.innovation = new Innovation(space, matching);
     this.posterior = new Posterior(stateSpace, matching);

@@ -24,7 +24,7 @@ public final class StackedPort {
     if (maximumRows < 1) {
       throw new IllegalArgumentException("maximum rows must be 1 or more, got " + maximumRows);
     }
-    this.name = sensor.getClass().getSimpleName();
+    this.name = FilterPlan.nameOf(sensor);
     this.width = sensor.measurementSpace().storage();
     this.givenWidth = sensor.givenDimension();
     this.ports = new SensorPort[maximumRows];

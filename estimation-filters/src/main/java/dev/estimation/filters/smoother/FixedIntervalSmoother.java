@@ -17,17 +17,21 @@ import org.ejml.data.DMatrixRMaj;
  * of the state space. A component that is predicted with zero variance has gain zero.
  *
  * <p>Use: start with the first estimate; after each step (one prediction, then any number of updates)
- * call {@link #record}; at the end {@link #smooth()}. A step over no time replaces the last one. Memory:
+ * call {@link #record}; at the end {@link #smooth()}. A step over no time replaces the last one. One
+ * smoother follows one estimate; with one workspace for many tracks, record each before the next is
+ * predicted. Memory:
  * about 40 d^2 bytes a step, d the dimension. Cost of smoothing: about 4 d^3 operations a step.
  * <i>Confined to one thread.</i> Source: Rauch, Tung and Striebel 1965, AIAA Journal 3(8); Sarkka 2008,
  * <i>Unscented Rauch-Tung-Striebel smoother</i>, IEEE Transactions on Automatic Control 53(3).
  */
 public final class FixedIntervalSmoother {
+  private final Estimate track;
   private final Space space;
   private final List<RecordedStep> steps = new ArrayList<>();
 
-  private FixedIntervalSmoother(Space space) {
-    this.space = space;
+  private FixedIntervalSmoother(Estimate track) {
+    this.track = track;
+    this.space = track.space();
   }
 
   /**
@@ -37,7 +41,7 @@ public final class FixedIntervalSmoother {
    * @return the smoother
    */
   public static FixedIntervalSmoother startingAt(Estimate estimate) {
-    FixedIntervalSmoother smoother = new FixedIntervalSmoother(estimate.space());
+    FixedIntervalSmoother smoother = new FixedIntervalSmoother(estimate);
     smoother.steps.add(RecordedStep.first(estimate));
     return smoother;
   }
@@ -47,10 +51,15 @@ public final class FixedIntervalSmoother {
    *
    * @param work what predicted it, read
    * @param estimate after the step, read
-   * @throws IllegalStateException if the workspace did not move this estimate last, from the last
+   * @throws IllegalStateException if this is not the estimate that the smoother was started with, or
+   *     the workspace did not move it last, from the last
    *     recorded time to its own
    */
   public void record(FilterWorkspace work, Estimate estimate) {
+    if (estimate != track) {
+      throw new IllegalStateException(
+          "a smoother records the one estimate that it was started with, got another");
+    }
     RecordedStep last = steps.get(steps.size() - 1);
     if (estimate.time() == last.time()) {
       steps.set(steps.size() - 1, last.updated(estimate));

@@ -19,14 +19,14 @@ import org.junit.jupiter.params.provider.MethodSource;
 /** A step allocates nothing: prediction and update, every matching, several sizes. */
 class FilterAllocationTest {
   static List<Arguments> cases() {
-    return IntStream.of(2, 5, 7, 8, 12)
+    return IntStream.of(2, 5, 6, 7, 8, 12, 20)
         .boxed()
         .flatMap(n -> Matchings.all().stream().map(m -> Arguments.of(n, m)))
         .filter(FilterAllocationTest::isFeasible)
         .toList();
   }
 
-  /** Products over all of 12 axes have 531441 points, and are refused. */
+  /** Products over all of 12 axes have 531441 points, and are refused; of 20 even more. */
   private static boolean isFeasible(Arguments arguments) {
     boolean product = ((Named<?>) arguments.get()[1]).getName().startsWith("Gauss-Hermite");
     return !(product && (int) arguments.get()[0] > 8);

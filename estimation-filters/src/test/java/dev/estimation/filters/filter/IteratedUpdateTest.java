@@ -95,8 +95,8 @@ class IteratedUpdateTest {
         .workspace()
         .port(new Models.RangeBearing(0.01, 0.0004));
     SensorPort often = port(2, IteratedUpdate.undamped(), new Models.RangeBearing(0.01, 0.0004));
-    once.update(start(PLANE), SIGHT);
-    often.update(start(PLANE), SIGHT);
+    assertEquals(StepStatus.APPLIED, once.update(start(PLANE), SIGHT));
+    assertEquals(StepStatus.APPLIED, often.update(start(PLANE), SIGHT));
     assertEquals(once.normalisedInnovationSquared(), often.normalisedInnovationSquared());
     assertEquals(once.logLikelihood(), often.logLikelihood());
     assertArrayEquals(once.innovation(), often.innovation());

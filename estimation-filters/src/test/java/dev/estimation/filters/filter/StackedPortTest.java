@@ -84,8 +84,11 @@ class StackedPortTest {
     Estimate stacked = plan.start(0, prior());
     Estimate plain = plan.start(0, prior());
     double[] place = {40, 0, 0.09};
-    plan.workspace().port(new Models.Distance(), 5).update(stacked, 1, new double[] {29.1}, place);
-    plan.workspace().port(new Models.Distance()).update(plain, new double[] {29.1}, place);
+    double[] distance = {29.1};
+    StackedPort many = plan.workspace().port(new Models.Distance(), 5);
+    assertEquals(StepStatus.APPLIED, many.update(stacked, 1, distance, place));
+    SensorPort one = plan.workspace().port(new Models.Distance());
+    assertEquals(StepStatus.APPLIED, one.update(plain, distance, place));
     assertArrayEquals(Bits.of(plain, 2), Bits.of(stacked, 2));
   }
 

@@ -70,7 +70,8 @@ class SmootherTruthTest {
     for (ReferenceTable.Row row : rows) {
       assertEquals(StepStatus.APPLIED, work.predict(level, row.number("year")));
       if (!row.text(column).isEmpty()) {
-        gauge.update(level, new double[] {row.number(column)});
+        double[] flow = {row.number(column)};
+        assertEquals(StepStatus.APPLIED, gauge.update(level, flow));
       }
       smoother.record(work, level);
     }
@@ -125,7 +126,8 @@ class SmootherTruthTest {
     FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(estimate);
     for (int k = 1; k <= data.size(); k++) {
       assertEquals(StepStatus.APPLIED, work.predict(estimate, k * dt));
-      port.update(estimate, new double[] {data.get(k - 1).number("y1")});
+      double[] measurement = {data.get(k - 1).number("y1")};
+      assertEquals(StepStatus.APPLIED, port.update(estimate, measurement));
       smoother.record(work, estimate);
     }
     SmoothedTrack track = smoother.smooth();

@@ -34,4 +34,22 @@ public final class Matchings {
         Named.of("cubature", PointMatching.of(CubatureRule.degreeThree())),
         Named.of("Gauss-Hermite 3", PointMatching.of(GaussHermiteRule.product(3))));
   }
+
+  /**
+   * The evaluations of one call: one with a Jacobian, 3^k for the product of 3 nodes, 2 k + 1 for the
+   * others; k counts the inputs that a function reads, or all of them.
+   */
+  public static int evaluations(Named<MomentMatching> matching, int active, int whole) {
+    String name = matching.getName();
+    if (isLinear(matching)) {
+      return 1;
+    }
+    int carried = name.endsWith("whole state") ? whole : active;
+    return name.startsWith("Gauss-Hermite") ? (int) Math.pow(3, carried) : 2 * carried + 1;
+  }
+
+  /** Whether it takes a Jacobian instead of points. */
+  public static boolean isLinear(Named<MomentMatching> matching) {
+    return matching.getName().startsWith("linearisation");
+  }
 }

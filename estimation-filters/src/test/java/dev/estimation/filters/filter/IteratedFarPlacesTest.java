@@ -98,7 +98,13 @@ class IteratedFarPlacesTest {
   }
 
   /** The distances to places in space, variance 1 m^2 each. */
-  private record Distances(double[][] places) implements DifferentiableSensor {
+  private static final class Distances implements DifferentiableSensor {
+    private final double[][] places;
+
+    Distances(double[][] places) {
+      this.places = places;
+    }
+
     @Override
     public Space measurementSpace() {
       return Space.reals(PLACES);

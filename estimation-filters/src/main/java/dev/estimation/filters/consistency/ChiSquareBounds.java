@@ -28,7 +28,7 @@ public final class ChiSquareBounds {
   /**
    * The two-sided bounds of one normalised squared error.
    *
-   * @param probability of staying inside, in (0, 1); each side is left with half the rest
+   * @param probability of staying inside, from 1e-12 to 1 - 1e-12; each side is left with half the rest
    * @param degreesOfFreedom 1 or more
    * @return the bounds
    */
@@ -39,7 +39,7 @@ public final class ChiSquareBounds {
   /**
    * The two-sided bounds of the average of independent normalised squared errors.
    *
-   * @param probability of staying inside, in (0, 1)
+   * @param probability of staying inside, from 1e-12 to 1 - 1e-12
    * @param degreesOfFreedom of each, 1 or more
    * @param count how many are averaged, 1 or more
    * @return the bounds
@@ -60,7 +60,7 @@ public final class ChiSquareBounds {
    * The limit that a chi-square variable stays below with the given probability: the gate of a
    * normalised innovation squared.
    *
-   * @param probability in (0, 1)
+   * @param probability from 1e-12 to 1 - 1e-12
    * @param degreesOfFreedom 1 or more
    * @return the limit
    */

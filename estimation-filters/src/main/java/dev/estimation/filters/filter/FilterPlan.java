@@ -111,7 +111,7 @@ public final class FilterPlan {
    * This plan with a gate on updates: a measurement whose normalised innovation squared is above the
    * chi-square quantile of the given probability is rejected.
    *
-   * @param probability of passing for an honest filter, in (0, 1), e.g. 0.999
+   * @param probability of passing for an honest filter, from 1e-12 to 1 - 1e-12, e.g. 0.999
    * @return the plan with a gate
    */
   public FilterPlan withGate(double probability) {

@@ -124,6 +124,7 @@ public final class FilterWorkspace {
    * @param cross filled with the cross-covariance of the state before and after, d x d
    * @return the predicted moments; read only, valid until the next prediction
    * @throws IllegalStateException if this workspace did not move the estimate last, to its time
+   * @throws IllegalArgumentException if {@code cross} is not d x d
    */
   public Moments prediction(Estimate estimate, DMatrixRMaj cross) {
     int d = plan.stateSpace().dimension();

@@ -65,6 +65,8 @@ public final class SensorPort {
    * @param estimate updated if the status is {@code APPLIED}
    * @param measurement read
    * @return how it ended
+   * @throws IllegalArgumentException if the measurement or the estimate has the wrong size, or the
+   *     sensor wants something given
    */
   public StepStatus update(Estimate estimate, double[] measurement) {
     return update(estimate, measurement, nothing);
@@ -151,7 +153,7 @@ public final class SensorPort {
     return innovation.value();
   }
 
-  /** {@return the covariance of that innovation; read only} */
+  /** {@return the covariance of that innovation, valid where it is not NaN; read only} */
   public DMatrixRMaj innovationCovariance() {
     return innovation.covariance();
   }

@@ -9,7 +9,7 @@ import org.ejml.data.DMatrixRMaj;
  * measurement that s explains and T = L L' the covariance of the rest, the least squares of L^-1 (y - W'
  * s) and s. Solved by an orthogonal reduction of [L^-1 W', L^-1 y; I, 0] to [R, z]: s = R^-1 z, of
  * covariance (R'R)^-1. No covariance is subtracted from another, so a prior of 100 km and a
- * measurement of 1 m lose no digits. Confined to one thread.
+ * measurement of 1 m keep their digits. Confined to one thread.
  */
 final class UnitLeastSquares {
   private final int k;

@@ -8,7 +8,8 @@ import java.lang.management.ManagementFactory;
  *
  * <p>The JVM itself allocates a few bytes now and then on behalf of a thread, when it compiles or
  * links code. What the action allocates is in every window of many calls, so the smallest of
- * several windows is taken; an object at each call is at least 16 bytes a call in all of them.
+ * several windows is taken; an object at each call is at least 16 bytes a call in all of them. Five
+ * windows were once too few: on a loaded machine the compiler was still at work in all of them.
  */
 public final class AllocationMeter {
   private static final ThreadMXBean THREADS = (ThreadMXBean) ManagementFactory.getThreadMXBean();
@@ -16,7 +17,7 @@ public final class AllocationMeter {
   private AllocationMeter() {}
 
   /**
-   * The bytes allocated by each call, in the best of 5 windows.
+   * The bytes allocated by each call, in the best of up to 50 windows; the first without any ends it.
    *
    * @param warmUp calls made before, so that classes are loaded and code is compiled
    * @param calls calls in a window
@@ -29,7 +30,7 @@ public final class AllocationMeter {
     THREADS.setThreadAllocatedMemoryEnabled(true);
     bytes(warmUp, action);
     long fewest = Long.MAX_VALUE;
-    for (int window = 0; window < 5; window++) {
+    for (int window = 0; window < 50 && fewest > 0; window++) {
       fewest = Math.min(fewest, bytes(calls, action));
     }
     return (double) fewest / calls;

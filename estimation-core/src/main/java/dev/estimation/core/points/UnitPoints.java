@@ -24,6 +24,7 @@ public final class UnitPoints {
   private final int[] axes;
   private final double[] coordinates;
   private final boolean sample;
+  private final int degree;
 
   private UnitPoints(
       int dimension,
@@ -40,6 +41,33 @@ public final class UnitPoints {
     this.starts = new int[weights.length + 1];
     this.axes = new int[entries];
     this.coordinates = new double[entries];
+    this.degree = 0;
+  }
+
+  private UnitPoints(UnitPoints other, int degree) {
+    this.sample = other.sample;
+    this.dimension = other.dimension;
+    this.centreMeanWeight = other.centreMeanWeight;
+    this.centreCovarianceWeight = other.centreCovarianceWeight;
+    this.weights = other.weights;
+    this.starts = other.starts;
+    this.axes = other.axes;
+    this.coordinates = other.coordinates;
+    this.degree = degree;
+  }
+
+  /**
+   * {@return these points, said to be exact}
+   *
+   * @param total the degree up to which the mean of every polynomial is exact; 0 or more
+   */
+  public UnitPoints exactTo(int total) {
+    return new UnitPoints(this, total);
+  }
+
+  /** {@return the total degree up to which means of polynomials are exact; 0 unless it was said} */
+  public int degree() {
+    return degree;
   }
 
   /**

@@ -1,5 +1,6 @@
 package dev.estimation.testing;
 
+import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.space.Space;
@@ -50,6 +51,16 @@ public final class RandomGaussians {
         result.set(j, i, value);
       }
     }
+    return result;
+  }
+
+  /** A matrix as the step path takes it; null stays null. */
+  public static Covariance noise(DMatrixRMaj matrix) {
+    if (matrix == null) {
+      return null;
+    }
+    Covariance result = new Covariance(matrix.numRows);
+    result.changeMatrix().setTo(matrix);
     return result;
   }
 

@@ -32,13 +32,14 @@ public class KernelBenchmark {
   private DMatrixRMaj result;
   private DMatrixRMaj copy;
   private double[] vector;
-  private DMatrixRMaj column;
   private LowerFactor ours;
   private CholeskyDecompositionInner_DDRM theirs;
   private DMatrixRMaj stack;
   private DMatrixRMaj stackCopy;
   private DMatrixRMaj triangle;
   private double[] work;
+  private double[] block;
+  private double[] blockWork;
   private QRDecomposition<DMatrixRMaj> reduction;
 
   /** A random covariance of condition about 10 and a vector. */
@@ -54,7 +55,6 @@ public class KernelBenchmark {
     result = new DMatrixRMaj(n, n);
     copy = new DMatrixRMaj(n, n);
     vector = random.doubles(n).toArray();
-    column = DMatrixRMaj.wrap(n, 1, vector.clone());
     ours = new LowerFactor(n);
     theirs = new CholeskyDecompositionInner_DDRM(true);
     ours.factorDefinite(covariance);
@@ -62,7 +62,9 @@ public class KernelBenchmark {
         new DMatrixRMaj(n + 2, n + 1, true, random.doubles((n + 2L) * (n + 1)).toArray());
     stackCopy = new DMatrixRMaj(n + 2, n + 1);
     triangle = new DMatrixRMaj(n + 1, n + 1);
-    work = new double[stack.getNumElements()];
+    work = new double[(n + 1) * n];
+    block = random.doubles((n + 1) * 2L).toArray();
+    blockWork = new double[block.length];
     reduction = DecompositionFactory_DDRM.qr(n + 2, n + 1);
   }
 
@@ -79,45 +81,37 @@ public class KernelBenchmark {
     return theirs.decompose(copy);
   }
 
-  /** The lower triangle plus w v v'. */
+  /** The lower triangle of A D A', A square, D diagonal. */
   @Benchmark
-  public double[] squareOurs() {
-    Products.addSquare(0.5, vector, result.data);
+  public double[] productOurs() {
+    Products.fillOuterProduct(covariance.data, vector, n, n, result.data);
     return result.data;
   }
 
-  /** The whole matrix plus w v v', the only form there is. */
+  /** A D A', whole, from a copy of A whose columns are scaled. */
   @Benchmark
-  public DMatrixRMaj squareEjml() {
-    CommonOps_DDRM.multAddTransB(0.5, column, column, result);
-    return result;
-  }
-
-  /** The lower triangle of A' D A, A square, D diagonal. */
-  @Benchmark
-  public double[] innerOurs() {
-    Products.fillInnerProduct(covariance.data, vector, n, n, result.data);
-    return result.data;
-  }
-
-  /** A' D A, whole, from a copy of A whose rows are scaled. */
-  @Benchmark
-  public DMatrixRMaj innerEjml() {
+  public DMatrixRMaj productEjml() {
     copy.setTo(covariance);
-    CommonOps_DDRM.multRows(vector, copy);
-    CommonOps_DDRM.multTransA(covariance, copy, result);
+    CommonOps_DDRM.multCols(copy, vector);
+    CommonOps_DDRM.multTransB(covariance, copy, result);
     return result;
   }
 
-  /** An (n + 2) x n matrix to triangular form, the reflections applied to one more column. */
+  /** [I A] to [U 0], A n x 2, the reflections applied to one more row. */
   @Benchmark
   public double[] reduceOurs() {
-    System.arraycopy(stack.data, 0, work, 0, work.length);
-    Householder.triangularise(work, n + 2, n + 1, n);
+    for (int i = 0; i < n * n; i++) {
+      work[i] = i % (n + 1) == 0 ? 1 : 0;
+    }
+    for (int i = n * n; i < work.length; i++) {
+      work[i] = 0;
+    }
+    System.arraycopy(block, 0, blockWork, 0, block.length);
+    Householder.reduceUpper(work, n, blockWork, n + 1, 2);
     return work;
   }
 
-  /** The same by EJML, the column handed to the decomposition with the others. */
+  /** The same by EJML, which knows no zeros: (n + 2) x (n + 1), the row handed over with the others. */
   @Benchmark
   public DMatrixRMaj reduceEjml() {
     stackCopy.setTo(stack);

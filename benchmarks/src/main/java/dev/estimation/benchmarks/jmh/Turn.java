@@ -1,5 +1,6 @@
 package dev.estimation.benchmarks.jmh;
 
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
 
@@ -11,10 +12,17 @@ final class Turn implements DifferentiableMotion {
   private static final double STRAIGHT = 1e-9;
 
   private final Space space = Space.reals(5);
+  private final Structure structure = Structure.UNKNOWN.withLinearInputs(0, 1, 2, 3);
 
   @Override
   public Space stateSpace() {
     return space;
+  }
+
+  /** Linear in all but the turn rate. */
+  @Override
+  public Structure structure() {
+    return structure;
   }
 
   @Override

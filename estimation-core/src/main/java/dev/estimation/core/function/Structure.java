@@ -11,6 +11,10 @@ import java.util.Optional;
  *   <li><i>Active inputs</i>: the components of the input that the function reads. Points are drawn
  *       over these alone; how the rest varies with the output follows by regression, exactly for
  *       Gaussian inputs.
+ *   <li><i>Linear inputs</i>: those of the active inputs in which the function is linear once the others are
+ *       given, g(u) = A(u_a) u_b + c(u_a). Points are drawn for u_a alone and the rest follows in closed form
+ *       (Morelande and Moran 2007, from memory): a coordinated turn, linear given the turn rate, costs what a
+ *       function of one input costs.
  *   <li><i>Jacobian</i>: its partial derivatives.
  * </ul>
  *
@@ -18,13 +22,15 @@ import java.util.Optional;
  */
 public final class Structure {
   /** Nothing is known: every input may matter, and there is no Jacobian. */
-  public static final Structure UNKNOWN = new Structure(null, null);
+  public static final Structure UNKNOWN = new Structure(null, new int[0], null);
 
   private final int[] activeInputs;
+  private final int[] linearInputs;
   private final Jacobian jacobian;
 
-  private Structure(int[] activeInputs, Jacobian jacobian) {
+  private Structure(int[] activeInputs, int[] linearInputs, Jacobian jacobian) {
     this.activeInputs = activeInputs;
+    this.linearInputs = linearInputs;
     this.jacobian = jacobian;
   }
 
@@ -38,12 +44,22 @@ public final class Structure {
     if (indices.length == 0) {
       throw new IllegalArgumentException("a function must read at least 1 input, got 0");
     }
-    return new Structure(indices.clone(), jacobian);
+    return new Structure(indices.clone(), linearInputs, jacobian);
   }
 
-  /** {@return this structure with every input active} */
+  /**
+   * This structure with the inputs in which the function is linear once the others are given.
+   *
+   * @param indices distinct, of active inputs; none if there are none; copied
+   * @return a structure that says so
+   */
+  public Structure withLinearInputs(int... indices) {
+    return new Structure(activeInputs, indices.clone(), jacobian);
+  }
+
+  /** {@return this structure with every input active, and said to be linear in none} */
   public Structure withAllInputsActive() {
-    return new Structure(null, jacobian);
+    return new Structure(null, new int[0], jacobian);
   }
 
   /**
@@ -52,7 +68,7 @@ public final class Structure {
    * @param derivatives of the function, over all inputs
    */
   public Structure withJacobian(Jacobian derivatives) {
-    return new Structure(activeInputs, derivatives);
+    return new Structure(activeInputs, linearInputs, derivatives);
   }
 
   /**
@@ -70,6 +86,32 @@ public final class Structure {
     }
     Checks.distinctIndices("active inputs", activeInputs, dimension);
     return activeInputs.clone();
+  }
+
+  /** {@return the inputs in which the function is linear once the others are given, a copy} */
+  public int[] linearInputs() {
+    return linearInputs.clone();
+  }
+
+  /**
+   * The active inputs that are not linear, in their order.
+   *
+   * @param dimension the dimension of the input space
+   * @return their indices
+   * @throws IllegalArgumentException if a linear input is not active or comes twice, or as for {@link
+   *     #activeInputs}
+   */
+  public int[] nonlinearInputs(int dimension) {
+    int[] active = activeInputs(dimension);
+    Checks.distinctIndices("linear inputs", linearInputs, dimension);
+    int[] rest = Arrays.stream(active)
+        .filter(index -> Arrays.stream(linearInputs).noneMatch(linear -> linear == index))
+        .toArray();
+    if (rest.length + linearInputs.length != active.length) {
+      throw new IllegalArgumentException("linear inputs must be active inputs, got "
+          + Arrays.toString(linearInputs) + " of active " + Arrays.toString(active));
+    }
+    return rest;
   }
 
   /** {@return the Jacobian, where one is known} */

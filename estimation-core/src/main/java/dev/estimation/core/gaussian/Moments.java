@@ -1,7 +1,6 @@
 package dev.estimation.core.gaussian;
 
 import dev.estimation.core.internal.Checks;
-import dev.estimation.core.internal.LowerFactor;
 import dev.estimation.core.space.Space;
 import org.ejml.data.DMatrixRMaj;
 
@@ -9,18 +8,14 @@ import org.ejml.data.DMatrixRMaj;
  * A mutable mean and covariance of fixed size, for the step path.
  *
  * <p>Shapes: mean of {@code space.storage()} numbers, covariance d x d with d = {@code
- * space.dimension()}. The lower Cholesky factor of the covariance is kept once it has been asked
- * for, so that the step that checks a covariance saves the next step the work.
+ * space.dimension()}. Covariance or lower factor is filled; the other is made when it is asked for, and kept.
  *
- * <p><i>Confined to one thread.</i> Allocates only when built. Cost of a factor: d^3 / 6
- * multiplications, d square roots.
+ * <p><i>Confined to one thread.</i> Allocates only when built. Cost: see {@link Covariance}.
  */
 public final class Moments {
   private final Space space;
   private final double[] mean;
-  private final DMatrixRMaj covariance;
-  private final LowerFactor factor;
-  private boolean factored;
+  private final Covariance covariance;
 
   /**
    * Moments in the given space, all zero.
@@ -30,8 +25,7 @@ public final class Moments {
   public Moments(Space space) {
     this.space = space;
     this.mean = new double[space.storage()];
-    this.covariance = new DMatrixRMaj(space.dimension(), space.dimension());
-    this.factor = new LowerFactor(space.dimension());
+    this.covariance = new Covariance(space.dimension());
   }
 
   /** {@return where the vector lives} */
@@ -46,7 +40,7 @@ public final class Moments {
 
   /** {@return the covariance: the matrix itself, to be read only, valid until the next change} */
   public DMatrixRMaj covariance() {
-    return covariance;
+    return covariance.matrix();
   }
 
   /** {@return the mean, to be filled} */
@@ -56,8 +50,17 @@ public final class Moments {
 
   /** {@return the covariance, to be filled entirely and symmetrically; forgets the factor} */
   public DMatrixRMaj changeCovariance() {
-    factored = false;
+    return covariance.changeMatrix();
+  }
+
+  /** {@return the covariance with its factor, to be changed by filling either} */
+  public Covariance changeCovarianceOrFactor() {
     return covariance;
+  }
+
+  /** {@return the lower factor, to be filled as {@link Covariance#changeFactor()} says} */
+  public DMatrixRMaj changeFactor() {
+    return covariance.changeFactor();
   }
 
   /**
@@ -81,11 +84,7 @@ public final class Moments {
   public void set(Moments other) {
     Checks.length("mean", other.mean, mean.length);
     System.arraycopy(other.mean, 0, mean, 0, mean.length);
-    System.arraycopy(other.covariance.data, 0, covariance.data, 0, covariance.getNumElements());
-    factored = other.factored;
-    if (factored) {
-      factor.set(other.factor);
-    }
+    covariance.set(other.covariance);
   }
 
   /**
@@ -95,30 +94,27 @@ public final class Moments {
    *     #factorFailure()} then says where
    */
   public boolean factor() {
-    if (!factored) {
-      factored = factor.factorSemidefinite(covariance);
-    }
-    return factored;
+    return covariance.factor();
   }
 
   /** {@return the lower factor L, with covariance = L L'; read only, valid after {@link #factor()} was true} */
   public DMatrixRMaj lowerFactor() {
-    return factor.columns();
+    return covariance.lowerFactor();
   }
 
   /** {@return the pivot that made the last {@link #factor()} fail, from 0; -1 if none did} */
   public int failedPivot() {
-    return factor.failedPivot();
+    return covariance.failedPivot();
   }
 
   /** {@return the value of that pivot} */
   public double failedValue() {
-    return factor.failedValue();
+    return covariance.failedValue();
   }
 
   /** {@return which pivot made the last {@link #factor()} fail, and its value} */
   public String factorFailure() {
-    return factor.failure();
+    return covariance.failure();
   }
 
   /**
@@ -128,6 +124,6 @@ public final class Moments {
    * @throws IllegalArgumentException if they are not those of a Gaussian
    */
   public Gaussian toGaussian() {
-    return Gaussian.of(mean, covariance);
+    return Gaussian.of(mean, covariance());
   }
 }

@@ -203,6 +203,39 @@ public final class LowerFactor {
   }
 
   /**
+   * Takes what was filled into {@link #columns()}, a lower triangular matrix in this object's order, for the
+   * factor. Wants every diagonal entry to be 0 or more, and finite numbers.
+   *
+   * @return whether that is so
+   */
+  public boolean accept() {
+    failedPivot = -1;
+    for (int q = 0; q < size; q++) {
+      int row = order[q] * size;
+      double root = columns.data[row + q];
+      double scale = 0;
+      for (int c = 0; c <= q; c++) {
+        scale += Math.abs(columns.data[row + c]);
+      }
+      if (!(root >= 0 && scale <= Double.MAX_VALUE)) {
+        return fail(q, root);
+      }
+      inverse[q] = root > size * EPSILON * scale ? 1 / root : 0;
+    }
+    return true;
+  }
+
+  /** {@return whether no pivot is zero, of a factor that is there} */
+  public boolean isDefinite() {
+    for (int q = 0; q < size; q++) {
+      if (inverse[q] == 0) {
+        return fail(q, 0);
+      }
+    }
+    return true;
+  }
+
+  /**
    * Copies the factor of another of the same size and order.
    *
    * @param other copied from

@@ -11,79 +11,75 @@ public final class Products {
   private Products() {}
 
   /**
-   * Adds weight v v' to the lower triangle of a symmetric matrix.
+   * The lower triangle of A D A', D diagonal.
    *
-   * @param weight any number
-   * @param v m numbers, read
-   * @param lower m x m, updated on and below the diagonal
-   */
-  public static void addSquare(double weight, double[] v, double[] lower) {
-    int m = v.length;
-    for (int r = 0; r < m; r++) {
-      double weighted = weight * v[r];
-      for (int c = 0; c <= r; c++) {
-        lower[r * m + c] += weighted * v[c];
-      }
-    }
-  }
-
-  /**
-   * The lower triangle of A' D A, D diagonal.
-   *
-   * @param a k x m, read
-   * @param weights the k numbers of D, read
-   * @param k rows
-   * @param m columns
+   * @param a m x p, read
+   * @param weights the p numbers of D, read
+   * @param m rows
+   * @param p columns
    * @param lower m x m, filled on and below the diagonal
    */
-  public static void fillInnerProduct(double[] a, double[] weights, int k, int m, double[] lower) {
-    int even = m & ~1;
-    for (int r = 0; r < even; r += 2) {
-      for (int c = 0; c <= r; c += 2) {
+  public static void fillOuterProduct(double[] a, double[] weights, int m, int p, double[] lower) {
+    int r = 0;
+    for (; r + 1 < m; r += 2) {
+      int first = r * p;
+      int second = first + p;
+      int c = 0;
+      for (; c < r; c += 2) {
+        int left = c * p;
+        int right = left + p;
         double upperLeft = 0;
         double upperRight = 0;
         double lowerLeft = 0;
         double lowerRight = 0;
-        for (int i = 0, at = 0; i < k; i++, at += m) {
-          double first = weights[i] * a[at + r];
-          double second = weights[i] * a[at + r + 1];
-          double left = a[at + c];
-          double right = a[at + c + 1];
-          upperLeft += first * left;
-          upperRight += first * right;
-          lowerLeft += second * left;
-          lowerRight += second * right;
+        for (int i = 0; i < p; i++) {
+          double upper = weights[i] * a[first + i];
+          double below = weights[i] * a[second + i];
+          upperLeft += upper * a[left + i];
+          upperRight += upper * a[right + i];
+          lowerLeft += below * a[left + i];
+          lowerRight += below * a[right + i];
         }
         lower[r * m + c] = upperLeft;
+        lower[r * m + c + 1] = upperRight;
         lower[(r + 1) * m + c] = lowerLeft;
         lower[(r + 1) * m + c + 1] = lowerRight;
-        if (c < r) {
-          lower[r * m + c + 1] = upperRight;
-        }
       }
+      double upperLeft = 0;
+      double lowerLeft = 0;
+      double lowerRight = 0;
+      for (int i = 0; i < p; i++) {
+        double upper = weights[i] * a[first + i];
+        upperLeft += upper * a[first + i];
+        lowerLeft += upper * a[second + i];
+        lowerRight += weights[i] * a[second + i] * a[second + i];
+      }
+      lower[r * m + r] = upperLeft;
+      lower[(r + 1) * m + r] = lowerLeft;
+      lower[(r + 1) * m + r + 1] = lowerRight;
     }
-    if (even < m) {
-      fillLastRow(a, weights, k, m, lower);
+    if (r < m) {
+      fillLastRow(a, weights, m, p, lower);
     }
   }
 
-  private static void fillLastRow(double[] a, double[] weights, int k, int m, double[] lower) {
-    int r = m - 1;
-    for (int c = 0; c < r; c += 2) {
+  private static void fillLastRow(double[] a, double[] weights, int m, int p, double[] lower) {
+    int last = (m - 1) * p;
+    for (int c = 0; c + 1 < m; c += 2) {
       double left = 0;
       double right = 0;
-      for (int i = 0, at = 0; i < k; i++, at += m) {
-        double last = weights[i] * a[at + r];
-        left += last * a[at + c];
-        right += last * a[at + c + 1];
+      for (int i = 0; i < p; i++) {
+        double weighted = weights[i] * a[last + i];
+        left += weighted * a[c * p + i];
+        right += weighted * a[c * p + p + i];
       }
-      lower[r * m + c] = left;
-      lower[r * m + c + 1] = right;
+      lower[(m - 1) * m + c] = left;
+      lower[(m - 1) * m + c + 1] = right;
     }
     double sum = 0;
-    for (int i = 0, at = r; i < k; i++, at += m) {
-      sum += weights[i] * a[at] * a[at];
+    for (int i = 0; i < p; i++) {
+      sum += weights[i] * a[last + i] * a[last + i];
     }
-    lower[r * m + r] = sum;
+    lower[m * m - 1] = sum;
   }
 }

@@ -1,79 +1,115 @@
 package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Covariance;
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.space.Space;
 import org.ejml.data.DMatrixRMaj;
 
-/** What all matchings share: checks, the factor of the input, the image of the centre, the results. */
+/**
+ * What all matchings share: checks, the factor of the input, the image of the centre, the results. A
+ * matching gives the output's covariance and what regression leaves of it as weighted columns, so that both
+ * forms follow from one description.
+ */
 abstract class BaseWorkspace implements MatchingWorkspace {
   final Space inputSpace;
   final Space outputSpace;
+  final Form form;
   final ActiveFactor active;
   final GuardedFunction function;
-  final DMatrixRMaj cross;
   final double[] centre;
   int jacobians;
+  private final DMatrixRMaj cross;
   private final Moments output;
-  private MatchingStatus status = MatchingStatus.MATCHED;
+  private final Covariance noise;
+  private final Covariance unexplained;
   private final double[] handed;
-  final DMatrixRMaj noise;
+  private boolean noisy;
+  private boolean crossKnown;
+  private boolean unexplainedKnown;
+  private MatchingStatus status = MatchingStatus.MATCHED;
   private int failedIndex;
   private double failedValue;
 
-  BaseWorkspace(Space inputSpace, Space outputSpace, VectorFunction function) {
+  /** A workspace over inputs in the given order; {@code inputs} are those that the function reads. */
+  BaseWorkspace(
+      Space inputSpace, Space outputSpace, VectorFunction function, int[] inputs, Form form) {
     this.inputSpace = inputSpace;
     this.outputSpace = outputSpace;
-    int dimension = inputSpace.dimension();
-    this.active = new ActiveFactor(function.structure().activeInputs(dimension), dimension);
+    this.form = form;
+    int m = outputSpace.dimension();
+    this.active = new ActiveFactor(inputs, inputSpace.dimension(), form);
     this.function = new GuardedFunction(function);
-    this.cross = new DMatrixRMaj(active.count(), outputSpace.dimension());
+    this.cross = new DMatrixRMaj(active.count(), m);
     this.centre = new double[outputSpace.storage()];
     this.output = new Moments(outputSpace);
     this.handed = new double[inputSpace.storage()];
-    this.noise = new DMatrixRMaj(outputSpace.dimension(), outputSpace.dimension());
+    this.noise = new Covariance(m);
+    this.unexplained = new Covariance(m);
   }
 
   @Override
-  public final MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise) {
+  public final MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise) {
     checkShapes(input, additiveNoise);
     function.reset();
     jacobians = 0;
+    crossKnown = false;
+    unexplainedKnown = false;
     status = MatchingStatus.MATCHED;
     status = carryChecked(input, given, additiveNoise);
     return status;
   }
 
-  private MatchingStatus carryChecked(Moments input, double[] given, DMatrixRMaj additiveNoise) {
-    if (!isFinite(input.mean())) {
+  private MatchingStatus carryChecked(Moments input, double[] given, Covariance additiveNoise) {
+    double[] mean = input.mean();
+    if (!Checks.allFinite(mean)) {
+      failedIndex = Checks.firstNotFinite(mean);
+      failedValue = mean[failedIndex];
       return MatchingStatus.INPUT_NOT_FINITE;
     }
-    if (additiveNoise != null && !isFinite(additiveNoise)) {
-      return MatchingStatus.NOISE_NOT_FINITE;
+    noisy = additiveNoise != null;
+    if (noisy && form == Form.SQUARE_ROOT && !additiveNoise.factor()) {
+      return faultOf(additiveNoise, MatchingStatus.NOISE_NOT_DEFINITE);
     }
     if (!active.factor(input)) {
       return MatchingStatus.INPUT_NOT_DEFINITE;
     }
-    if (!function.evaluate(copied(input.mean()), given, centre)) {
+    if (!function.evaluate(copied(mean), given, centre)) {
       return MatchingStatus.FUNCTION_NOT_FINITE;
     }
-    double[] mean = output.changeMean();
-    DMatrixRMaj covariance = output.changeCovariance();
-    MatchingStatus matched = match(input.mean(), given, mean, covariance.data);
+    MatchingStatus matched = match(mean, given, output.changeMean());
     if (matched != MatchingStatus.MATCHED) {
       return matched;
     }
-    if (additiveNoise == null) {
-      noise.zero();
-    } else {
-      noise.setTo(additiveNoise);
+    if (noisy) {
+      noise.set(additiveNoise);
     }
-    addNoise(covariance);
-    return Checks.allFinite(mean) && SymmetricMatrix.allFinite(covariance)
-        ? MatchingStatus.MATCHED
-        : MatchingStatus.OUTPUT_NOT_FINITE;
+    boolean definite = columns().fill(noisy ? noise : null, output.changeCovarianceOrFactor());
+    if (!Checks.allFinite(output.mean()) || !isFinite(output)) {
+      return noisy
+          ? faultOf(additiveNoise, MatchingStatus.OUTPUT_NOT_FINITE)
+          : MatchingStatus.OUTPUT_NOT_FINITE;
+    }
+    return definite ? MatchingStatus.MATCHED : MatchingStatus.OUTPUT_NOT_DEFINITE;
+  }
+
+  private boolean isFinite(Moments moments) {
+    return SymmetricMatrix.allFinite(
+        form == Form.COVARIANCE ? moments.covariance() : moments.lowerFactor());
+  }
+
+  /** The noise that is not finite, or another fault. */
+  private MatchingStatus faultOf(Covariance additiveNoise, MatchingStatus otherwise) {
+    DMatrixRMaj matrix = additiveNoise.matrix();
+    if (SymmetricMatrix.allFinite(matrix)) {
+      return otherwise;
+    }
+    failedIndex = SymmetricMatrix.firstNotFinite(matrix);
+    failedValue = matrix.data[failedIndex];
+    return MatchingStatus.NOISE_NOT_FINITE;
   }
 
   /** A copy to hand to a function, which may write on it against its contract. */
@@ -82,53 +118,35 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     return handed;
   }
 
-  private boolean isFinite(double[] mean) {
-    if (Checks.allFinite(mean)) {
-      return true;
-    }
-    failedIndex = Checks.firstNotFinite(mean);
-    failedValue = mean[failedIndex];
-    return false;
-  }
-
-  private boolean isFinite(DMatrixRMaj noise) {
-    if (SymmetricMatrix.allFinite(noise)) {
-      return true;
-    }
-    failedIndex = SymmetricMatrix.firstNotFinite(noise);
-    failedValue = noise.data[failedIndex];
-    return false;
-  }
-
   /**
-   * Finds the moments of the output, given the image of the mean in {@link #centre}.
+   * Finds the mean of the output and fills {@link #columns()}, given the image of the mean in {@link
+   * #centre}.
    *
    * @param outputMean filled
-   * @param outputCovariance lower triangle filled, row by row
    */
-  abstract MatchingStatus match(
-      double[] mean, double[] given, double[] outputMean, double[] outputCovariance);
+  abstract MatchingStatus match(double[] mean, double[] given, double[] outputMean);
 
-  private void checkShapes(Moments input, DMatrixRMaj noise) {
+  /** The covariance of the output, without noise. */
+  abstract WeightedColumns columns();
+
+  /** Fills what a regression on the input leaves of the columns, and returns it. */
+  abstract WeightedColumns residuals();
+
+  /** Fills W. */
+  abstract void fillCross(double[] w);
+
+  private void checkShapes(Moments input, Covariance additiveNoise) {
     if (input.mean().length != inputSpace.storage()
-        || input.covariance().numRows != inputSpace.dimension()) {
+        || input.space().dimension() != inputSpace.dimension()) {
       throw new IllegalArgumentException("input must have dimension " + inputSpace.dimension()
-          + ", got " + input.covariance().numRows);
+          + ", got " + input.space().dimension());
     }
     int m = outputSpace.dimension();
-    if (noise != null && (noise.numRows != m || noise.numCols != m)) {
+    if (additiveNoise != null && additiveNoise.dimension() != m) {
+      int got = additiveNoise.dimension();
       throw new IllegalArgumentException("additive noise must be " + m + " x " + m
-          + " to match the output, got " + noise.numRows + " x " + noise.numCols);
+          + " to match the output, got " + got + " x " + got);
     }
-  }
-
-  /** Adds the noise of this call, and mirrors the lower triangle. */
-  final void addNoise(DMatrixRMaj covariance) {
-    int size = covariance.numRows * covariance.numRows;
-    for (int i = 0; i < size; i++) {
-      covariance.data[i] += noise.data[i];
-    }
-    SymmetricMatrix.mirrorLower(covariance);
   }
 
   @Override
@@ -137,26 +155,37 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   }
 
   @Override
-  public final DMatrixRMaj inputFactor() {
-    return active.columns();
+  public final int activeInputs() {
+    return active.count();
   }
 
   @Override
-  public final DMatrixRMaj restFactor() {
-    return active.rest();
+  public final DMatrixRMaj inputFactor() {
+    return active.factor();
   }
 
+  @Override
+  public final boolean isInputFactorLower() {
+    return active.isNatural();
+  }
+
+  /** Made when asked for: a filter's prediction does without it. */
   @Override
   public final DMatrixRMaj unitCrossCovariance() {
+    if (!crossKnown) {
+      fillCross(cross.data);
+      crossKnown = true;
+    }
     return cross;
   }
 
-  final void requireOutputShape(DMatrixRMaj matrix) {
-    int m = outputSpace.dimension();
-    if (matrix.numRows != m || matrix.numCols != m) {
-      throw new IllegalArgumentException("a matrix of the output must be " + m + " x " + m
-          + ", got " + matrix.numRows + " x " + matrix.numCols);
+  @Override
+  public Covariance unexplained() {
+    if (!unexplainedKnown) {
+      residuals().fill(noisy ? noise : null, unexplained);
+      unexplainedKnown = true;
     }
+    return unexplained;
   }
 
   @Override
@@ -175,10 +204,13 @@ abstract class BaseWorkspace implements MatchingWorkspace {
       case MATCHED -> "";
       case INPUT_NOT_FINITE -> "mean[" + failedIndex + "] must be finite, got " + failedValue;
       case NOISE_NOT_FINITE -> noiseFailure();
+      case NOISE_NOT_DEFINITE -> "additive noise is not positive semi-definite";
       case INPUT_NOT_DEFINITE -> "covariance is not positive semi-definite: " + active.failure();
       case FUNCTION_NOT_FINITE -> function.failure();
       case JACOBIAN_NOT_FINITE -> jacobianFailure();
       case OUTPUT_NOT_FINITE -> "moments of the output are not finite: the deviations overflow";
+      case OUTPUT_NOT_DEFINITE ->
+        "covariance of the output is not positive definite: negative weights outweigh the others";
     };
   }
 

@@ -1,6 +1,7 @@
 package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.space.Space;
 
 /**
@@ -43,7 +44,8 @@ public final class Linearisation implements MomentMatching {
   }
 
   @Override
-  public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
-    return new LinearWorkspace(input, output, function, inputScales);
+  public MatchingWorkspace workspace(
+      Space input, Space output, VectorFunction function, Form form) {
+    return new LinearWorkspace(input, output, function, inputScales, form);
   }
 }

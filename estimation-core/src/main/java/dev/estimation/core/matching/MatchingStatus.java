@@ -8,6 +8,8 @@ public enum MatchingStatus {
   INPUT_NOT_FINITE,
   /** The additive noise has NaN or infinity. Usual cause: a fault in a noise model. */
   NOISE_NOT_FINITE,
+  /** The additive noise is not positive semi-definite; asked in square-root form only. */
+  NOISE_NOT_DEFINITE,
   /**
    * The covariance of the input is not positive semi-definite, or not finite. Usual causes: rounding
    * after many updates of very different accuracy, a covariance set by hand.
@@ -21,5 +23,7 @@ public enum MatchingStatus {
   /** The Jacobian has NaN or infinity. Usual causes: a singular point such as zero range. */
   JACOBIAN_NOT_FINITE,
   /** The moments of the output overflow. Usual cause: a variance far outside the model's units. */
-  OUTPUT_NOT_FINITE
+  OUTPUT_NOT_FINITE,
+  /** The output has no factor: negative weights left nothing to take a root of. Square-root form only. */
+  OUTPUT_NOT_DEFINITE
 }

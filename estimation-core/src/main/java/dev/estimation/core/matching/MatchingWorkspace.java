@@ -1,5 +1,6 @@
 package dev.estimation.core.matching;
 
+import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.gaussian.Moments;
 import org.ejml.data.DMatrixRMaj;
 
@@ -8,9 +9,9 @@ import org.ejml.data.DMatrixRMaj;
  * thread</i>; allocates only when built.
  *
  * <p>With n the dimension of the input, k the number of active inputs and m the dimension of the
- * output, the cross-covariance of input and output is the product of two small matrices, P_uz = B W:
- * {@link #inputFactor()} B, n x k, and {@link #unitCrossCovariance()} W, k x m. B B' is the part of the
- * input covariance that the active inputs carry. Gains and smoother gains are made from the two.
+ * output, the cross-covariance of input and output is the product of two small matrices, P_uz = B W: B, the
+ * first k columns of {@link #inputFactor()}, and {@link #unitCrossCovariance()} W, k x m. B B' is the part
+ * of the input covariance that the active inputs carry. Gains and smoother gains are made from the two.
  */
 public interface MatchingWorkspace {
   /**
@@ -18,31 +19,35 @@ public interface MatchingWorkspace {
    *
    * @param input read; its lower factor is made if it has none
    * @param given read and handed to the function
-   * @param additiveNoise covariance added to the output's, m x m and symmetric, read; or null
+   * @param additiveNoise covariance added to the output's, m x m, read; or null
    * @return {@link MatchingStatus#MATCHED} if the results below are valid; otherwise they are not, and
    *     {@link #failure()} says what was wrong
    * @throws IllegalArgumentException if a shape is wrong
    */
-  MatchingStatus carry(Moments input, double[] given, DMatrixRMaj additiveNoise);
+  MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise);
 
   /**
-   * The result. The covariance is symmetric and finite; whether it is positive semi-definite is for
-   * the caller to ask, since negative weights can undo that.
+   * The result, in the form of this workspace: a covariance, symmetric and finite, or a lower factor. Whether a
+   * covariance is positive semi-definite is for the caller to ask, since negative weights can undo that.
    *
    * @return mean and covariance of the output, noise included; read only, valid until the next call
    */
   Moments output();
 
-  /** {@return B, n x k; read only, valid until the next call} */
-  DMatrixRMaj inputFactor();
+  /** {@return k, the number of active inputs} */
+  int activeInputs();
 
   /**
-   * The factor of what the inputs that are not active have of their own: the covariance of the input is
-   * B B' plus this times its transpose. Its rows of active inputs are zero.
+   * A factor L of the input's covariance, L L', with active inputs first: its first k columns B carry the
+   * active inputs, the others are what the remaining inputs have of their own and are zero in the rows of
+   * active ones.
    *
-   * @return n x (n - k); read only, valid until the next call
+   * @return n x n, rows in natural order; read only, valid until the next call
    */
-  DMatrixRMaj restFactor();
+  DMatrixRMaj inputFactor();
+
+  /** {@return whether that factor is lower triangular: the active inputs are the first, in order} */
+  boolean isInputFactorLower();
 
   /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */
   DMatrixRMaj unitCrossCovariance();
@@ -53,9 +58,9 @@ public interface MatchingWorkspace {
    * semi-definite only where negative weights have made it so; an update would then give an indefinite
    * covariance.
    *
-   * @param result filled, m x m
+   * @return m x m; read only, valid until the next call
    */
-  void unexplainedCovariance(DMatrixRMaj result);
+  Covariance unexplained();
 
   /** {@return the function evaluations of the last call, those for numerical derivatives included} */
   int evaluations();

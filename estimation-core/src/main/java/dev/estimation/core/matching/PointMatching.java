@@ -1,6 +1,8 @@
 package dev.estimation.core.matching;
 
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.points.PointRule;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
@@ -29,6 +31,10 @@ import dev.estimation.core.space.Space;
  * Sarkka and Svensson 2023, <i>Bayesian Filtering and Smoothing</i>, 2nd ed., chapters 8 and 9.
  */
 public final class PointMatching implements MomentMatching {
+  /** For functions that are linear in all their inputs: no points, and 1 + wm_0 - wc_0 = 0. */
+  private static final UnitPoints CENTRE_ALONE =
+      UnitPoints.of(0, 1, 2, new double[0][], new double[0]);
+
   private final PointRule rule;
 
   private PointMatching(PointRule rule) {
@@ -45,11 +51,16 @@ public final class PointMatching implements MomentMatching {
   }
 
   @Override
-  public MatchingWorkspace workspace(Space input, Space output, VectorFunction function) {
-    int activeCount = function.structure().activeInputs(input.dimension()).length;
-    UnitPoints points = rule.points(activeCount);
-    return points.isSample()
-        ? new SampleWorkspace(input, output, function, points)
-        : new PointWorkspace(input, output, function, points);
+  public MatchingWorkspace workspace(
+      Space input, Space output, VectorFunction function, Form form) {
+    Structure structure = function.structure();
+    int nonlinear = structure.nonlinearInputs(input.dimension()).length;
+    UnitPoints points = nonlinear == 0 ? CENTRE_ALONE : rule.points(nonlinear);
+    if (!points.isSample()) {
+      return new PointWorkspace(input, output, function, points, form);
+    }
+    VectorFunction sampled = new Restructured(function, structure.withLinearInputs());
+    UnitPoints draws = rule.points(structure.activeInputs(input.dimension()).length);
+    return new SampleWorkspace(input, output, sampled, draws, form);
   }
 }

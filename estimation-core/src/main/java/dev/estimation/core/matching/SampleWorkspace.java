@@ -1,60 +1,37 @@
 package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
-import dev.estimation.core.internal.Products;
-import dev.estimation.core.internal.SymmetricMatrix;
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
-import org.ejml.data.DMatrixRMaj;
 
 /** Carries moments by independent draws, about their sample means. */
 final class SampleWorkspace extends PointWorkspace implements SampledWorkspace {
-  private final double[] pointMean;
-  private final double[] minusOnes;
+  private final WeightedColumns left;
 
-  SampleWorkspace(Space input, Space output, VectorFunction function, UnitPoints points) {
-    super(input, output, function, points);
-    this.pointMean = new double[points.dimension()];
-    this.minusOnes = new double[points.dimension()];
-    Arrays.fill(minusOnes, -1);
-    for (int i = 0; i < points.size(); i++) {
-      for (int entry = points.start(i); entry < points.start(i + 1); entry++) {
-        pointMean[points.axis(entry)] += points.weight(i) * points.coordinate(entry);
-      }
-    }
-  }
-
-  /** From sums over N about the sample mean to division by N - 1, in P_zz and in W. */
-  @Override
-  MatchingStatus match(double[] mean, double[] given, double[] outputMean, double[] covariance) {
-    MatchingStatus matched = super.match(mean, given, outputMean, covariance);
-    double scale = points.size() / (points.size() - 1.0);
-    int m = shift.length;
-    for (int i = 0; i < m * m; i++) {
-      covariance[i] *= scale;
-    }
-    for (int a = 0; a < pointMean.length; a++) {
-      for (int c = 0; c < m; c++) {
-        cross.data[a * m + c] = scale * (cross.data[a * m + c] - pointMean[a] * shift[c]);
-      }
-    }
-    return matched;
+  SampleWorkspace(
+      Space input, Space output, VectorFunction function, UnitPoints points, Form form) {
+    super(input, output, function, points, form);
+    double[] weights = Arrays.copyOf(columns().weights(), columns().count() + active.count());
+    Arrays.fill(weights, columns().count(), weights.length, -1);
+    this.left = new WeightedColumns(output.dimension(), weights, form);
   }
 
   /** P_zz - W'W: these points have a covariance of their own, not I. */
   @Override
-  public void unexplainedCovariance(DMatrixRMaj result) {
-    requireOutputShape(result);
+  WeightedColumns residuals() {
+    double[] w = unitCrossCovariance().data;
     int m = shift.length;
-    Products.fillInnerProduct(cross.data, minusOnes, pointMean.length, m, result.data);
-    double[] total = output().covariance().data;
-    for (int r = 0; r < m; r++) {
-      for (int c = 0; c <= r; c++) {
-        result.data[r * m + c] += total[r * m + c];
+    int count = columns().count();
+    for (int c = 0; c < m; c++) {
+      int row = c * left.count();
+      System.arraycopy(columns().data(), c * count, left.data(), row, count);
+      for (int a = 0; a < active.count(); a++) {
+        left.data()[row + count + a] = w[a * m + c];
       }
     }
-    SymmetricMatrix.mirrorLower(result);
+    return left;
   }
 
   @Override
@@ -71,11 +48,11 @@ final class SampleWorkspace extends PointWorkspace implements SampledWorkspace {
 
   /** The mean of e_r e_c over the draws, or of its square; e is taken about the sample mean. */
   private double mean(int row, int column, boolean square) {
-    int m = shift.length;
+    double[] data = columns().data();
+    int count = columns().count();
     double sum = 0;
     for (int i = 0; i < points.size(); i++) {
-      double product =
-          (deviations[i * m + row] - shift[row]) * (deviations[i * m + column] - shift[column]);
+      double product = data[row * count + i] * data[column * count + i];
       sum += square ? product * product : product;
     }
     return sum / points.size();

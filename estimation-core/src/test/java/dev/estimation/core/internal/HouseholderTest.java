@@ -3,13 +3,13 @@ package dev.estimation.core.internal;
 import static dev.estimation.testing.Agreement.assertMatrix;
 import static dev.estimation.testing.Agreement.assertWithin;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.testing.RandomGaussians;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
-import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
-import org.ejml.interfaces.decomposition.QRDecomposition;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
@@ -17,101 +17,126 @@ import org.junit.jupiter.params.provider.CsvSource;
 class HouseholderTest {
   private static final double ROUNDING = 1e-13;
 
-  /** The upper triangle of the first columns, the scratch below left out. */
-  private static DMatrixRMaj triangle(DMatrixRMaj a, int reduced) {
-    double[] data = a.data.clone();
-    Householder.triangularise(data, a.numRows, a.numCols, reduced);
-    DMatrixRMaj r = new DMatrixRMaj(reduced, reduced);
+  private static DMatrixRMaj lower(int rows, int reduced, RandomGaussians random) {
+    DMatrixRMaj l = random.matrix(rows, reduced);
     for (int i = 0; i < reduced; i++) {
-      System.arraycopy(data, i * a.numCols + i, r.data, i * reduced + i, reduced - i);
+      for (int j = i; j < reduced; j++) {
+        l.set(i, j, i == j ? Math.abs(l.get(i, j)) : 0);
+      }
     }
-    return r;
+    return l;
   }
 
-  private static DMatrixRMaj leading(DMatrixRMaj a, int columns) {
-    return CommonOps_DDRM.extract(a, 0, a.numRows, 0, columns);
+  /** Upper triangular in the first rows: a lower triangle with rows and columns taken backwards. */
+  private static DMatrixRMaj upper(int rows, int reduced, RandomGaussians random) {
+    DMatrixRMaj u = random.matrix(rows, reduced);
+    for (int i = 0; i < reduced; i++) {
+      for (int j = 0; j <= i; j++) {
+        u.set(i, j, i == j ? Math.abs(u.get(i, j)) : 0);
+      }
+    }
+    return u;
   }
 
-  private static DMatrixRMaj gram(DMatrixRMaj a) {
-    DMatrixRMaj result = new DMatrixRMaj(a.numCols, a.numCols);
-    CommonOps_DDRM.multTransA(a, a, result);
-    return result;
+  /** T T' + A A'. */
+  private static DMatrixRMaj square(DMatrixRMaj t, DMatrixRMaj a) {
+    DMatrixRMaj sum = new DMatrixRMaj(t.numRows, t.numRows);
+    CommonOps_DDRM.multTransB(t, t, sum);
+    CommonOps_DDRM.multAddTransB(a, a, sum);
+    return sum;
   }
 
-  @ParameterizedTest
-  @CsvSource({"1, 1", "2, 1", "3, 3", "4, 3", "5, 4", "9, 4", "21, 20"})
-  void normalMatrixIsKept(int rows, int reduced) {
-    for (int seed = 0; seed < 20; seed++) {
-      DMatrixRMaj a = new RandomGaussians(seed).matrix(rows, reduced);
-      DMatrixRMaj r = triangle(a, reduced);
-      assertMatrix("R'R", gram(a), gram(r), ROUNDING, rows);
+  private static void assertTriangle(DMatrixRMaj t, int reduced, boolean isLower) {
+    for (int i = 0; i < reduced; i++) {
+      assertTrue(t.get(i, i) >= 0, "diagonal");
+      for (int j = 0; j < reduced; j++) {
+        boolean outside = isLower ? j > i : j < i;
+        assertTrue(!outside || t.get(i, j) == 0, "outside the triangle");
+      }
     }
   }
 
-  /** Other columns are turned: their lengths stay, and their products with the reduced ones. */
+  /** T' has the square of [T A], and the other rows keep their lengths and products with the first. */
   @ParameterizedTest
-  @CsvSource({"4, 3", "6, 2", "8, 5"})
-  void otherColumnsAreTurned(int rows, int reduced) {
+  @CsvSource({"1, 1, 1", "2, 2, 5", "3, 3, 1", "4, 3, 2", "6, 4, 9", "7, 7, 40", "5, 5, 3"})
+  void squareIsKept(int rows, int reduced, int columns) {
     for (int seed = 0; seed < 20; seed++) {
-      DMatrixRMaj a = new RandomGaussians(100 + seed).matrix(rows, reduced + 2);
-      DMatrixRMaj turned = a.copy();
-      Householder.triangularise(turned.data, rows, reduced + 2, reduced);
-      for (int i = 0; i < rows; i++) {
-        for (int j = 0; j < Math.min(i, reduced); j++) {
-          turned.set(i, j, 0);
+      RandomGaussians random = new RandomGaussians(seed);
+      for (boolean isLower : new boolean[] {true, false}) {
+        DMatrixRMaj t = isLower ? lower(rows, reduced, random) : upper(rows, reduced, random);
+        DMatrixRMaj a = random.matrix(rows, columns);
+        DMatrixRMaj wanted = square(t, a);
+        reduce(isLower, t, a, reduced);
+        assertTriangle(t, reduced, isLower);
+        for (int i = 0; i < reduced; i++) {
+          for (int j = 0; j < columns; j++) {
+            a.set(i, j, 0); // scratch, zero in exact arithmetic
+          }
         }
+        assertMatrix("square", wanted, square(t, a), ROUNDING, 10 * columns);
       }
-      assertMatrix("A'A, all columns", gram(a), gram(turned), ROUNDING, rows);
     }
   }
 
-  /** EJML's triangle, up to the signs of its rows. */
+  private static void reduce(boolean isLower, DMatrixRMaj t, DMatrixRMaj a, int reduced) {
+    if (isLower) {
+      Householder.reduceLower(t.data, reduced, a.data, t.numRows, a.numCols);
+    } else {
+      Householder.reduceUpper(t.data, reduced, a.data, t.numRows, a.numCols);
+    }
+  }
+
+  /** By hand: (3, 4) has length 5, and (1, 2) turned with it keeps 11 / 5 along it and 2 / 5 across. */
+  @Test
+  void aRowOfWholeNumbers() {
+    double[] t = {3, 1};
+    double[] a = {4, 2};
+    Householder.reduceLower(t, 1, a, 2, 1);
+    assertWithin("length", 5, t[0], 1e-15, 5);
+    assertWithin("along", 11.0 / 5, t[1], 1e-15, 3);
+    assertWithin("across", 2.0 / 5, Math.abs(a[1]), 1e-15, 3);
+  }
+
+  @Test
+  void rowsOfZerosChangeNothing() {
+    double[] t = {2, 0, -1, 3};
+    double[] a = new double[6];
+    Householder.reduceLower(t, 2, a, 2, 3);
+    assertEquals(2, t[0]);
+    assertEquals(-1, t[2]);
+    assertEquals(3, t[3]);
+  }
+
+  @Test
+  void notANumberIsNotHidden() {
+    double[] t = {1, 0, 0, 1};
+    Householder.reduceLower(t, 2, new double[] {Double.NaN, 0}, 2, 1);
+    assertTrue(Double.isNaN(t[0]));
+  }
+
+  /** Adding a column by reduction and taking it off again; 1e-12: what is left is a tenth of the whole. */
   @ParameterizedTest
-  @CsvSource({"3, 3", "4, 3", "9, 4", "21, 20"})
-  void triangleIsThatOfTheLibrary(int rows, int columns) {
+  @CsvSource({"1", "2", "5", "9"})
+  void downdateUndoesReduction(int n) {
     for (int seed = 0; seed < 20; seed++) {
-      DMatrixRMaj a = new RandomGaussians(200 + seed).matrix(rows, columns);
-      QRDecomposition<DMatrixRMaj> other = DecompositionFactory_DDRM.qr(rows, columns);
-      assertTrue(other.decompose(a.copy()));
-      DMatrixRMaj wanted = other.getR(null, true);
-      DMatrixRMaj got = triangle(a, columns);
-      positiveDiagonal(wanted);
-      positiveDiagonal(got);
-      // 1e-11: rows of R, unlike R'R, carry the condition of the leading columns, a few hundred.
-      assertMatrix("R", wanted, got, 1e-11, rows);
-    }
-  }
-
-  private static void positiveDiagonal(DMatrixRMaj r) {
-    for (int i = 0; i < r.numRows; i++) {
-      double sign = r.get(i, i) < 0 ? -1 : 1;
-      for (int j = 0; j < r.numCols; j++) {
-        r.set(i, j, sign * r.get(i, j));
+      RandomGaussians random = new RandomGaussians(seed);
+      DMatrixRMaj l = lower(n, n, random);
+      for (int i = 0; i < n; i++) {
+        l.add(i, i, 1);
       }
+      DMatrixRMaj more = l.copy();
+      double[] v = random.vector(n);
+      Householder.reduceLower(more.data, n, v.clone(), n, 1);
+      assertTrue(Householder.downdate(more.data, n, v));
+      assertMatrix("L", l, more, 1e-12, 10);
     }
   }
 
-  @ParameterizedTest
-  @CsvSource({"0", "1", "2"})
-  void aColumnOfZerosGivesAZeroOnTheDiagonal(int zero) {
-    DMatrixRMaj a = new RandomGaussians(5).matrix(4, 4);
-    for (int i = 0; i < 4; i++) {
-      a.set(i, zero, 0);
-    }
-    DMatrixRMaj r = triangle(a, 3);
-    assertEquals(0.0, Math.abs(r.get(zero, zero)));
-    assertMatrix("R'R", gram(leading(a, 3)), gram(r), ROUNDING, 4);
-  }
-
-  /** By hand: [[3], [4]] has length 5, and reflecting [1, 2] keeps (3 + 8) / 5 along it. */
-  @ParameterizedTest
-  @CsvSource({"1", "-1"})
-  void aColumnOfWholeNumbers(int sign) {
-    double[] a = {3 * sign, 1, 4 * sign, 2};
-    Householder.triangularise(a, 2, 2, 1);
-    assertWithin("length", 5, Math.abs(a[0]), 1e-15, 5);
-    assertWithin("along", 11.0 / 5, Math.abs(a[1]), 1e-15, 3);
-    assertWithin("across", 2.0 / 5, Math.abs(a[3]), 1e-15, 3);
-    assertEquals(Math.signum(a[0]) * sign, Math.signum(a[1]), "same side");
+  @Test
+  void downdateSaysWhenNothingIsLeft() {
+    double[] l = {1, 0, 0.5, 1};
+    assertFalse(Householder.downdate(l, 2, new double[] {0, 1.0}));
+    assertTrue(Double.isNaN(l[3]));
+    assertFalse(Householder.downdate(new double[] {1}, 1, new double[] {Double.NaN}));
   }
 }

@@ -5,6 +5,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Covariance;
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.PointRule;
@@ -15,7 +17,6 @@ import dev.estimation.testing.RandomGaussians;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.stream.Stream;
-import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.Arguments;
@@ -64,16 +65,24 @@ class MatchingAllocationTest {
   }
 
   private static void check(String name, int n, MomentMatching matching, Wave function) {
+    for (Form form : Form.values()) {
+      check(name + ", " + form, n, matching, function, form);
+    }
+  }
+
+  private static void check(String name, int n, MomentMatching matching, Wave function, Form form) {
     RandomGaussians random = new RandomGaussians(n);
     Moments input = random.moments(n);
-    DMatrixRMaj noise = random.covariance(2);
+    Covariance noise = RandomGaussians.noise(random.covariance(2));
     double[] given = new double[1];
-    MatchingWorkspace work = matching.workspace(Space.reals(n), Space.angles(2), function);
+    MatchingWorkspace work = matching.workspace(Space.reals(n), Space.angles(2), function, form);
     Runnable call = () -> {
       input.changeCovariance();
       if (work.carry(input, given, noise) != MatchingStatus.MATCHED) {
         throw new IllegalStateException(work.failure());
       }
+      work.unitCrossCovariance();
+      work.unexplained();
     };
     int calls = Math.max(20, 10_000 / Math.max(1, evaluations(work, call)));
     double bytes = AllocationMeter.bytesPerCall(calls, calls, call);

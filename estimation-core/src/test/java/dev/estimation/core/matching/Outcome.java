@@ -4,6 +4,7 @@ import static dev.estimation.testing.Agreement.assertSameBits;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import dev.estimation.core.gaussian.Moments;
+import dev.estimation.testing.RandomGaussians;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 
@@ -17,13 +18,17 @@ final class Outcome {
   private Outcome(MatchingWorkspace work) {
     mean = work.output().mean().clone();
     covariance = work.output().covariance().copy();
-    factor = work.inputFactor().copy();
+    factor = CommonOps_DDRM.extract(
+        work.inputFactor(), 0, work.inputFactor().numRows, 0, work.activeInputs());
     unitCross = work.unitCrossCovariance().copy();
   }
 
   /** Carries moments, which must succeed. */
   static Outcome of(MatchingWorkspace work, Moments input, double[] given, DMatrixRMaj noise) {
-    assertEquals(MatchingStatus.MATCHED, work.carry(input, given, noise), work::failure);
+    assertEquals(
+        MatchingStatus.MATCHED,
+        work.carry(input, given, RandomGaussians.noise(noise)),
+        work::failure);
     assertEquals("", work.failure());
     return new Outcome(work);
   }

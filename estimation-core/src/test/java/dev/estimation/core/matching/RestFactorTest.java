@@ -4,6 +4,7 @@ import static dev.estimation.testing.Agreement.assertCovariance;
 import static dev.estimation.testing.Agreement.assertSameBits;
 import static dev.estimation.testing.Agreement.assertWithin;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.core.function.VectorFunction;
@@ -46,7 +47,8 @@ class RestFactorTest {
         new EmbeddedFunction(new BentFunction(at.length, OUTPUTS, 7), OUTPUTS, WHOLE, at);
     MatchingWorkspace work =
         NamedMatchings.of(name).workspace(Space.reals(WHOLE), Space.reals(OUTPUTS), function);
-    assertEquals(MatchingStatus.MATCHED, work.carry(input, new double[1], noise));
+    assertEquals(
+        MatchingStatus.MATCHED, work.carry(input, new double[1], RandomGaussians.noise(noise)));
     return work;
   }
 
@@ -60,28 +62,28 @@ class RestFactorTest {
       int[] at = Arrays.copyOf(random.permutation(WHOLE), 1 + seed % 5);
       MatchingWorkspace work = bent(name, input, null, at);
       DMatrixRMaj sum = square(work.inputFactor());
-      CommonOps_DDRM.addEquals(sum, square(work.restFactor()));
-      assertCovariance("B B' + rest rest'", input.covariance(), sum, 1e-13);
-      assertActiveRowsAreZero(work.restFactor(), at);
+      assertCovariance("L L'", input.covariance(), sum, 1e-13);
+      assertActiveRowsAreZero(work, at);
     }
   }
 
-  private static void assertActiveRowsAreZero(DMatrixRMaj rest, int... at) {
-    assertEquals(WHOLE - at.length, rest.numCols);
+  private static void assertActiveRowsAreZero(MatchingWorkspace work, int... at) {
+    assertEquals(at.length, work.activeInputs());
     for (int row : at) {
-      for (int column = 0; column < rest.numCols; column++) {
-        assertEquals(0.0, rest.get(row, column), "active input " + row);
+      for (int column = at.length; column < WHOLE; column++) {
+        assertEquals(0.0, work.inputFactor().get(row, column), "active input " + row);
       }
     }
   }
 
-  /** With every input active there is nothing left. */
+  /** The factor is lower triangular as it stands if the active inputs are the first, in order. */
   @ParameterizedTest
   @MethodSource("matchings")
-  void allInputsActiveLeaveNoRest(String name) {
-    MatchingWorkspace work =
-        bent(name, new RandomGaussians(1).moments(WHOLE), null, 2, 0, 1, 5, 4, 3);
-    assertEquals(0, work.restFactor().numCols);
+  void toldToBeLowerWhereItIs(String name) {
+    Moments input = new RandomGaussians(1).moments(WHOLE);
+    assertTrue(bent(name, input, null, 0, 1).isInputFactorLower());
+    assertFalse(bent(name, input, null, 1, 0).isInputFactorLower());
+    assertFalse(bent(name, input, null, 2, 0, 1, 5, 4, 3).isInputFactorLower());
   }
 
   /** 1e-12: entries of order 10, the sums of up to 729 points, W'W formed and subtracted. */
@@ -97,8 +99,7 @@ class RestFactorTest {
       DMatrixRMaj wanted = work.output().covariance().copy();
       DMatrixRMaj w = work.unitCrossCovariance();
       CommonOps_DDRM.multAddTransA(-1, w, w, wanted);
-      DMatrixRMaj got = new DMatrixRMaj(OUTPUTS, OUTPUTS);
-      work.unexplainedCovariance(got);
+      DMatrixRMaj got = work.unexplained().matrix();
       for (int i = 0; i < OUTPUTS * OUTPUTS; i++) {
         assertWithin(name + ", seed " + seed, wanted.data[i], got.data[i], 1e-12, 10);
       }
@@ -109,8 +110,7 @@ class RestFactorTest {
   @MethodSource("pointMatchings")
   void bendsAreUnexplained(String name) {
     MatchingWorkspace work = bent(name, new RandomGaussians(2).moments(WHOLE), null, 1, 4);
-    DMatrixRMaj got = new DMatrixRMaj(OUTPUTS, OUTPUTS);
-    work.unexplainedCovariance(got);
+    DMatrixRMaj got = work.unexplained().matrix();
     assertTrue(Math.abs(CommonOps_DDRM.trace(got)) > 1e-3, "no noise, yet not nothing");
   }
 
@@ -119,8 +119,7 @@ class RestFactorTest {
     RandomGaussians random = new RandomGaussians(3);
     DMatrixRMaj noise = random.covariance(OUTPUTS);
     MatchingWorkspace work = bent("linearisation", random.moments(WHOLE), noise, 3, 1);
-    DMatrixRMaj got = new DMatrixRMaj(OUTPUTS, OUTPUTS);
-    work.unexplainedCovariance(got);
+    DMatrixRMaj got = work.unexplained().matrix();
     assertSameBits("noise", noise, got);
   }
 
@@ -141,9 +140,9 @@ class RestFactorTest {
       MatchingWorkspace work =
           NamedMatchings.of(name).workspace(Space.reals(3), Space.reals(2), affine);
       Moments input = RandomGaussians.momentsOf(Gaussian.of(random.vector(3), prior));
-      assertEquals(MatchingStatus.MATCHED, work.carry(input, new double[0], noise));
-      DMatrixRMaj got = new DMatrixRMaj(2, 2);
-      work.unexplainedCovariance(got);
+      assertEquals(
+          MatchingStatus.MATCHED, work.carry(input, new double[0], RandomGaussians.noise(noise)));
+      DMatrixRMaj got = work.unexplained().matrix();
       assertCovariance(name + ", seed " + seed, noise, got, 1e-6);
     }
   }

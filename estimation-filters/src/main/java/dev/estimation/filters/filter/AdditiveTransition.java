@@ -1,28 +1,26 @@
 package dev.estimation.filters.filter;
 
+import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
-import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.filters.model.MotionModel;
-import org.ejml.data.DMatrixRMaj;
 
 /** Noise is added after the motion. */
 final class AdditiveTransition extends Transition {
   private final MotionModel model;
   private final MotionFunction function;
 
-  AdditiveTransition(MotionModel model, MomentMatching matching) {
-    this(model, new MotionFunction(model), matching);
+  AdditiveTransition(MotionModel model, FilterPlan plan) {
+    this(model, new MotionFunction(model), plan);
   }
 
-  private AdditiveTransition(MotionModel model, MotionFunction function, MomentMatching matching) {
+  private AdditiveTransition(MotionModel model, MotionFunction function, FilterPlan plan) {
     super(
         FilterPlan.nameOf(model),
         model.controlDimension(),
         new NoiseMatrix("processNoise", model.stateSpace().dimension(), false),
-        FilterPlan.workspace(
-            matching,
+        plan.workspace(
             model.stateSpace(),
             model.stateSpace(),
             function,
@@ -42,7 +40,7 @@ final class AdditiveTransition extends Transition {
       double[] control,
       double time,
       double dt,
-      DMatrixRMaj noiseCovariance,
+      Covariance noiseCovariance,
       MatchingWorkspace workspace) {
     function.over(time, dt);
     return workspace.carry(prior, control, noiseCovariance);

@@ -1,6 +1,7 @@
 package dev.estimation.filters.filter;
 
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.Linearisation;
 import dev.estimation.core.matching.MatchingWorkspace;
@@ -33,14 +34,20 @@ public final class FilterPlan {
   private final MomentMatching matching;
   private final double gateProbability;
   private final IteratedUpdate iteration;
+  private final Form form;
 
   private FilterPlan(
-      Motion motion, MomentMatching matching, double gateProbability, IteratedUpdate iteration) {
+      Motion motion,
+      MomentMatching matching,
+      double gateProbability,
+      IteratedUpdate iteration,
+      Form form) {
     this.motion = motion;
     this.stateSpace = motion.stateSpace();
     this.matching = matching;
     this.gateProbability = gateProbability;
     this.iteration = iteration;
+    this.form = form;
   }
 
   /**
@@ -52,7 +59,7 @@ public final class FilterPlan {
    * @throws IllegalArgumentException if the matching cannot serve the model
    */
   public static FilterPlan of(Motion motion, MomentMatching matching) {
-    FilterPlan plan = new FilterPlan(motion, matching, Double.NaN, null);
+    FilterPlan plan = new FilterPlan(motion, matching, Double.NaN, null, Form.COVARIANCE);
     plan.transition(); // refuses a model that the matching cannot serve now, not at the first step
     return plan;
   }
@@ -73,7 +80,8 @@ public final class FilterPlan {
    * @param iteration how updates are iterated
    */
   public static FilterPlan iteratedExtended(Motion motion, IteratedUpdate iteration) {
-    return new FilterPlan(motion, extended(motion).matching, Double.NaN, iteration);
+    return new FilterPlan(
+        motion, extended(motion).matching, Double.NaN, iteration, Form.COVARIANCE);
   }
 
   /**
@@ -116,7 +124,18 @@ public final class FilterPlan {
    */
   public FilterPlan withGate(double probability) {
     ChiSquareBounds.upperLimit(probability, 1);
-    return new FilterPlan(motion, matching, probability, iteration);
+    return new FilterPlan(motion, matching, probability, iteration, form);
+  }
+
+  /**
+   * This plan in square-root form: estimates carry a lower factor instead of the covariance, which keeps
+   * twice the digits. Take it where standard deviations differ by many powers of ten or measurements are far
+   * more accurate than the estimate; a step costs somewhat more.
+   *
+   * @return the plan in square-root form
+   */
+  public FilterPlan inSquareRootForm() {
+    return new FilterPlan(motion, matching, gateProbability, iteration, Form.SQUARE_ROOT);
   }
 
   /** {@return scratch for one thread} */
@@ -140,10 +159,9 @@ public final class FilterPlan {
   }
 
   /** A matching workspace; a refusal names the model. */
-  static MatchingWorkspace workspace(
-      MomentMatching matching, Space input, Space output, VectorFunction function, String model) {
+  MatchingWorkspace workspace(Space input, Space output, VectorFunction function, String model) {
     try {
-      return matching.workspace(input, output, function);
+      return matching.workspace(input, output, function, form);
     } catch (IllegalArgumentException refused) {
       throw new IllegalArgumentException(refused.getMessage() + " (" + model + ")", refused);
     }
@@ -157,12 +175,12 @@ public final class FilterPlan {
 
   Transition transition() {
     return motion instanceof MotionModel additive
-        ? new AdditiveTransition(additive, matching)
-        : new NoiseDrivenTransition((NoiseDrivenMotion) motion, matching);
+        ? new AdditiveTransition(additive, this)
+        : new NoiseDrivenTransition((NoiseDrivenMotion) motion, this);
   }
 
-  MomentMatching matching() {
-    return matching;
+  Form form() {
+    return form;
   }
 
   /** How updates are iterated, or null. */

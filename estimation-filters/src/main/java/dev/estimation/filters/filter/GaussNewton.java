@@ -51,7 +51,7 @@ final class GaussNewton {
     this.noise = noise;
     this.state = state;
     this.measured = measured;
-    int k = matching.unitCrossCovariance().numRows;
+    int k = matching.activeInputs();
     int m = measured.dimension();
     this.iterate = new Moments(state);
     this.squares = new UnitLeastSquares(k, m);
@@ -117,7 +117,7 @@ final class GaussNewton {
   private void reduce() {
     System.arraycopy(residual, 0, target, 0, target.length);
     addProduct(unit, target);
-    squares.reduce(matching.unitCrossCovariance(), noise.factor(), target);
+    squares.reduce(matching.unitCrossCovariance(), noise.covariance(), target);
   }
 
   /** result += W' s. */
@@ -151,7 +151,7 @@ final class GaussNewton {
     for (int i = 0; i < displacement.length; i++) {
       double sum = 0;
       for (int a = 0; a < s.length; a++) {
-        sum += b.data[i * s.length + a] * s[a];
+        sum += b.data[i * b.numCols + a] * s[a];
       }
       displacement[i] = sum;
     }
@@ -164,7 +164,7 @@ final class GaussNewton {
     }
     fillDisplacement(trial);
     state.displace(prior.mean(), displacement, iterate.changeMean());
-    MatchingStatus matched = matching.carry(iterate, given, noise.matrix());
+    MatchingStatus matched = matching.carry(iterate, given, noise.covariance());
     evaluations += matching.evaluations();
     jacobians += matching.jacobians();
     if (matched != MatchingStatus.MATCHED) {

@@ -1,6 +1,6 @@
 package dev.estimation.filters.filter;
 
-import dev.estimation.core.internal.LowerFactor;
+import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
@@ -17,8 +17,7 @@ final class Innovation {
   private final Space space;
   private final MatchingWorkspace matching;
   private final UnitLeastSquares squares;
-  private final LowerFactor unexplained;
-  private final DMatrixRMaj unexplainedCovariance;
+  private Covariance unexplained;
   private final DMatrixRMaj covariance;
   private final double[] value;
   private double squared = Double.NaN;
@@ -27,9 +26,8 @@ final class Innovation {
     this.space = space;
     this.matching = matching;
     int m = space.dimension();
-    this.squares = new UnitLeastSquares(matching.unitCrossCovariance().numRows, m);
-    this.unexplained = new LowerFactor(m);
-    this.unexplainedCovariance = new DMatrixRMaj(m, m);
+    this.squares = new UnitLeastSquares(matching.activeInputs(), m);
+    this.unexplained = matching.unexplained();
     this.covariance = new DMatrixRMaj(m, m);
     this.value = new double[m];
   }
@@ -43,8 +41,8 @@ final class Innovation {
   boolean weigh(double[] measurement) {
     space.difference(measurement, matching.output().mean(), value);
     covariance.setTo(matching.output().covariance());
-    matching.unexplainedCovariance(unexplainedCovariance);
-    if (!unexplained.factorDefinite(unexplainedCovariance)) {
+    unexplained = matching.unexplained();
+    if (!unexplained.isDefinite()) {
       return false;
     }
     squares.reduce(matching.unitCrossCovariance(), unexplained, value);

@@ -1,9 +1,10 @@
 package dev.estimation.filters.filter;
 
+import dev.estimation.core.gaussian.Covariance;
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
-import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.filters.model.NoiseDrivenMotion;
 import org.ejml.data.DMatrixRMaj;
 
@@ -12,26 +13,23 @@ final class NoiseDrivenTransition extends Transition {
   private final NoiseDrivenMotion model;
   private final NoiseDrivenFunction function;
   private final Moments joint;
+  private final Form form;
 
-  NoiseDrivenTransition(NoiseDrivenMotion model, MomentMatching matching) {
+  NoiseDrivenTransition(NoiseDrivenMotion model, FilterPlan plan) {
     this(
         model,
         new NoiseDrivenFunction(model),
         new AppendedReals(model.stateSpace(), model.noiseDimension()),
-        matching);
+        plan);
   }
 
   private NoiseDrivenTransition(
-      NoiseDrivenMotion model,
-      NoiseDrivenFunction function,
-      AppendedReals space,
-      MomentMatching matching) {
+      NoiseDrivenMotion model, NoiseDrivenFunction function, AppendedReals space, FilterPlan plan) {
     super(
         FilterPlan.nameOf(model),
         model.controlDimension(),
         new NoiseMatrix("noiseCovariance", model.noiseDimension(), false),
-        FilterPlan.workspace(
-            matching,
+        plan.workspace(
             space,
             model.stateSpace(),
             function,
@@ -40,6 +38,7 @@ final class NoiseDrivenTransition extends Transition {
     this.model = model;
     this.function = function;
     this.joint = new Moments(space);
+    this.form = plan.form();
   }
 
   @Override
@@ -53,19 +52,27 @@ final class NoiseDrivenTransition extends Transition {
       double[] control,
       double time,
       double dt,
-      DMatrixRMaj noiseCovariance,
+      Covariance noiseCovariance,
       MatchingWorkspace workspace) {
+    if (!prior.factor()) {
+      return MatchingStatus.INPUT_NOT_DEFINITE;
+    }
     join(prior, noiseCovariance);
     function.over(time, dt);
     return workspace.carry(joint, control, null);
   }
 
-  /** Mean (x, 0), covariance diag(P, Q); the other entries are zero since the joint was made. */
-  private void join(Moments prior, DMatrixRMaj noiseCovariance) {
+  /** Mean (x, 0), covariance diag(P, Q), or the factors so; other entries are zero since the joint was made. */
+  private void join(Moments prior, Covariance noise) {
     System.arraycopy(prior.mean(), 0, joint.changeMean(), 0, prior.mean().length);
-    DMatrixRMaj covariance = joint.changeCovariance();
-    copyBlock(prior.covariance(), covariance, 0);
-    copyBlock(noiseCovariance, covariance, prior.covariance().numRows);
+    int d = prior.space().dimension();
+    if (form == Form.COVARIANCE) {
+      copyBlock(prior.covariance(), joint.changeCovariance(), 0);
+      copyBlock(noise.matrix(), joint.changeCovariance(), d);
+    } else {
+      copyBlock(prior.lowerFactor(), joint.changeFactor(), 0);
+      copyBlock(noise.lowerFactor(), joint.changeFactor(), d);
+    }
   }
 
   private static void copyBlock(DMatrixRMaj block, DMatrixRMaj target, int corner) {

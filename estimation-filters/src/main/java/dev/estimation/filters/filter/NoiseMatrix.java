@@ -1,6 +1,6 @@
 package dev.estimation.filters.filter;
 
-import dev.estimation.core.internal.LowerFactor;
+import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.internal.SymmetricMatrix;
 import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
@@ -9,9 +9,8 @@ import org.ejml.data.DMatrixRMaj;
 final class NoiseMatrix {
   private final String name;
   private final DMatrixRMaj matrix;
-  private final LowerFactor factor;
   private final boolean definite;
-  private final DMatrixRMaj accepted;
+  private final Covariance accepted;
   private boolean anyAccepted;
 
   /**
@@ -22,9 +21,8 @@ final class NoiseMatrix {
   NoiseMatrix(String name, int dimension, boolean definite) {
     this.name = name;
     this.matrix = new DMatrixRMaj(dimension, dimension);
-    this.factor = new LowerFactor(dimension);
     this.definite = definite;
-    this.accepted = new DMatrixRMaj(dimension, dimension);
+    this.accepted = new Covariance(dimension);
   }
 
   /** The array for the model to fill, all zeros. */
@@ -35,21 +33,21 @@ final class NoiseMatrix {
 
   /** Checks what was filled; a matrix equal to the last one accepted needs no second check. */
   boolean isValid() {
-    if (anyAccepted && Arrays.equals(matrix.data, accepted.data)) {
+    if (anyAccepted && Arrays.equals(matrix.data, accepted.matrix().data)) {
       return true;
     }
     anyAccepted = isCovariance();
-    if (anyAccepted) {
-      accepted.setTo(matrix);
-    }
     return anyAccepted;
   }
 
   private boolean isCovariance() {
-    return SymmetricMatrix.firstNotFinite(matrix) < 0
-        && firstBadVariance() < 0
-        && SymmetricMatrix.firstAsymmetric(matrix) < 0
-        && (definite ? factor.factorDefinite(matrix) : factor.factorSemidefinite(matrix));
+    if (SymmetricMatrix.firstNotFinite(matrix) >= 0
+        || firstBadVariance() >= 0
+        || SymmetricMatrix.firstAsymmetric(matrix) >= 0) {
+      return false;
+    }
+    accepted.changeMatrix().setTo(matrix);
+    return definite ? accepted.isDefinite() : accepted.factor();
   }
 
   private int firstBadVariance() {
@@ -65,16 +63,11 @@ final class NoiseMatrix {
 
   /** Overwrites v with L^-1 v, L the lower factor, after {@link #isValid()} was true. */
   void whiten(double[] v) {
-    factor.solveLower(v);
-  }
-
-  /** The lower factor, after {@link #isValid()} was true. */
-  LowerFactor factor() {
-    return factor;
+    accepted.solveLower(v);
   }
 
   /** A copy of what was accepted: the model may still hold the array that it filled. */
-  DMatrixRMaj matrix() {
+  Covariance covariance() {
     return accepted;
   }
 
@@ -96,7 +89,7 @@ final class NoiseMatrix {
           + place(mirror) + " = " + matrix.data[mirror];
     }
     return name + " is not positive " + (definite ? "definite: " : "semi-definite: ")
-        + factor.failure();
+        + accepted.failure();
   }
 
   private String place(int index) {

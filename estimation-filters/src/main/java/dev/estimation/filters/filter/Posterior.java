@@ -1,7 +1,9 @@
 package dev.estimation.filters.filter;
 
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
+import dev.estimation.core.internal.Householder;
 import dev.estimation.core.internal.Products;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.matching.MatchingWorkspace;
@@ -9,26 +11,26 @@ import dev.estimation.core.space.Space;
 import java.util.Arrays;
 
 /**
- * The estimate given a measurement: mean m + D' z and covariance D'D + E E', with D and z from {@link
- * UnitLeastSquares} and E the factor of what the inputs that are not active have of their own. In exact
- * arithmetic the same as m + K nu, P - K S K'; positive semi-definite by construction. Confined to one
- * thread.
+ * The estimate given a measurement: with R = [B U^-T, E] from {@link UnitLeastSquares}, E what the inputs that
+ * are not active have of their own, the covariance is R R' and the mean m + B U^-T z. In exact arithmetic the
+ * same as m + K nu, P - K S K'; positive semi-definite by construction. Where the active inputs come first, R is
+ * the new lower factor itself. Confined to one thread.
  */
 final class Posterior {
   private final Space space;
   private final MatchingWorkspace matching;
+  private final Form form;
   private final Moments moments;
-  private final int active;
   private final double[] root;
   private final double[] ones;
   private final double[] correction;
 
-  Posterior(Space state, MatchingWorkspace matching) {
+  Posterior(Space state, MatchingWorkspace matching, Form form) {
     this.space = state;
     this.matching = matching;
+    this.form = form;
     int d = state.dimension();
     this.moments = new Moments(state);
-    this.active = matching.unitCrossCovariance().numRows;
     this.root = new double[d * d];
     this.ones = new double[d];
     Arrays.fill(ones, 1);
@@ -41,51 +43,51 @@ final class Posterior {
 
   /** Conditions the prior by a reduced update, at whose centre the matching must stand. */
   StepStatus condition(Moments prior, UnitLeastSquares squares) {
-    fillCovariance(squares);
     int d = correction.length;
-    Arrays.fill(correction, 0);
-    for (int c = 0; c < active; c++) {
-      double target = squares.target(c);
-      for (int r = 0; r < d; r++) {
-        correction[r] += root[c * d + r] * target;
+    int k = matching.activeInputs();
+    squares.fillRoot(matching.inputFactor().data, d, root);
+    for (int r = 0; r < d; r++) {
+      double sum = 0;
+      for (int c = 0; c < k; c++) {
+        sum += root[r * d + c] * squares.target(c);
       }
+      correction[r] = sum;
     }
     space.displace(prior.mean(), correction, moments.changeMean());
-    return check();
+    return finish();
   }
 
   /** Takes the covariance of a reduced update and a mean found otherwise. */
   StepStatus take(UnitLeastSquares squares, double[] mean) {
-    fillCovariance(squares);
+    squares.fillRoot(matching.inputFactor().data, correction.length, root);
     System.arraycopy(mean, 0, moments.changeMean(), 0, mean.length);
-    return check();
+    return finish();
   }
 
-  /** D'D plus what the inactive inputs have of their own: a sum of squares, nothing subtracted. */
-  private void fillCovariance(UnitLeastSquares squares) {
-    int d = correction.length;
-    squares.fillRoot(matching.inputFactor(), root);
-    double[] rest = matching.restFactor().data;
-    int others = d - active;
-    for (int c = 0; c < others; c++) {
-      for (int r = 0; r < d; r++) {
-        root[(active + c) * d + r] = rest[r * others + c];
-      }
+  private StepStatus finish() {
+    if (!Checks.allFinite(moments.mean()) || !Checks.allFinite(root)) {
+      return StepStatus.RESULT_NOT_FINITE;
     }
-    Products.fillInnerProduct(root, ones, d, d, moments.changeCovariance().data);
-    SymmetricMatrix.mirrorLower(moments.covariance());
+    int d = correction.length;
+    if (matching.isInputFactorLower()) {
+      System.arraycopy(root, 0, moments.changeFactor().data, 0, root.length);
+    } else if (form == Form.SQUARE_ROOT) {
+      double[] lower = moments.changeFactor().data;
+      Arrays.fill(lower, 0, d * d, 0);
+      Householder.reduceLower(lower, d, root, d, d);
+    } else {
+      Products.fillOuterProduct(root, ones, d, d, moments.changeCovariance().data);
+      SymmetricMatrix.mirrorLower(moments.covariance());
+    }
+    return check();
   }
 
   /** Whether the result can be an estimate. */
   private StepStatus check() {
-    if (!Checks.allFinite(moments.mean())) {
-      return StepStatus.RESULT_NOT_FINITE;
-    }
+    boolean finite = form == Form.SQUARE_ROOT || SymmetricMatrix.allFinite(moments.covariance());
     if (moments.factor()) {
-      return StepStatus.APPLIED;
+      return finite ? StepStatus.APPLIED : StepStatus.RESULT_NOT_FINITE;
     }
-    return SymmetricMatrix.allFinite(moments.covariance())
-        ? StepStatus.NOT_DEFINITE
-        : StepStatus.RESULT_NOT_FINITE;
+    return finite ? StepStatus.NOT_DEFINITE : StepStatus.RESULT_NOT_FINITE;
   }
 }

@@ -44,15 +44,14 @@ public final class SensorPort {
     this.space = sensor.measurementSpace();
     int m = space.dimension();
     this.gateLimit = plan.gateLimit(m);
-    this.matching = FilterPlan.workspace(
-        plan.matching(),
+    this.matching = plan.workspace(
         stateSpace,
         space,
         new SensorFunction(sensor),
         "sensor model " + name + "; its Jacobian: DifferentiableSensor");
     this.noise = new NoiseMatrix("measurementNoise", m, true);
     this.innovation = new Innovation(space, matching);
-    this.posterior = new Posterior(stateSpace, matching);
+    this.posterior = new Posterior(stateSpace, matching, plan.form());
     this.mean = new double[stateSpace.storage()];
     this.iteration = plan.iteration() == null
         ? null
@@ -119,7 +118,7 @@ public final class SensorPort {
 
   /** Predicts the measurement and holds the innovation against the gate. */
   private StepStatus weigh(Moments prior, double[] measurement, double[] given) {
-    MatchingStatus matched = matching.carry(prior, given, noise.matrix());
+    MatchingStatus matched = matching.carry(prior, given, noise.covariance());
     evaluations = matching.evaluations();
     jacobians = matching.jacobians();
     if (matched != MatchingStatus.MATCHED) {

@@ -1,5 +1,6 @@
 package dev.estimation.filters.filter;
 
+import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
@@ -32,7 +33,7 @@ abstract class Transition {
       return StepStatus.NOISE_NOT_VALID;
     }
     matched = true;
-    MatchingStatus ended = match(prior, control, time, dt, noise.matrix(), matching);
+    MatchingStatus ended = match(prior, control, time, dt, noise.covariance(), matching);
     if (ended != MatchingStatus.MATCHED) {
       return StepStatus.of(ended);
     }
@@ -47,7 +48,7 @@ abstract class Transition {
       double[] control,
       double time,
       double dt,
-      DMatrixRMaj noiseCovariance,
+      Covariance noiseCovariance,
       MatchingWorkspace workspace);
 
   final Moments output() {
@@ -62,13 +63,14 @@ abstract class Transition {
   final void crossCovariance(DMatrixRMaj cross) {
     double[] b = matching.inputFactor().data;
     double[] w = matching.unitCrossCovariance().data;
-    int k = matching.unitCrossCovariance().numRows;
+    int k = matching.activeInputs();
     int d = cross.numRows;
+    int n = matching.inputFactor().numCols;
     for (int r = 0; r < d; r++) {
       for (int c = 0; c < d; c++) {
         double sum = 0;
         for (int a = 0; a < k; a++) {
-          sum += b[r * k + a] * w[a * d + c];
+          sum += b[r * n + a] * w[a * d + c];
         }
         cross.data[r * d + c] = sum;
       }

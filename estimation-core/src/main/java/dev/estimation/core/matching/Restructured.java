@@ -3,12 +3,14 @@ package dev.estimation.core.matching;
 import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
 
-/** A function that is said to read all of its input; its Jacobian is kept. */
-final class WholeInput implements VectorFunction {
+/** A function of which something else is said. */
+final class Restructured implements VectorFunction {
   private final VectorFunction function;
+  private final Structure structure;
 
-  WholeInput(VectorFunction function) {
+  Restructured(VectorFunction function, Structure structure) {
     this.function = function;
+    this.structure = structure;
   }
 
   @Override
@@ -18,6 +20,6 @@ final class WholeInput implements VectorFunction {
 
   @Override
   public Structure structure() {
-    return function.structure().withAllInputsActive();
+    return structure;
   }
 }

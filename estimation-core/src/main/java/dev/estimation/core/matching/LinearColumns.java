@@ -1,0 +1,174 @@
+package dev.estimation.core.matching;
+
+import dev.estimation.core.function.Jacobian;
+import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.internal.Checks;
+import dev.estimation.core.points.UnitPoints;
+import dev.estimation.core.space.Space;
+import java.util.Arrays;
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * What the inputs add in which a function is linear once the others are given: g(u) = A(u_a) u_b + c(u_a), with
+ * u_b = its mean given u_a, plus S s, s ~ N(0, I). At each point the columns A S, with the mean weight of the
+ * point; none where there are no such inputs. A is the part of the Jacobian that belongs to u_b, or comes from one
+ * more evaluation for each of them, exactly since g is linear in it.
+ */
+final class LinearColumns {
+  private final BaseWorkspace owner;
+  private final int nonlinear;
+  private final int count;
+  private final boolean centreWeighed;
+  private final double[] weights;
+  private final Jacobian jacobian;
+  private final double[] derivatives;
+  private final double[] displacement;
+  private final double[] moved;
+  private final double[] image;
+  private final double[] deviation;
+  private boolean jacobianFault;
+
+  private LinearColumns(
+      BaseWorkspace owner, VectorFunction function, UnitPoints points, int count) {
+    this.owner = owner;
+    this.count = count;
+    this.nonlinear = owner.active.count() - count;
+    this.jacobian = function.structure().jacobian().orElse(null);
+    this.centreWeighed = points.centreMeanWeight() != 0;
+    int first = centreWeighed ? count : 0;
+    this.weights = new double[count == 0 ? 0 : first + points.size() * count];
+    for (int i = 0; i < weights.length; i++) {
+      weights[i] = i < first ? points.centreMeanWeight() : points.weight((i - first) / count);
+    }
+    int n = owner.inputSpace.dimension();
+    int m = owner.outputSpace.dimension();
+    this.derivatives = new double[m * n];
+    this.displacement = new double[n];
+    this.moved = new double[owner.inputSpace.storage()];
+    this.image = new double[owner.outputSpace.storage()];
+    this.deviation = new double[m];
+  }
+
+  static LinearColumns of(BaseWorkspace owner, VectorFunction function, UnitPoints points) {
+    int count = owner.active.count() - points.dimension();
+    return new LinearColumns(owner, function, points, count);
+  }
+
+  /** The inputs that a function reads, those in which it is linear last. */
+  static int[] inputs(VectorFunction function, Space space) {
+    int[] bent = function.structure().nonlinearInputs(space.dimension());
+    int[] linear = function.structure().linearInputs();
+    int[] all = Arrays.copyOf(bent, bent.length + linear.length);
+    System.arraycopy(linear, 0, all, bent.length, linear.length);
+    return all;
+  }
+
+  double[] weights() {
+    return weights;
+  }
+
+  int count() {
+    return count;
+  }
+
+  /** The columns of the centre, if it has a weight; false if a value is not finite. */
+  boolean fillCentre(double[] mean, double[] given, double[] centre, double[] data, int stride) {
+    return count == 0
+        || !centreWeighed
+        || fill(stride - weights.length, mean, given, centre, data, stride);
+  }
+
+  /** The columns of a point; false if a value is not finite. */
+  boolean fillPoint(
+      int i, double[] point, double[] given, double[] output, double[] data, int stride) {
+    if (count == 0) {
+      return true;
+    }
+    int before = i + (centreWeighed ? 1 : 0);
+    return fill(stride - weights.length + before * count, point, given, output, data, stride);
+  }
+
+  private boolean fill(
+      int first, double[] point, double[] given, double[] output, double[] data, int stride) {
+    jacobianFault = false;
+    return jacobian == null
+        ? fillByDifferences(first, point, given, output, data, stride)
+        : fillByJacobian(first, point, given, data, stride);
+  }
+
+  private boolean fillByJacobian(
+      int first, double[] point, double[] given, double[] data, int stride) {
+    Arrays.fill(derivatives, 0);
+    jacobian.evaluate(owner.copied(point), given, derivatives);
+    owner.jacobians++;
+    if (!Checks.allFinite(derivatives)) {
+      jacobianFault = true;
+      return false;
+    }
+    int n = displacement.length;
+    double[] factor = owner.active.factor().data;
+    for (int c = 0; c < deviation.length; c++) {
+      int at = c * stride + first;
+      for (int q = 0; q < count; q++) {
+        data[at + q] = 0;
+      }
+      for (int b = 0; b < count; b++) {
+        int row = owner.active.input(nonlinear + b);
+        double derivative = derivatives[c * n + row];
+        if (derivative != 0) {
+          int column = row * n + nonlinear;
+          for (int q = 0; q <= b; q++) {
+            data[at + q] += derivative * factor[column + q];
+          }
+        }
+      }
+    }
+    return true;
+  }
+
+  private boolean fillByDifferences(
+      int first, double[] point, double[] given, double[] output, double[] data, int stride) {
+    DMatrixRMaj factor = owner.active.factor();
+    int n = displacement.length;
+    for (int q = 0; q < count; q++) {
+      Arrays.fill(displacement, 0);
+      for (int b = q; b < count; b++) {
+        int row = owner.active.input(nonlinear + b);
+        displacement[row] = factor.data[row * n + nonlinear + q];
+      }
+      owner.inputSpace.displace(point, displacement, moved);
+      if (!owner.function.evaluate(moved, given, image)) {
+        return false;
+      }
+      owner.outputSpace.difference(image, output, deviation);
+      for (int c = 0; c < deviation.length; c++) {
+        data[c * stride + first + q] = deviation[c];
+      }
+    }
+    return true;
+  }
+
+  /** The rows of W that belong to these inputs: the means of the columns. */
+  void fillCross(double[] w, WeightedColumns columns) {
+    int stride = columns.count();
+    int m = deviation.length;
+    for (int i = 0; i < weights.length; i++) {
+      int row = (nonlinear + i % count) * m;
+      for (int c = 0; c < m; c++) {
+        w[row + c] += weights[i] * columns.data()[c * stride + stride - weights.length + i];
+      }
+    }
+  }
+
+  /** Why a fill was false. */
+  MatchingStatus fault() {
+    return jacobianFault ? MatchingStatus.JACOBIAN_NOT_FINITE : MatchingStatus.FUNCTION_NOT_FINITE;
+  }
+
+  /** The entry of the Jacobian that is not finite. */
+  String failure() {
+    int n = displacement.length;
+    int bad = Checks.firstNotFinite(derivatives);
+    return "Jacobian[" + bad / n + "][" + bad % n + "] must be finite, got " + derivatives[bad];
+  }
+}

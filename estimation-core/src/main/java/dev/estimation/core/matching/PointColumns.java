@@ -1,0 +1,139 @@
+package dev.estimation.core.matching;
+
+import dev.estimation.core.gaussian.Form;
+import dev.estimation.core.points.UnitPoints;
+import java.util.Arrays;
+
+/**
+ * The weighted columns of a point matching, in this order: one for each point, one for delta, and those of
+ * linear inputs. Two ways of writing one covariance:
+ *
+ * <ul>
+ *   <li>about the centre's image: columns d_i, and delta with weight wc_0 - wm_0 - 1;
+ *   <li>about the mean: columns d_i - delta, and delta with weight wc_0.
+ * </ul>
+ *
+ * <p>The first serves where its weight is not negative: a huge negative centre weight then costs no digits. The
+ * second serves the others if wc_0 is not negative, and all is a sum of squares again. Where both are negative,
+ * the smaller is subtracted.
+ */
+final class PointColumns {
+  private final UnitPoints points;
+  private final boolean aboutMean;
+  private final double[] meanWeights;
+  private final double[] weights;
+  private final WeightedColumns total;
+  private final WeightedColumns left;
+  private final int rows;
+  private final int deltaColumn;
+
+  PointColumns(int rows, UnitPoints points, double[] linearWeights, Form form) {
+    this.points = points;
+    this.rows = rows;
+    int size = points.size();
+    double wc = points.isSample() ? 0 : points.centreCovarianceWeight();
+    double aboutCentre = points.isSample() ? -1 : wc - points.centreMeanWeight() - 1;
+    this.aboutMean = aboutCentre < 0 && Math.min(0, wc) >= aboutCentre;
+    double deltaWeight = aboutMean ? wc : aboutCentre;
+    this.meanWeights = new double[size];
+    Arrays.setAll(meanWeights, points::weight);
+    int extra = deltaWeight == 0 ? 0 : 1;
+    this.deltaColumn = extra == 0 ? -1 : size;
+    this.weights = Arrays.copyOf(meanWeights, size + extra + linearWeights.length);
+    if (points.isSample()) {
+      Arrays.fill(weights, 0, size, 1.0 / (size - 1));
+    }
+    if (extra == 1) {
+      weights[size] = deltaWeight;
+    }
+    System.arraycopy(linearWeights, 0, weights, size + extra, linearWeights.length);
+    this.total = new WeightedColumns(rows, weights, form);
+    this.left = new WeightedColumns(rows, weights, form);
+  }
+
+  WeightedColumns total() {
+    return total;
+  }
+
+  /** delta = sum w_i d_i. */
+  void fillShift(double[] shift) {
+    double[] data = total.data();
+    int stride = weights.length;
+    int size = meanWeights.length;
+    for (int c = 0; c < rows; c++) {
+      int at = c * stride;
+      double sum = 0;
+      for (int i = 0; i < size; i++) {
+        sum += meanWeights[i] * data[at + i];
+      }
+      shift[c] = sum;
+    }
+  }
+
+  /** Brings the columns of points about the mean if need be, and sets that of delta. */
+  void centre(double[] shift) {
+    double[] data = total.data();
+    int stride = weights.length;
+    int size = meanWeights.length;
+    for (int c = 0; c < rows; c++) {
+      int at = c * stride;
+      if (aboutMean) {
+        double delta = shift[c];
+        for (int i = 0; i < size; i++) {
+          data[at + i] -= delta;
+        }
+      }
+      if (deltaColumn >= 0) {
+        data[at + deltaColumn] = shift[c];
+      }
+    }
+  }
+
+  /** W = sum w_i xi_i d_i', over the axes of the points; about the mean it is the same. */
+  void fillCross(double[] w) {
+    double[] data = total.data();
+    int stride = weights.length;
+    Arrays.fill(w, 0);
+    for (int i = 0; i < meanWeights.length; i++) {
+      int end = points.start(i + 1);
+      for (int entry = points.start(i); entry < end; entry++) {
+        double factor = weights[i] * points.coordinate(entry);
+        int row = points.axis(entry) * rows;
+        for (int c = 0, at = i; c < rows; c++, at += stride) {
+          w[row + c] += factor * data[at];
+        }
+      }
+    }
+  }
+
+  /**
+   * What regression leaves: W' xi_i taken from the column of point i, and from each column of a linear input
+   * its mean, the row of W that belongs to it.
+   *
+   * @param w W, k x m
+   * @param linearInputs how many of the k, the last
+   */
+  WeightedColumns residuals(double[] w, int linearInputs) {
+    double[] rest = left.data();
+    System.arraycopy(total.data(), 0, rest, 0, rest.length);
+    int stride = weights.length;
+    for (int i = 0; i < meanWeights.length; i++) {
+      int end = points.start(i + 1);
+      for (int entry = points.start(i); entry < end; entry++) {
+        double coordinate = points.coordinate(entry);
+        int row = points.axis(entry) * rows;
+        for (int c = 0, at = i; c < rows; c++, at += stride) {
+          rest[at] -= coordinate * w[row + c];
+        }
+      }
+    }
+    int first = meanWeights.length + (deltaColumn >= 0 ? 1 : 0);
+    for (int i = first; i < stride; i++) {
+      int row = (points.dimension() + (i - first) % linearInputs) * rows;
+      for (int c = 0, at = i; c < rows; c++, at += stride) {
+        rest[at] -= w[row + c];
+      }
+    }
+    return left;
+  }
+}

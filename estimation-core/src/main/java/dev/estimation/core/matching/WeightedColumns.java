@@ -1,0 +1,104 @@
+package dev.estimation.core.matching;
+
+import dev.estimation.core.gaussian.Covariance;
+import dev.estimation.core.gaussian.Form;
+import dev.estimation.core.internal.Householder;
+import dev.estimation.core.internal.Products;
+import dev.estimation.core.internal.SymmetricMatrix;
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * A covariance as a weighted sum of squares of columns, C D C', with additive noise. {@link #data()} is
+ * row by row: inner loops run over columns, of which there are many, not over the few components.
+ */
+final class WeightedColumns {
+  private final int rows;
+  private final double[] weights;
+  private final double[] data;
+  private final Form form;
+  private final int positives;
+  private final double[] scaled;
+  private final double[] column;
+
+  WeightedColumns(int rows, double[] weights, Form form) {
+    this.rows = rows;
+    this.weights = weights;
+    this.data = new double[rows * weights.length];
+    this.form = form;
+    int count = 0;
+    for (double weight : weights) {
+      count += weight > 0 ? 1 : 0;
+    }
+    this.positives = count;
+    this.scaled = new double[form == Form.SQUARE_ROOT ? rows * count : 0];
+    this.column = new double[rows];
+  }
+
+  /** Component c of column i stands at c * count() + i. */
+  double[] data() {
+    return data;
+  }
+
+  double[] weights() {
+    return weights;
+  }
+
+  int count() {
+    return weights.length;
+  }
+
+  /**
+   * Fills a covariance with C D C' + noise; false if it is to be a factor and a downdate fails.
+   *
+   * @param noise or null
+   */
+  boolean fill(Covariance noise, Covariance result) {
+    if (form == Form.SQUARE_ROOT) {
+      return fillFactor(noise, result.changeFactor().data);
+    }
+    DMatrixRMaj matrix = result.changeMatrix();
+    Products.fillOuterProduct(data, weights, rows, weights.length, matrix.data);
+    if (noise != null) {
+      addLower(noise.matrix().data, matrix.data);
+    }
+    SymmetricMatrix.mirrorLower(matrix);
+    return true;
+  }
+
+  private void addLower(double[] noise, double[] matrix) {
+    for (int r = 0; r < rows; r++) {
+      for (int c = 0; c <= r; c++) {
+        matrix[r * rows + c] += noise[r * rows + c];
+      }
+    }
+  }
+
+  private boolean fillFactor(Covariance noise, double[] lower) {
+    for (int i = 0; i < rows * rows; i++) {
+      lower[i] = noise == null ? 0 : noise.lowerFactor().data[i];
+    }
+    int at = 0;
+    for (int r = 0; r < rows; r++) {
+      for (int i = 0; i < weights.length; i++) {
+        if (weights[i] > 0) {
+          scaled[at++] = Math.sqrt(weights[i]) * data[r * weights.length + i];
+        }
+      }
+    }
+    Householder.reduceLower(lower, rows, scaled, rows, positives);
+    for (int i = 0; i < weights.length; i++) {
+      if (weights[i] < 0 && !subtractColumn(i, lower)) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  private boolean subtractColumn(int i, double[] lower) {
+    double root = Math.sqrt(-weights[i]);
+    for (int r = 0; r < rows; r++) {
+      column[r] = root * data[r * weights.length + i];
+    }
+    return Householder.downdate(lower, rows, column);
+  }
+}

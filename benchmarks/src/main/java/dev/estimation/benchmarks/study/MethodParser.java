@@ -9,6 +9,7 @@ import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.PointRule;
 import dev.estimation.core.points.RandomRule;
+import dev.estimation.core.points.SparseGridRule;
 import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.filters.filter.IteratedUpdate;
 import java.util.List;
@@ -16,11 +17,13 @@ import java.util.List;
 /**
  * Reads methods: {@code linear}, {@code linear-iterated}, {@code linear-iterated:line-search},
  * {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
- * 3-n}), {@code cubature}, {@code hermite:NODES}, {@code random:COUNT,SEED}.
+ * 3-n}), {@code cubature}, {@code hermite:NODES}, {@code sparse:LEVEL}, {@code
+ * sparse-degree:DEGREE}, {@code random:COUNT,SEED}.
  */
 final class MethodParser {
   static final String FORMS = "linear, linear-iterated, linear-iterated:line-search,"
-      + " unscented:ALPHA,BETA,KAPPA, cubature, hermite:NODES, random:COUNT,SEED";
+      + " unscented:ALPHA,BETA,KAPPA, cubature, hermite:NODES, sparse:LEVEL, sparse-degree:DEGREE,"
+      + " random:COUNT,SEED";
 
   /** What is run when nothing is asked for. */
   static final List<String> DEFAULT = List.of(
@@ -82,6 +85,14 @@ final class MethodParser {
       case "hermite" -> {
         requireCount(typed, settings, 1);
         yield GaussHermiteRule.product(wholeNumber(typed, "NODES", settings[0]));
+      }
+      case "sparse" -> {
+        requireCount(typed, settings, 1);
+        yield SparseGridRule.ofLevel(wholeNumber(typed, "LEVEL", settings[0]));
+      }
+      case "sparse-degree" -> {
+        requireCount(typed, settings, 1);
+        yield SparseGridRule.ofDegree(wholeNumber(typed, "DEGREE", settings[0]));
       }
       case "random" -> {
         requireCount(typed, settings, 2);

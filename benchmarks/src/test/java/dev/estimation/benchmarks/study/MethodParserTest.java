@@ -23,7 +23,8 @@ class MethodParserTest {
   /**
    * The variance of a sum of two squares tells parameters apart. By hand: with c^2 = alpha^2 (2 +
    * kappa), all points have the value c^2 and the weights 1 / (2 c^2), so the mean is 2 and the
-   * variance 2 c^2 + 4 (beta - alpha^2). Cubature: as alpha 1, beta and kappa 0. Exact: 4.
+   * variance 2 c^2 + 4 (beta - alpha^2). Cubature: as alpha 1, beta and kappa 0. Sparse
+   * grids of degree 3 have 4 points at sqrt 3 of weight 1/6: 4 * 9 / 6 - 2^2. Exact: 4.
    */
   @ParameterizedTest
   @CsvSource({
@@ -34,7 +35,11 @@ class MethodParserTest {
     "'unscented:1,1,4-n', 8",
     "'unscented:+1.0,-0.5,3e0', 4",
     "cubature, 0",
-    "hermite:3, 4"
+    "hermite:3, 4",
+    "sparse:1, 2",
+    "sparse:2, 4",
+    "sparse-degree:3, 2",
+    "sparse-degree:5, 4"
   })
   void readsItsNumbers(String typed, double variance) {
     Method method = MethodParser.parse(typed);
@@ -107,6 +112,16 @@ class MethodParserTest {
         "hermite:3.5",
         "hermite:101",
         "hermite:3,3",
+        "sparse",
+        "sparse:",
+        "sparse:0",
+        "sparse:5",
+        "sparse:2.5",
+        "sparse:1,2",
+        "sparse-degree",
+        "sparse-degree:1",
+        "sparse-degree:52",
+        "sparse-degree:x",
         "random",
         "random:10",
         "random:1,5",

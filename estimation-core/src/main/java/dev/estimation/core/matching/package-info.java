@@ -17,6 +17,8 @@
  *     <td>points move out as sqrt(n); never indefinite</td></tr>
  *   <tr><td>{@code GaussHermiteRule}</td><td>p^n</td><td>mean to degree 2 p - 1 an axis</td>
  *     <td>cost grows exponentially in n; never indefinite</td></tr>
+ *   <tr><td>{@code SparseGridRule}</td><td>about (2 n)^q / q!</td><td>mean to total degree 2 q + 1 or
+ *     more</td><td>some weights are negative: covariance may turn indefinite</td></tr>
  *   <tr><td>{@code RandomRule}</td><td>N + 1</td><td>nothing; affine g if standardised</td>
  *     <td>error shrinks as 1 / sqrt N; independent draws come with standard errors</td></tr>
  * </table>

@@ -18,6 +18,7 @@ public final class Covariance {
   private final LowerFactor factor;
   private final double[] ones;
   private boolean matrixKnown = true;
+  private boolean mirrored = true;
   private boolean factorKnown;
 
   /**
@@ -39,19 +40,37 @@ public final class Covariance {
 
   /** {@return P: the matrix itself, to be read only, valid until the next change} */
   public DMatrixRMaj matrix() {
+    lowerTriangle();
+    if (!mirrored) {
+      SymmetricMatrix.mirrorLower(matrix);
+      mirrored = true;
+    }
+    return matrix;
+  }
+
+  /** {@return P, of which only the entries on and below the diagonal are valid; as {@link #matrix()}} */
+  public DMatrixRMaj lowerTriangle() {
     if (!matrixKnown) {
       int d = ones.length;
       Products.fillOuterProduct(factor.columns().data, ones, d, d, matrix.data);
-      SymmetricMatrix.mirrorLower(matrix);
       matrixKnown = true;
+      mirrored = false;
     }
     return matrix;
   }
 
   /** {@return P, to be filled entirely and symmetrically; forgets the factor} */
   public DMatrixRMaj changeMatrix() {
+    mirrored = true;
     matrixKnown = true;
     factorKnown = false;
+    return matrix;
+  }
+
+  /** {@return P, to be filled on and below the diagonal; forgets the factor} */
+  public DMatrixRMaj changeLowerTriangle() {
+    changeMatrix();
+    mirrored = false;
     return matrix;
   }
 
@@ -106,6 +125,7 @@ public final class Covariance {
    */
   public void set(Covariance other) {
     matrixKnown = other.matrixKnown;
+    mirrored = other.mirrored;
     factorKnown = other.factorKnown;
     if (matrixKnown) {
       System.arraycopy(other.matrix.data, 0, matrix.data, 0, matrix.getNumElements());

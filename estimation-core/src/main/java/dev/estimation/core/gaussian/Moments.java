@@ -53,8 +53,8 @@ public final class Moments {
     return covariance.changeMatrix();
   }
 
-  /** {@return the covariance with its factor, to be changed by filling either} */
-  public Covariance changeCovarianceOrFactor() {
+  /** {@return the covariance with its factor: the object itself, to be changed by filling either} */
+  public Covariance factoredCovariance() {
     return covariance;
   }
 

@@ -25,6 +25,10 @@ public final class LowerFactor {
   private final DMatrixRMaj columns;
   private final double[] inverse;
   private final double[] growth;
+  private final int[] start;
+  private final double[] least;
+  private final int[] from;
+  private final int[] to;
   private int growthKnown;
   private int failedPivot = -1;
   private double failedValue;
@@ -50,6 +54,17 @@ public final class LowerFactor {
     this.columns = new DMatrixRMaj(size, size);
     this.inverse = new double[size];
     this.growth = new double[size];
+    this.start = Arrays.stream(order).map(row -> row * size).toArray();
+    this.least = new double[size];
+    this.from = new int[size * (size + 1) / 2];
+    this.to = new int[from.length];
+    for (int q = 0, i = 0; q < size; q++) {
+      for (int c = 0; c <= q; c++, i++) {
+        int row = Math.max(order[q], order[c]);
+        from[i] = row * size + Math.min(order[q], order[c]);
+        to[i] = start[q] + c;
+      }
+    }
   }
 
   private static int[] naturalOrder(int size) {
@@ -85,16 +100,31 @@ public final class LowerFactor {
     return factor(matrix, false);
   }
 
-  /** Row by row: the entries left of the diagonal, then the pivot. */
+  /** Plainly if every pivot is large, else with a close look at each. */
   private boolean factor(DMatrixRMaj matrix, boolean definite) {
     double[] p = matrix.data;
+    for (int i = 0; i < from.length; i++) {
+      columns.data[to[i]] = p[from[i]];
+    }
+    for (int q = 0; q < size; q++) {
+      least[q] = NEARLY_ZERO * p[order[q] * (size + 1)];
+    }
+    if (PlainCholesky.factor(columns.data, start, least)) {
+      failedPivot = -1;
+      return true;
+    }
+    return factorCarefully(p, definite);
+  }
+
+  /** Row by row: the entries left of the diagonal, then the pivot. */
+  private boolean factorCarefully(double[] p, boolean definite) {
     double[] b = columns.data;
     int n = size;
     growthKnown = 0;
     for (int q = 0; q < n; q++) {
       int row = order[q];
       for (int c = 0; c < q; c++) {
-        double rest = p[row * n + order[c]] - dot(b, row * n, order[c] * n, c);
+        double rest = lower(p, row, order[c]) - dot(b, row * n, order[c] * n, c);
         if (inverse[c] == 0 && !vanishes(rest, p, row, c)) {
           return fail(c, 0);
         }
@@ -109,7 +139,7 @@ public final class LowerFactor {
     return true;
   }
 
-  /** Sets the diagonal entry and zeros right of it; false if the pivot is not allowed. */
+  /** Sets the diagonal entry; false if the pivot is not allowed. */
   private boolean setPivot(double pivot, double[] p, int q, boolean definite) {
     int row = order[q];
     double variance = p[row * (size + 1)];
@@ -122,9 +152,6 @@ public final class LowerFactor {
     double[] b = columns.data;
     b[row * size + q] = root;
     inverse[q] = root == 0 ? 0 : 1 / root;
-    for (int c = q + 1; c < size; c++) {
-      b[row * size + c] = 0;
-    }
     return true;
   }
 
@@ -140,6 +167,10 @@ public final class LowerFactor {
       return Math.sqrt(pivot);
     }
     return definite ? Double.NaN : 0;
+  }
+
+  private double lower(double[] p, int row, int column) {
+    return p[row >= column ? row * size + column : column * size + row];
   }
 
   private boolean vanishes(double rest, double[] p, int row, int c) {
@@ -204,32 +235,31 @@ public final class LowerFactor {
 
   /**
    * Takes what was filled into {@link #columns()}, a lower triangular matrix in this object's order, for the
-   * factor. Wants every diagonal entry to be 0 or more, and finite numbers.
+   * factor.
    *
-   * @return whether that is so
+   * @return whether every diagonal entry is finite and 0 or more
    */
   public boolean accept() {
     failedPivot = -1;
     for (int q = 0; q < size; q++) {
-      int row = order[q] * size;
-      double root = columns.data[row + q];
-      double scale = 0;
-      for (int c = 0; c <= q; c++) {
-        scale += Math.abs(columns.data[row + c]);
-      }
-      if (!(root >= 0 && scale <= Double.MAX_VALUE)) {
+      double root = columns.data[order[q] * size + q];
+      if (!(root >= 0 && root <= Double.MAX_VALUE)) {
         return fail(q, root);
       }
-      inverse[q] = root > size * EPSILON * scale ? 1 / root : 0;
     }
     return true;
   }
 
-  /** {@return whether no pivot is zero, of a factor that is there} */
+  /** {@return whether no pivot of the factor is zero, or as small as the rounding of its row} */
   public boolean isDefinite() {
     for (int q = 0; q < size; q++) {
-      if (inverse[q] == 0) {
-        return fail(q, 0);
+      int row = order[q] * size;
+      double scale = 0;
+      for (int c = 0; c <= q; c++) {
+        scale += Math.abs(columns.data[row + c]);
+      }
+      if (!(columns.data[row + q] > size * EPSILON * scale)) {
+        return fail(q, columns.data[row + q] * columns.data[row + q]);
       }
     }
     return true;
@@ -242,7 +272,6 @@ public final class LowerFactor {
    */
   public void set(LowerFactor other) {
     System.arraycopy(other.columns.data, 0, columns.data, 0, columns.getNumElements());
-    System.arraycopy(other.inverse, 0, inverse, 0, inverse.length);
     failedPivot = other.failedPivot;
     failedValue = other.failedValue;
   }
@@ -269,15 +298,19 @@ public final class LowerFactor {
       for (int c = 0; c < r; c++) {
         sum -= l[r * size + c] * b[start + c];
       }
-      b[start + r] = sum * inverse[r];
+      b[start + r] = divided(sum, l[r * (size + 1)]);
     }
     for (int r = size - 1; r >= 0; r--) {
       double sum = b[start + r];
       for (int c = r + 1; c < size; c++) {
         sum -= l[c * size + r] * b[start + c];
       }
-      b[start + r] = sum * inverse[r];
+      b[start + r] = divided(sum, l[r * (size + 1)]);
     }
+  }
+
+  private static double divided(double sum, double pivot) {
+    return pivot == 0 ? 0 : sum / pivot;
   }
 
   /** {@return twice the sum of the logarithms of the diagonal: ln det of the factored matrix} */

@@ -63,6 +63,23 @@ public final class Products {
     }
   }
 
+  /**
+   * The sum of the squares of all numbers.
+   *
+   * @param a read
+   * @return the sum
+   */
+  public static double sumOfSquares(double[] a) {
+    double even = 0;
+    double odd = 0;
+    int i = 0;
+    for (; i + 1 < a.length; i += 2) {
+      even += a[i] * a[i];
+      odd += a[i + 1] * a[i + 1];
+    }
+    return i < a.length ? even + odd + a[i] * a[i] : even + odd;
+  }
+
   private static void fillLastRow(double[] a, double[] weights, int m, int p, double[] lower) {
     int last = (m - 1) * p;
     for (int c = 0; c + 1 < m; c += 2) {

@@ -65,7 +65,7 @@ final class ActiveFactor {
   /** Makes L; false if the covariance is not positive semi-definite. */
   boolean factor(Moments input) {
     if (ordered != null) {
-      return ordered.factorSemidefinite(input.covariance())
+      return ordered.factorSemidefinite(input.factoredCovariance().lowerTriangle())
           ? take(ordered.columns())
           : fail(ordered.failedPivot(), ordered.failedValue());
     }

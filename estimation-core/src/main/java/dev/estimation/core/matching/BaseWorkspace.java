@@ -28,6 +28,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   private final Covariance unexplained;
   private final double[] handed;
   private boolean noisy;
+  private boolean outputKnown = true;
   private boolean crossKnown;
   private boolean unexplainedKnown;
   private MatchingStatus status = MatchingStatus.MATCHED;
@@ -52,18 +53,20 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   }
 
   @Override
-  public final MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise) {
+  public final MatchingStatus carry(
+      Moments input, double[] given, Covariance additiveNoise, Use use) {
     checkShapes(input, additiveNoise);
     function.reset();
     jacobians = 0;
     crossKnown = false;
     unexplainedKnown = false;
     status = MatchingStatus.MATCHED;
-    status = carryChecked(input, given, additiveNoise);
+    status = carryChecked(input, given, additiveNoise, use);
     return status;
   }
 
-  private MatchingStatus carryChecked(Moments input, double[] given, Covariance additiveNoise) {
+  private MatchingStatus carryChecked(
+      Moments input, double[] given, Covariance additiveNoise, Use use) {
     double[] mean = input.mean();
     if (!Checks.allFinite(mean)) {
       failedIndex = Checks.firstNotFinite(mean);
@@ -87,18 +90,19 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     if (noisy) {
       noise.set(additiveNoise);
     }
-    boolean definite = columns().fill(noisy ? noise : null, output.changeCovarianceOrFactor());
-    if (!Checks.allFinite(output.mean()) || !isFinite(output)) {
-      return noisy
-          ? faultOf(additiveNoise, MatchingStatus.OUTPUT_NOT_FINITE)
-          : MatchingStatus.OUTPUT_NOT_FINITE;
+    outputKnown = false;
+    MatchingStatus ended = use == Use.PREDICTION ? fillCovariance() : MatchingStatus.MATCHED;
+    if (Checks.allFinite(output.mean()) && ended != MatchingStatus.OUTPUT_NOT_FINITE) {
+      return ended;
     }
-    return definite ? MatchingStatus.MATCHED : MatchingStatus.OUTPUT_NOT_DEFINITE;
+    return noisy
+        ? faultOf(additiveNoise, MatchingStatus.OUTPUT_NOT_FINITE)
+        : MatchingStatus.OUTPUT_NOT_FINITE;
   }
 
-  private boolean isFinite(Moments moments) {
-    return SymmetricMatrix.allFinite(
-        form == Form.COVARIANCE ? moments.covariance() : moments.lowerFactor());
+  private MatchingStatus fillCovariance() {
+    outputKnown = true;
+    return columns().fill(noisy ? noise : null, output.factoredCovariance());
   }
 
   /** The noise that is not finite, or another fault. */
@@ -151,7 +155,15 @@ abstract class BaseWorkspace implements MatchingWorkspace {
 
   @Override
   public final Moments output() {
+    if (!outputKnown) {
+      fillCovariance();
+    }
     return output;
+  }
+
+  @Override
+  public final double[] mean() {
+    return output.mean();
   }
 
   @Override

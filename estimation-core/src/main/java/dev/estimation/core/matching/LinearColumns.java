@@ -6,7 +6,6 @@ import dev.estimation.core.internal.Checks;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
-import org.ejml.data.DMatrixRMaj;
 
 /**
  * What the inputs add in which a function is linear once the others are given: g(u) = A(u_a) u_b + c(u_a), with
@@ -15,12 +14,17 @@ import org.ejml.data.DMatrixRMaj;
  * more evaluation for each of them, exactly since g is linear in it.
  */
 final class LinearColumns {
+  private static final int BLOCK = 4;
+
   private final BaseWorkspace owner;
   private final int nonlinear;
   private final int count;
   private final boolean centreWeighed;
   private final double[] weights;
   private final Jacobian jacobian;
+  private final int[] inputs;
+  private final int width;
+  private final double[] root;
   private final double[] derivatives;
   private final double[] displacement;
   private final double[] moved;
@@ -40,6 +44,10 @@ final class LinearColumns {
     for (int i = 0; i < weights.length; i++) {
       weights[i] = i < first ? points.centreMeanWeight() : points.weight((i - first) / count);
     }
+    this.inputs = new int[count];
+    Arrays.setAll(inputs, b -> owner.active.input(nonlinear + b));
+    this.width = (count + BLOCK - 1) / BLOCK * BLOCK;
+    this.root = new double[count * width];
     int n = owner.inputSpace.dimension();
     int m = owner.outputSpace.dimension();
     this.derivatives = new double[m * n];
@@ -71,8 +79,13 @@ final class LinearColumns {
     return count;
   }
 
-  /** The columns of the centre, if it has a weight; false if a value is not finite. */
+  /**
+   * Begins a call, and fills the columns of the centre if it has a weight; false if a value is not finite.
+   */
   boolean fillCentre(double[] mean, double[] given, double[] centre, double[] data, int stride) {
+    if (count > 0) {
+      takeRoot();
+    }
     return count == 0
         || !centreWeighed
         || fill(stride - weights.length, mean, given, centre, data, stride);
@@ -88,6 +101,18 @@ final class LinearColumns {
     return fill(stride - weights.length + before * count, point, given, output, data, stride);
   }
 
+  /** S, its rows padded with zeros to whole blocks. */
+  private void takeRoot() {
+    double[] factor = owner.active.factor().data;
+    int n = displacement.length;
+    for (int b = 0; b < count; b++) {
+      int row = inputs[b] * n + nonlinear;
+      for (int q = 0; q < count; q++) {
+        root[b * width + q] = factor[row + q];
+      }
+    }
+  }
+
   private boolean fill(
       int first, double[] point, double[] given, double[] output, double[] data, int stride) {
     jacobianFault = false;
@@ -101,40 +126,50 @@ final class LinearColumns {
     Arrays.fill(derivatives, 0);
     jacobian.evaluate(owner.copied(point), given, derivatives);
     owner.jacobians++;
-    if (!Checks.allFinite(derivatives)) {
-      jacobianFault = true;
-      return false;
-    }
-    int n = displacement.length;
-    double[] factor = owner.active.factor().data;
+    double zero = 0;
     for (int c = 0; c < deviation.length; c++) {
-      int at = c * stride + first;
-      for (int q = 0; q < count; q++) {
-        data[at + q] = 0;
+      zero += fillRow(c * displacement.length, data, c * stride + first);
+    }
+    jacobianFault = zero != 0;
+    return !jacobianFault;
+  }
+
+  /** A row of A S, four columns at a time. Zero, or NaN if A has something that is not finite. */
+  private double fillRow(int row, double[] data, int at) {
+    double zero = 0;
+    for (int q = 0; q < count; q += BLOCK) {
+      double sum0 = 0;
+      double sum1 = 0;
+      double sum2 = 0;
+      double sum3 = 0;
+      for (int b = 0, column = q; b < count; b++, column += width) {
+        double derivative = derivatives[row + inputs[b]];
+        zero += derivative * 0;
+        sum0 += derivative * root[column];
+        sum1 += derivative * root[column + 1];
+        sum2 += derivative * root[column + 2];
+        sum3 += derivative * root[column + 3];
       }
-      for (int b = 0; b < count; b++) {
-        int row = owner.active.input(nonlinear + b);
-        double derivative = derivatives[c * n + row];
-        if (derivative != 0) {
-          int column = row * n + nonlinear;
-          for (int q = 0; q <= b; q++) {
-            data[at + q] += derivative * factor[column + q];
-          }
-        }
+      data[at + q] = sum0;
+      if (q + 1 < count) {
+        data[at + q + 1] = sum1;
+      }
+      if (q + 2 < count) {
+        data[at + q + 2] = sum2;
+      }
+      if (q + 3 < count) {
+        data[at + q + 3] = sum3;
       }
     }
-    return true;
+    return zero;
   }
 
   private boolean fillByDifferences(
       int first, double[] point, double[] given, double[] output, double[] data, int stride) {
-    DMatrixRMaj factor = owner.active.factor();
-    int n = displacement.length;
     for (int q = 0; q < count; q++) {
       Arrays.fill(displacement, 0);
       for (int b = q; b < count; b++) {
-        int row = owner.active.input(nonlinear + b);
-        displacement[row] = factor.data[row * n + nonlinear + q];
+        displacement[inputs[b]] = root[b * width + q];
       }
       owner.inputSpace.displace(point, displacement, moved);
       if (!owner.function.evaluate(moved, given, image)) {

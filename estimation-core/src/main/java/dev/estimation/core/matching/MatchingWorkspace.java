@@ -20,11 +20,27 @@ public interface MatchingWorkspace {
    * @param input read; its lower factor is made if it has none
    * @param given read and handed to the function
    * @param additiveNoise covariance added to the output's, m x m, read; or null
+   * @param use what the result is for
    * @return {@link MatchingStatus#MATCHED} if the results below are valid; otherwise they are not, and
    *     {@link #failure()} says what was wrong
    * @throws IllegalArgumentException if a shape is wrong
    */
-  MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise);
+  MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise, Use use);
+
+  /**
+   * Carries moments for a prediction; see {@link #carry(Moments, double[], Covariance, Use)}.
+   *
+   * @param input read
+   * @param given read and handed to the function
+   * @param additiveNoise read; or null
+   * @return how it ended
+   */
+  default MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise) {
+    return carry(input, given, additiveNoise, Use.PREDICTION);
+  }
+
+  /** {@return the mean of the output; read only, valid until the next call} */
+  double[] mean();
 
   /**
    * The result, in the form of this workspace: a covariance, symmetric and finite, or a lower factor. Whether a

@@ -9,17 +9,18 @@ import java.util.Arrays;
  * linear inputs. Two ways of writing one covariance:
  *
  * <ul>
- *   <li>about the centre's image: columns d_i, and delta with weight wc_0 - wm_0 - 1;
- *   <li>about the mean: columns d_i - delta, and delta with weight wc_0.
+ *   <li>about the centre's image: columns d_i, and delta with weight f = wc_0 - wm_0 - 1;
+ *   <li>about the mean of the points alone: columns d_i - delta / V, V = sum w_i = 1 - wm_0, and delta with
+ *       weight f + 1 / V, the largest that any centre gives.
  * </ul>
  *
  * <p>The first serves where its weight is not negative: a huge negative centre weight then costs no digits. The
- * second serves the others if wc_0 is not negative, and all is a sum of squares again. Where both are negative,
- * the smaller is subtracted.
+ * second serves the others: nothing is subtracted then unless the rule itself cannot promise a positive
+ * semi-definite result.
  */
 final class PointColumns {
   private final UnitPoints points;
-  private final boolean aboutMean;
+  private final double shiftFraction;
   private final double[] meanWeights;
   private final double[] weights;
   private final WeightedColumns total;
@@ -31,10 +32,10 @@ final class PointColumns {
     this.points = points;
     this.rows = rows;
     int size = points.size();
-    double wc = points.isSample() ? 0 : points.centreCovarianceWeight();
-    double aboutCentre = points.isSample() ? -1 : wc - points.centreMeanWeight() - 1;
-    this.aboutMean = aboutCentre < 0 && Math.min(0, wc) >= aboutCentre;
-    double deltaWeight = aboutMean ? wc : aboutCentre;
+    double sum = 1 - points.centreMeanWeight();
+    double aboutCentre = points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
+    this.shiftFraction = aboutCentre < 0 && sum > 0 ? 1 / sum : 0;
+    double deltaWeight = aboutCentre + shiftFraction;
     this.meanWeights = new double[size];
     Arrays.setAll(meanWeights, points::weight);
     int extra = deltaWeight == 0 ? 0 : 1;
@@ -77,8 +78,8 @@ final class PointColumns {
     int size = meanWeights.length;
     for (int c = 0; c < rows; c++) {
       int at = c * stride;
-      if (aboutMean) {
-        double delta = shift[c];
+      if (shiftFraction != 0) {
+        double delta = shiftFraction * shift[c];
         for (int i = 0; i < size; i++) {
           data[at + i] -= delta;
         }

@@ -2,10 +2,9 @@ package dev.estimation.core.matching;
 
 import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.gaussian.Form;
+import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.Householder;
 import dev.estimation.core.internal.Products;
-import dev.estimation.core.internal.SymmetricMatrix;
-import org.ejml.data.DMatrixRMaj;
 
 /**
  * A covariance as a weighted sum of squares of columns, C D C', with additive noise. {@link #data()} is
@@ -48,32 +47,45 @@ final class WeightedColumns {
   }
 
   /**
-   * Fills a covariance with C D C' + noise; false if it is to be a factor and a downdate fails.
+   * Fills a covariance, or its factor, with C D C' + noise.
    *
    * @param noise or null
+   * @return MATCHED, OUTPUT_NOT_FINITE, or OUTPUT_NOT_DEFINITE if it is to be a factor and there is none
    */
-  boolean fill(Covariance noise, Covariance result) {
+  MatchingStatus fill(Covariance noise, Covariance result) {
     if (form == Form.SQUARE_ROOT) {
       return fillFactor(noise, result.changeFactor().data);
     }
-    DMatrixRMaj matrix = result.changeMatrix();
-    Products.fillOuterProduct(data, weights, rows, weights.length, matrix.data);
-    if (noise != null) {
-      addLower(noise.matrix().data, matrix.data);
-    }
-    SymmetricMatrix.mirrorLower(matrix);
-    return true;
+    double[] lower = result.changeLowerTriangle().data;
+    Products.fillOuterProduct(data, weights, rows, weights.length, lower);
+    double zero = noise == null ? lowerTimesZero(lower) : addLower(noise.matrix().data, lower);
+    return zero == 0 ? MatchingStatus.MATCHED : MatchingStatus.OUTPUT_NOT_FINITE;
   }
 
-  private void addLower(double[] noise, double[] matrix) {
+  /** Zero if every sum is finite, else NaN. */
+  private double addLower(double[] noise, double[] lower) {
+    double zero = 0;
     for (int r = 0; r < rows; r++) {
-      for (int c = 0; c <= r; c++) {
-        matrix[r * rows + c] += noise[r * rows + c];
+      int end = r * rows + r;
+      for (int i = r * rows; i <= end; i++) {
+        lower[i] += noise[i];
+        zero += lower[i] * 0;
       }
     }
+    return zero;
   }
 
-  private boolean fillFactor(Covariance noise, double[] lower) {
+  private double lowerTimesZero(double[] lower) {
+    double zero = 0;
+    for (int r = 0; r < rows; r++) {
+      for (int c = 0; c <= r; c++) {
+        zero += lower[r * rows + c] * 0;
+      }
+    }
+    return zero;
+  }
+
+  private MatchingStatus fillFactor(Covariance noise, double[] lower) {
     for (int i = 0; i < rows * rows; i++) {
       lower[i] = noise == null ? 0 : noise.lowerFactor().data[i];
     }
@@ -86,12 +98,15 @@ final class WeightedColumns {
       }
     }
     Householder.reduceLower(lower, rows, scaled, rows, positives);
+    if (!Checks.allFinite(lower)) {
+      return MatchingStatus.OUTPUT_NOT_FINITE;
+    }
     for (int i = 0; i < weights.length; i++) {
       if (weights[i] < 0 && !subtractColumn(i, lower)) {
-        return false;
+        return MatchingStatus.OUTPUT_NOT_DEFINITE;
       }
     }
-    return true;
+    return MatchingStatus.MATCHED;
   }
 
   private boolean subtractColumn(int i, double[] lower) {

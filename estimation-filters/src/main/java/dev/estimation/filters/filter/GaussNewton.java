@@ -3,6 +3,7 @@ package dev.estimation.filters.filter;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
+import dev.estimation.core.matching.Use;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
@@ -84,7 +85,7 @@ final class GaussNewton {
     jacobians = 0;
     iterate.set(prior);
     Arrays.fill(unit, 0);
-    measured.difference(measurement, matching.output().mean(), residual);
+    measured.difference(measurement, matching.mean(), residual);
     double previous = Double.POSITIVE_INFINITY;
     for (int round = 0; round < settings.maximumRounds(); round++) {
       fillStep();
@@ -164,13 +165,13 @@ final class GaussNewton {
     }
     fillDisplacement(trial);
     state.displace(prior.mean(), displacement, iterate.changeMean());
-    MatchingStatus matched = matching.carry(iterate, given, noise.covariance());
+    MatchingStatus matched = matching.carry(iterate, given, noise.covariance(), Use.UPDATE);
     evaluations += matching.evaluations();
     jacobians += matching.jacobians();
     if (matched != MatchingStatus.MATCHED) {
       return StepStatus.of(matched);
     }
-    measured.difference(measurement, matching.output().mean(), residual);
+    measured.difference(measurement, matching.mean(), residual);
     return StepStatus.APPLIED;
   }
 

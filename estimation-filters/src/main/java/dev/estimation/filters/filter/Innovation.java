@@ -19,10 +19,12 @@ final class Innovation {
   private final UnitLeastSquares squares;
   private Covariance unexplained;
   private final DMatrixRMaj covariance;
+  private final boolean matchingMoves;
   private final double[] value;
   private double squared = Double.NaN;
 
-  Innovation(Space space, MatchingWorkspace matching) {
+  Innovation(Space space, MatchingWorkspace matching, boolean matchingMoves) {
+    this.matchingMoves = matchingMoves;
     this.space = space;
     this.matching = matching;
     int m = space.dimension();
@@ -39,8 +41,10 @@ final class Innovation {
 
   /** Weighs a measurement against the prediction at which the matching stands; false if T is not definite. */
   boolean weigh(double[] measurement) {
-    space.difference(measurement, matching.output().mean(), value);
-    covariance.setTo(matching.output().covariance());
+    space.difference(measurement, matching.mean(), value);
+    if (matchingMoves) {
+      covariance.setTo(matching.output().covariance());
+    }
     unexplained = matching.unexplained();
     if (!unexplained.isDefinite()) {
       return false;
@@ -59,9 +63,9 @@ final class Innovation {
     return value;
   }
 
-  /** S. */
+  /** S; made when asked for, unless an iteration moves the matching on. */
   DMatrixRMaj covariance() {
-    return covariance;
+    return matchingMoves ? covariance : matching.output().covariance();
   }
 
   double squared() {

@@ -5,7 +5,6 @@ import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.Householder;
 import dev.estimation.core.internal.Products;
-import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
@@ -46,12 +45,12 @@ final class Posterior {
     int d = correction.length;
     int k = matching.activeInputs();
     squares.fillRoot(matching.inputFactor().data, d, root);
-    for (int r = 0; r < d; r++) {
-      double sum = 0;
-      for (int c = 0; c < k; c++) {
-        sum += root[r * d + c] * squares.target(c);
+    Arrays.fill(correction, 0);
+    for (int c = 0; c < k; c++) {
+      double target = squares.target(c);
+      for (int r = 0; r < d; r++) {
+        correction[r] += root[r * d + c] * target;
       }
-      correction[r] = sum;
     }
     space.displace(prior.mean(), correction, moments.changeMean());
     return finish();
@@ -65,7 +64,8 @@ final class Posterior {
   }
 
   private StepStatus finish() {
-    if (!Checks.allFinite(moments.mean()) || !Checks.allFinite(root)) {
+    // Squares, so that the covariance is finite too.
+    if (!Checks.allFinite(moments.mean()) || !(Products.sumOfSquares(root) <= Double.MAX_VALUE)) {
       return StepStatus.RESULT_NOT_FINITE;
     }
     int d = correction.length;
@@ -76,18 +76,9 @@ final class Posterior {
       Arrays.fill(lower, 0, d * d, 0);
       Householder.reduceLower(lower, d, root, d, d);
     } else {
-      Products.fillOuterProduct(root, ones, d, d, moments.changeCovariance().data);
-      SymmetricMatrix.mirrorLower(moments.covariance());
+      Products.fillOuterProduct(
+          root, ones, d, d, moments.factoredCovariance().changeLowerTriangle().data);
     }
-    return check();
-  }
-
-  /** Whether the result can be an estimate. */
-  private StepStatus check() {
-    boolean finite = form == Form.SQUARE_ROOT || SymmetricMatrix.allFinite(moments.covariance());
-    if (moments.factor()) {
-      return finite ? StepStatus.APPLIED : StepStatus.RESULT_NOT_FINITE;
-    }
-    return finite ? StepStatus.NOT_DEFINITE : StepStatus.RESULT_NOT_FINITE;
+    return moments.factor() ? StepStatus.APPLIED : StepStatus.NOT_DEFINITE;
   }
 }

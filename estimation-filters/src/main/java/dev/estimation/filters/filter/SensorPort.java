@@ -4,6 +4,7 @@ import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
+import dev.estimation.core.matching.Use;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.SensorModel;
 import org.ejml.data.DMatrixRMaj;
@@ -50,7 +51,7 @@ public final class SensorPort {
         new SensorFunction(sensor),
         "sensor model " + name + "; its Jacobian: DifferentiableSensor");
     this.noise = new NoiseMatrix("measurementNoise", m, true);
-    this.innovation = new Innovation(space, matching);
+    this.innovation = new Innovation(space, matching, plan.iteration() != null);
     this.posterior = new Posterior(stateSpace, matching, plan.form());
     this.mean = new double[stateSpace.storage()];
     this.iteration = plan.iteration() == null
@@ -118,7 +119,7 @@ public final class SensorPort {
 
   /** Predicts the measurement and holds the innovation against the gate. */
   private StepStatus weigh(Moments prior, double[] measurement, double[] given) {
-    MatchingStatus matched = matching.carry(prior, given, noise.covariance());
+    MatchingStatus matched = matching.carry(prior, given, noise.covariance(), Use.UPDATE);
     evaluations = matching.evaluations();
     jacobians = matching.jacobians();
     if (matched != MatchingStatus.MATCHED) {

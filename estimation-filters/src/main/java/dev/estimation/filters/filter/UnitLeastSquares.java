@@ -19,7 +19,6 @@ final class UnitLeastSquares {
   private final double[] triangle;
   private final double[] block;
   private final double[] inverse;
-  private final double[] column;
 
   UnitLeastSquares(int unitDimension, int measurementDimension) {
     this.k = unitDimension;
@@ -27,7 +26,6 @@ final class UnitLeastSquares {
     this.triangle = new double[(k + 1) * k];
     this.block = new double[(k + 1) * m];
     this.inverse = new double[k];
-    this.column = new double[m];
   }
 
   /**
@@ -42,14 +40,28 @@ final class UnitLeastSquares {
     for (int a = 0; a < k; a++) {
       triangle[a * (k + 1)] = 1;
     }
-    for (int a = 0; a <= k; a++) {
-      System.arraycopy(a < k ? cross.data : target, a < k ? a * m : 0, column, 0, m);
-      unexplained.solveLower(column);
-      System.arraycopy(column, 0, block, a * m, m);
-    }
+    System.arraycopy(cross.data, 0, block, 0, k * m);
+    System.arraycopy(target, 0, block, k * m, m);
+    whiten(unexplained.lowerFactor().data);
     Householder.reduceUpper(triangle, k, block, k + 1, m);
     for (int a = 0; a < k; a++) {
       inverse[a] = 1 / triangle[a * (k + 1)];
+    }
+  }
+
+  /** Multiplies the rows of the block by L^-T from the right, column by column. */
+  private void whiten(double[] lower) {
+    for (int j = 0; j < m; j++) {
+      for (int i = 0; i < j; i++) {
+        double factor = lower[j * m + i];
+        for (int at = 0; at < block.length; at += m) {
+          block[at + j] -= factor * block[at + i];
+        }
+      }
+      double scale = 1 / lower[j * m + j];
+      for (int at = j; at < block.length; at += m) {
+        block[at] *= scale;
+      }
     }
   }
 
@@ -88,7 +100,7 @@ final class UnitLeastSquares {
   }
 
   /**
-   * Replaces the first k columns of the input's factor, B, by B U^-T, row by row.
+   * Replaces the first k columns of the input's factor, B, by B U^-T, column by column.
    *
    * @param factor [B E], n x n, read
    * @param n rows
@@ -96,13 +108,16 @@ final class UnitLeastSquares {
    */
   void fillRoot(double[] factor, int n, double[] result) {
     System.arraycopy(factor, 0, result, 0, n * n);
-    for (int at = 0; at < n * n; at += n) {
-      for (int q = k - 1; q >= 0; q--) {
-        double sum = result[at + q];
-        for (int c = q + 1; c < k; c++) {
-          sum -= result[at + c] * triangle[q * k + c];
+    for (int q = k - 1; q >= 0; q--) {
+      for (int c = q + 1; c < k; c++) {
+        double entry = triangle[q * k + c];
+        for (int at = 0; at < n * n; at += n) {
+          result[at + q] -= result[at + c] * entry;
         }
-        result[at + q] = sum * inverse[q];
+      }
+      double scale = inverse[q];
+      for (int at = q; at < n * n; at += n) {
+        result[at] *= scale;
       }
     }
   }

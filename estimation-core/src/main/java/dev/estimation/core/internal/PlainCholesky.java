@@ -1,0 +1,96 @@
+package dev.estimation.core.internal;
+
+/**
+ * The lower Cholesky factor of a matrix far from singular, three columns at a time: of so few rows, loops would
+ * cost more than the arithmetic in them. No shape is checked; used by {@link LowerFactor}, which looks closer
+ * where this gives up.
+ */
+final class PlainCholesky {
+  private PlainCholesky() {}
+
+  /**
+   * Factors in place.
+   *
+   * @param l the matrix on and below the diagonal, updated; in part if the result is false
+   * @param start where each row begins
+   * @param least for each row, what its pivot must exceed
+   * @return false if a pivot does not, or is not finite
+   */
+  static boolean factor(double[] l, int[] start, double[] least) {
+    int n = start.length;
+    int j = 0;
+    for (; j + 2 < n; j += 3) {
+      if (!factorThree(l, start, least, j)) {
+        return false;
+      }
+    }
+    return j == n || (j + 1 == n ? factorOne(l, start, least, j) : factorTwo(l, start, least, j));
+  }
+
+  private static boolean isLarge(double pivot, double least) {
+    return pivot > least && pivot <= Double.MAX_VALUE;
+  }
+
+  private static boolean factorOne(double[] l, int[] start, double[] least, int j) {
+    double pivot = l[start[j] + j];
+    l[start[j] + j] = Math.sqrt(pivot);
+    return isLarge(pivot, least[j]);
+  }
+
+  private static boolean factorTwo(double[] l, int[] start, double[] least, int j) {
+    int first = start[j] + j;
+    int second = start[j + 1] + j;
+    double pivot = l[first];
+    double root = Math.sqrt(pivot);
+    double below = l[second] * (root * (1 / pivot));
+    double next = l[second + 1] - below * below;
+    l[first] = root;
+    l[second] = below;
+    l[second + 1] = Math.sqrt(next);
+    return isLarge(pivot, least[j]) && isLarge(next, least[j + 1]);
+  }
+
+  /** Three columns, and what they take from those to the right. Reciprocals do not wait for roots. */
+  private static boolean factorThree(double[] l, int[] start, double[] least, int j) {
+    int first = start[j] + j;
+    int second = start[j + 1] + j;
+    int third = start[j + 2] + j;
+    double pivot0 = l[first];
+    double root0 = Math.sqrt(pivot0);
+    double inverse0 = root0 * (1 / pivot0);
+    double l10 = l[second] * inverse0;
+    double l20 = l[third] * inverse0;
+    double pivot1 = l[second + 1] - l10 * l10;
+    double root1 = Math.sqrt(pivot1);
+    double inverse1 = root1 * (1 / pivot1);
+    double l21 = (l[third + 1] - l20 * l10) * inverse1;
+    double pivot2 = l[third + 2] - l20 * l20 - l21 * l21;
+    double root2 = Math.sqrt(pivot2);
+    if (!(isLarge(pivot0, least[j])
+        && isLarge(pivot1, least[j + 1])
+        && isLarge(pivot2, least[j + 2]))) {
+      return false;
+    }
+    l[first] = root0;
+    l[second] = l10;
+    l[second + 1] = root1;
+    l[third] = l20;
+    l[third + 1] = l21;
+    l[third + 2] = root2;
+    double inverse2 = root2 * (1 / pivot2);
+    for (int r = j + 3; r < start.length; r++) {
+      int row = start[r] + j;
+      double x0 = l[row] * inverse0;
+      double x1 = (l[row + 1] - x0 * l10) * inverse1;
+      double x2 = (l[row + 2] - x0 * l20 - x1 * l21) * inverse2;
+      l[row] = x0;
+      l[row + 1] = x1;
+      l[row + 2] = x2;
+      for (int c = j + 3; c <= r; c++) {
+        int other = start[c] + j;
+        l[start[r] + c] -= x0 * l[other] + x1 * l[other + 1] + x2 * l[other + 2];
+      }
+    }
+    return true;
+  }
+}

@@ -9,20 +9,24 @@ import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.PointRule;
 import dev.estimation.core.points.RandomRule;
+import dev.estimation.core.points.SimplexRule;
 import dev.estimation.core.points.SparseGridRule;
 import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.filters.filter.IteratedUpdate;
 import java.util.List;
+import java.util.function.IntToDoubleFunction;
 
 /**
  * Reads methods: {@code linear}, {@code linear-iterated}, {@code linear-iterated:line-search},
  * {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
- * 3-n}), {@code cubature}, {@code hermite:NODES}, {@code sparse:LEVEL}, {@code
- * sparse-degree:DEGREE}, {@code random:COUNT,SEED}.
+ * 3-n}), {@code unscented:KAPPA}, {@code deviations:S}, {@code simplex} or {@code simplex:WEIGHT} (of the
+ * centre), {@code cubature}, {@code cubature5}, {@code mcnamee-stenger}, {@code hermite:NODES}, {@code
+ * sparse:LEVEL}, {@code sparse-degree:DEGREE}, {@code random:COUNT,SEED}.
  */
 final class MethodParser {
   static final String FORMS = "linear, linear-iterated, linear-iterated:line-search,"
-      + " unscented:ALPHA,BETA,KAPPA, cubature, hermite:NODES, sparse:LEVEL, sparse-degree:DEGREE,"
+      + " unscented:ALPHA,BETA,KAPPA, unscented:KAPPA, deviations:S, simplex, simplex:WEIGHT,"
+      + " cubature, cubature5, mcnamee-stenger, hermite:NODES, sparse:LEVEL, sparse-degree:DEGREE,"
       + " random:COUNT,SEED";
 
   /** What is run when nothing is asked for. */
@@ -78,10 +82,20 @@ final class MethodParser {
         requireCount(typed, settings, 0);
         yield CubatureRule.degreeThree();
       }
-      case "unscented" -> {
-        requireCount(typed, settings, 3);
-        yield unscented(typed, settings);
+      case "cubature5" -> {
+        requireCount(typed, settings, 0);
+        yield CubatureRule.degreeFive();
       }
+      case "mcnamee-stenger" -> {
+        requireCount(typed, settings, 0);
+        yield CubatureRule.mcNameeStenger();
+      }
+      case "unscented" -> unscented(typed, settings);
+      case "deviations" -> {
+        requireCount(typed, settings, 1);
+        yield UnscentedRule.atDeviations(number(typed, "S", settings[0]));
+      }
+      case "simplex" -> simplex(typed, settings);
       case "hermite" -> {
         requireCount(typed, settings, 1);
         yield GaussHermiteRule.product(wholeNumber(typed, "NODES", settings[0]));
@@ -112,15 +126,28 @@ final class MethodParser {
   }
 
   private static UnscentedRule unscented(String typed, String[] numbers) {
+    if (numbers.length == 1) {
+      return UnscentedRule.symmetric(kappa(typed, numbers[0]));
+    }
+    requireCount(typed, numbers, 3);
     double alpha = number(typed, "ALPHA", numbers[0]);
     double beta = number(typed, "BETA", numbers[1]);
-    String kappa = numbers[2];
-    if (!kappa.endsWith(LESS_DIMENSION)) {
-      return UnscentedRule.scaled(alpha, beta, number(typed, "KAPPA", kappa));
+    return UnscentedRule.scaled(alpha, beta, kappa(typed, numbers[2]));
+  }
+
+  private static IntToDoubleFunction kappa(String typed, String text) {
+    boolean lessDimension = text.endsWith(LESS_DIMENSION);
+    int end = text.length() - (lessDimension ? LESS_DIMENSION.length() : 0);
+    double total = number(typed, "KAPPA", text.substring(0, end));
+    return dimension -> lessDimension ? total - dimension : total;
+  }
+
+  private static SimplexRule simplex(String typed, String[] numbers) {
+    if (numbers.length == 0) {
+      return SimplexRule.spherical();
     }
-    String offset = kappa.substring(0, kappa.length() - LESS_DIMENSION.length());
-    double total = number(typed, "KAPPA", offset);
-    return UnscentedRule.scaled(alpha, beta, dimension -> total - dimension);
+    requireCount(typed, numbers, 1);
+    return SimplexRule.spherical(number(typed, "WEIGHT", numbers[0]));
   }
 
   private static double number(String typed, String what, String text) {

@@ -23,8 +23,9 @@ class MethodParserTest {
   /**
    * The variance of a sum of two squares tells parameters apart. By hand: with c^2 = alpha^2 (2 +
    * kappa), all points have the value c^2 and the weights 1 / (2 c^2), so the mean is 2 and the
-   * variance 2 c^2 + 4 (beta - alpha^2). Cubature: as alpha 1, beta and kappa 0. Sparse
-   * grids of degree 3 have 4 points at sqrt 3 of weight 1/6: 4 * 9 / 6 - 2^2. Exact: 4.
+   * variance 2 c^2 + 4 (beta - alpha^2). Cubature: as alpha 1, beta and kappa 0. At S deviations: 2
+   * S^2 + 4 max(2 - S^2, -S^2 / 2). Simplex: 4 w / (1 - w), w = 1/2 by itself. Sparse grids of degree 3
+   * have 4 points at sqrt 3 of weight 1/6: 4 * 9 / 6 - 2^2. Exact: 4.
    */
   @ParameterizedTest
   @CsvSource({
@@ -34,7 +35,16 @@ class MethodParserTest {
     "'unscented:1,1,2', 8",
     "'unscented:1,1,4-n', 8",
     "'unscented:+1.0,-0.5,3e0', 4",
+    "'unscented:1', 2",
+    "'unscented:2.5-n', 1",
+    "'deviations:1', 6",
+    "'deviations:1.5', 3.5",
+    "simplex, 4",
+    "simplex:0, 0",
+    "simplex:0.75, 12",
     "cubature, 0",
+    "cubature5, 4",
+    "mcnamee-stenger, 4",
     "hermite:3, 4",
     "sparse:1, 2",
     "sparse:2, 4",
@@ -42,26 +52,37 @@ class MethodParserTest {
     "sparse-degree:5, 4"
   })
   void readsItsNumbers(String typed, double variance) {
-    Method method = MethodParser.parse(typed);
-    assertEquals(typed, method.typed());
+    assertEquals(typed, MethodParser.parse(typed).typed());
+    MatchingWorkspace work = carry(typed, SUM_OF_SQUARES);
+    assertEquals(2, work.output().mean()[0], 1e-13); // rounding of sums of a few numbers
+    assertEquals(variance, work.output().covariance().get(0, 0), 1e-12);
+  }
+
+  /** Sixth moment along an axis (exact 15) by the two rules of degree 5 in two dimensions. */
+  @ParameterizedTest
+  @CsvSource({"cubature5, 10", "mcnamee-stenger, 9"})
+  void tellsTheRulesOfDegreeFiveApart(String typed, double sixthMoment) {
     MatchingWorkspace work =
-        method.kind().matching().workspace(Space.reals(2), Space.reals(1), SUM_OF_SQUARES);
+        carry(typed, (input, given, output) -> output[0] = Math.pow(input[0], 6));
+    assertEquals(sixthMoment, work.output().mean()[0], 1e-12);
+    assertEquals(9, work.evaluations());
+  }
+
+  private static MatchingWorkspace carry(String typed, VectorFunction function) {
+    MatchingWorkspace work = MethodParser.parse(typed)
+        .kind()
+        .matching()
+        .workspace(Space.reals(2), Space.reals(1), function);
     Moments input = new Moments(Space.reals(2));
     input.set(Gaussian.independent(new double[2], new double[] {1, 1}));
     work.carry(input, new double[0], null);
-    assertEquals(2, work.output().mean()[0], 1e-13); // rounding of sums of a few numbers
-    assertEquals(variance, work.output().covariance().get(0, 0), 1e-12);
+    return work;
   }
 
   /** The mean of the sum of squares is 2 for standardised draws, whatever they are. */
   @Test
   void readsRandomDraws() {
-    Method method = MethodParser.parse("random:50,-7");
-    MatchingWorkspace work =
-        method.kind().matching().workspace(Space.reals(2), Space.reals(1), SUM_OF_SQUARES);
-    Moments input = new Moments(Space.reals(2));
-    input.set(Gaussian.independent(new double[2], new double[] {1, 1}));
-    work.carry(input, new double[0], null);
+    MatchingWorkspace work = carry("random:50,-7", SUM_OF_SQUARES);
     assertEquals(2, work.output().mean()[0], 1e-13);
     assertEquals(51, work.evaluations(), "the draws and the mean");
   }
@@ -94,7 +115,17 @@ class MethodParserTest {
         "linear-iterated:line",
         "linear-iterated:line-search,line-search",
         "cubature:3",
+        "cubature5:5",
+        "mcnamee-stenger:",
+        "deviations",
+        "deviations:0",
+        "deviations:x",
+        "simplex:",
+        "simplex:1",
+        "simplex:0,0",
         "unscented",
+        "unscented:",
+        "unscented:a",
         "unscented:1,2",
         "unscented:1,2,0,0",
         "unscented:0,2,0",

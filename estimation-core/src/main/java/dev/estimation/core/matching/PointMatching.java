@@ -18,9 +18,8 @@ import dev.estimation.core.space.Space;
  * half a turn of it.
  *
  * <p>Zero variances give points that do not move along them. P_zz is positive semi-definite for every
- * function if all weights w_i are positive and wc_0 is not negative, and for the scaled unscented rule
- * whenever beta is at least alpha^2. The rounding of g itself is multiplied by {@code
- * UnitPoints.weightAmplification()}.
+ * function if {@code UnitPoints.covarianceWeightsPositive()}. The rounding of g itself is multiplied by
+ * {@code UnitPoints.weightAmplification()}.
  *
  * <p>Independent draws have a sample mean and covariance of their own: for them P_zz and W are taken about
  * both sample means and divided by N - 1, and the workspace is a {@link SampledWorkspace} with standard

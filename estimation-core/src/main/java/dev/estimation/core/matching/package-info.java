@@ -12,15 +12,23 @@
  *   <tr><td>{@code Linearisation.firstOrder()}</td><td>1 and a Jacobian</td><td>affine g</td>
  *     <td>blind to curvature: bias and a covariance too small where g bends within the spread</td></tr>
  *   <tr><td>{@code UnscentedRule}</td><td>2 n + 1</td><td>mean to degree 3</td>
- *     <td>spread parameters; covariance may turn indefinite where beta is below alpha^2</td></tr>
- *   <tr><td>{@code CubatureRule}</td><td>2 n + 1</td><td>mean to degree 3</td>
+ *     <td>spread parameters; covariance may turn indefinite where beta + alpha^2 kappa / n is
+ *       negative</td></tr>
+ *   <tr><td>{@code SimplexRule}</td><td>n + 2</td><td>mean to degree 2</td>
+ *     <td>depends on the order of inputs; never indefinite unless the centre is negative</td></tr>
+ *   <tr><td>{@code CubatureRule}, degree 3</td><td>2 n + 1</td><td>mean to degree 3</td>
  *     <td>points move out as sqrt(n); never indefinite</td></tr>
- *   <tr><td>{@code GaussHermiteRule}</td><td>p^n</td><td>mean to degree 2 p - 1 an axis</td>
+ *   <tr><td>{@code CubatureRule}, degree 5</td><td>2 n^2 + 1</td><td>mean to degree 5</td>
+ *     <td>covariance may turn indefinite from n = 5 on</td></tr>
+ *   <tr><td>{@code GaussHermiteRule}</td><td>p^n, one more if p is even</td>
+ *     <td>mean to degree 2 p - 1 an axis</td>
  *     <td>cost grows exponentially in n; never indefinite</td></tr>
  *   <tr><td>{@code SparseGridRule}</td><td>about (2 n)^q / q!</td><td>mean to total degree 2 q + 1 or
  *     more</td><td>some weights are negative: covariance may turn indefinite</td></tr>
  *   <tr><td>{@code RandomRule}</td><td>N + 1</td><td>nothing; affine g if standardised</td>
  *     <td>error shrinks as 1 / sqrt N; independent draws come with standard errors</td></tr>
  * </table>
+ *
+ * <p>The page of {@code core.points} weighs the rules against each other.
  */
 package dev.estimation.core.matching;

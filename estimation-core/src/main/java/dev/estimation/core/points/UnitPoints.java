@@ -110,6 +110,7 @@ public final class UnitPoints {
       double[][] points,
       double[] weights,
       boolean sample) {
+    refuseAbove("a rule", points.length);
     Checks.length("weights", weights, points.length);
     Checks.finite("weights", weights);
     Checks.finite("centre weights", centreMeanWeight, centreCovarianceWeight);
@@ -238,5 +239,33 @@ public final class UnitPoints {
       sum += Math.abs(weight);
     }
     return sum;
+  }
+
+  /**
+   * Whether the covariance of g is positive semi-definite whatever g is. It is true if no weight of a
+   * point is negative and that of the centre in covariances is not either, and in the scaled unscented
+   * rule if beta + alpha^2 kappa / n is not.
+   *
+   * <p>With d_i = g(xi_i) - g(0), V = sum w_i and delta = sum w_i d_i, the covariance
+   * sum w_i d_i d_i' + (wc_0 - wm_0 - 1) delta delta' equals sum w_i e_i e_i' + (wc_0 - wm_0 - 1 + 1 / V)
+   * delta delta' with e_i = d_i - delta / V. That is a sum of squares, and this method says whether all
+   * its weights are positive or zero. As V = 1 - wm_0, the last one is wc_0 + wm_0^2 / V. If it is
+   * negative, d_i = 1 at all points has a negative variance: delta = V, all e_i = 0.
+   *
+   * @return false if some function may have an indefinite covariance
+   */
+  public boolean covarianceWeightsPositive() {
+    double sum = 0;
+    for (double weight : weights) {
+      if (!(weight >= 0)) {
+        return false;
+      }
+      sum += weight;
+    }
+    double last = centreCovarianceWeight - centreMeanWeight - 1 + 1 / sum;
+    // Weights of the centre have rounding of their size, and the sum that of up to 1e5 terms.
+    double rounding =
+        0x1p-50 * (1 + Math.abs(centreMeanWeight) + Math.abs(centreCovarianceWeight)) + 1e-12 / sum;
+    return last >= -rounding;
   }
 }

@@ -2,6 +2,7 @@ package dev.estimation.core.matching;
 
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.SimplexRule;
 import dev.estimation.core.points.UnscentedRule;
 
 /** The matchings that reference tables name, e.g. "unscented 0.5 2 0" for alpha, beta and kappa. */
@@ -12,7 +13,12 @@ final class NamedMatchings {
     String[] words = name.split(" ");
     return switch (words[0]) {
       case "linearisation" -> Linearisation.firstOrder();
-      case "cubature" -> PointMatching.of(CubatureRule.degreeThree());
+      case "cubature" ->
+        PointMatching.of(
+            name.equals("cubature 5") ? CubatureRule.degreeFive() : CubatureRule.degreeThree());
+      case "McNamee-Stenger" -> PointMatching.of(CubatureRule.mcNameeStenger());
+      case "simplex" ->
+        PointMatching.of(SimplexRule.spherical(name.equals("simplex 1/3") ? 1.0 / 3 : 0));
       case "unscented" -> PointMatching.of(unscented(words));
       case "Gauss-Hermite" -> product(Integer.parseInt(words[1]));
       default -> throw new IllegalArgumentException("no matching is named " + name);

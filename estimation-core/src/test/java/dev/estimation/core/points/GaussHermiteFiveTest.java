@@ -8,7 +8,7 @@ class GaussHermiteFiveTest extends PointRuleContract {
   }
 
   @Override
-  int degree() {
+  int degree(int dimension) {
     return 9;
   }
 

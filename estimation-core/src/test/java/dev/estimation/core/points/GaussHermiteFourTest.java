@@ -8,7 +8,7 @@ class GaussHermiteFourTest extends PointRuleContract {
   }
 
   @Override
-  int degree() {
+  int degree(int dimension) {
     return 7;
   }
 

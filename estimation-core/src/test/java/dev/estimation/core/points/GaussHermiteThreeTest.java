@@ -8,7 +8,7 @@ class GaussHermiteThreeTest extends PointRuleContract {
   }
 
   @Override
-  int degree() {
+  int degree(int dimension) {
     return 5;
   }
 

@@ -8,7 +8,7 @@ class GaussHermiteTwoTest extends PointRuleContract {
   }
 
   @Override
-  int degree() {
+  int degree(int dimension) {
     return 3;
   }
 

@@ -8,16 +8,20 @@ import org.junit.jupiter.params.provider.MethodSource;
 
 /** Degree of exactness, first failing monomial and smallest weight, row by row of the table. */
 class RuleDegreeTest {
-  private static final Map<String, PointRule> RULES = Map.of(
-      "cubature 3", CubatureRule.degreeThree(),
-      "unscented 1 0 3-n", UnscentedRule.scaled(1, 0, n -> 3 - n),
-      "unscented 1 0 0", UnscentedRule.scaled(1, 0, 0),
-      "unscented 1 0 1", UnscentedRule.scaled(1, 0, 1),
-      "unscented 1 0 2", UnscentedRule.scaled(1, 0, 2),
-      "Gauss-Hermite 2", GaussHermiteRule.product(2),
-      "Gauss-Hermite 3", GaussHermiteRule.product(3),
-      "Gauss-Hermite 4", GaussHermiteRule.product(4),
-      "Gauss-Hermite 5", GaussHermiteRule.product(5));
+  private static final Map<String, PointRule> RULES = Map.ofEntries(
+      Map.entry("cubature 3", CubatureRule.degreeThree()),
+      Map.entry("cubature 5", CubatureRule.degreeFive()),
+      Map.entry("McNamee-Stenger", CubatureRule.mcNameeStenger()),
+      Map.entry("simplex 0", SimplexRule.spherical(0)),
+      Map.entry("simplex 1/3", SimplexRule.spherical(1.0 / 3)),
+      Map.entry("unscented 1 0 3-n", UnscentedRule.symmetric(n -> 3 - n)),
+      Map.entry("unscented 1 0 0", UnscentedRule.symmetric(0)),
+      Map.entry("unscented 1 0 1", UnscentedRule.symmetric(1)),
+      Map.entry("unscented 1 0 2", UnscentedRule.symmetric(2)),
+      Map.entry("Gauss-Hermite 2", GaussHermiteRule.product(2)),
+      Map.entry("Gauss-Hermite 3", GaussHermiteRule.product(3)),
+      Map.entry("Gauss-Hermite 4", GaussHermiteRule.product(4)),
+      Map.entry("Gauss-Hermite 5", GaussHermiteRule.product(5)));
 
   static Stream<ReferenceTable.Row> rows() {
     return ReferenceTable.read("rule_degree.csv").stream();

@@ -65,6 +65,13 @@ class RuleParametersTest {
     assertRefused(() -> GaussHermiteRule.product(100).points(40), "1.0E80", "100000");
     assertRefused(() -> CubatureRule.degreeThree().points(60_000), "120001", "100000");
     assertRefused(() -> UnscentedRule.scaled(1, 2, 0).points(60_000), "120001", "100000");
+    assertRefused(() -> UnscentedRule.atDeviations(1).points(60_000), "120001", "100000");
+    assertRefused(() -> CubatureRule.degreeFive().points(224), "100353", "100000", "224 axes");
+    assertRefused(() -> CubatureRule.mcNameeStenger().points(50_000), "5000000001", "100000");
+    assertRefused(() -> SimplexRule.spherical().points(100_000), "100002", "100000");
+    assertRefused(() -> GaussHermiteRule.product(50, 41, 49).points(3), "100450", "50, 41, 49");
+    double[][] own = new double[100_001][1];
+    assertRefused(() -> UnitPoints.of(1, 0, 0, own, new double[100_001]), "100001", "100000");
   }
 
   @Test
@@ -140,5 +147,30 @@ class RuleParametersTest {
     double spread = Math.abs(product.coordinate(0, 0));
     assertWithin("spread", spread, Math.abs(unscented.coordinate(0, 0)), 1e-15, 1);
     assertWithin("weight", product.weight(0), unscented.weight(0), 1e-15, 1);
+  }
+
+  /**
+   * Algebra: with V = n / (alpha^2 (n + kappa)), beta - alpha^2 + 1 / V = beta + alpha^2 kappa / n decides
+   * whether covariances can turn indefinite. Numbers away from zero, or zero with exact arithmetic.
+   */
+  @ParameterizedTest
+  @CsvSource({
+    "1, 0, 0",
+    "1, 0, 1",
+    "1, 0, -1",
+    "1, 1, -1",
+    "0.5, 0, 0",
+    "0.5, 0.1, -1",
+    "0.5, -0.1, 0",
+    "1e-3, 2, 0",
+    "1e-3, -1, 0"
+  })
+  void betaAndKappaDecideWhetherCovariancesCanTurnIndefinite(
+      double alpha, double beta, double kappa) {
+    for (int n = 2; n <= 4; n++) {
+      UnitPoints points = UnscentedRule.scaled(alpha, beta, kappa).points(n);
+      boolean never = beta + alpha * alpha * kappa / n >= 0;
+      assertEquals(never, points.covarianceWeightsPositive(), "n = " + n);
+    }
   }
 }

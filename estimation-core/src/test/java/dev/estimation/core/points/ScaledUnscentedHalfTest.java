@@ -9,7 +9,13 @@ class ScaledUnscentedHalfTest extends PointRuleContract {
 
   /** Common practice: 1 + (1 - alpha^2 + beta). */
   @Override
-  double covarianceWeightSum() {
+  double covarianceWeightSum(int dimension) {
     return 1 + (1 - 0.25 + 2);
+  }
+
+  /** By its formula: 2 / alpha^2 - 1. */
+  @Override
+  double amplification(int dimension) {
+    return 2 / 0.25 - 1;
   }
 }

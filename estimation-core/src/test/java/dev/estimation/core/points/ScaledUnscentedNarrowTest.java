@@ -9,7 +9,13 @@ class ScaledUnscentedNarrowTest extends PointRuleContract {
 
   /** Common practice: 1 + (1 - alpha^2 + beta). */
   @Override
-  double covarianceWeightSum() {
+  double covarianceWeightSum(int dimension) {
     return 1 + (1 - 1e-6 + 2);
+  }
+
+  /** By its formula: 2 / alpha^2 - 1. */
+  @Override
+  double amplification(int dimension) {
+    return 2 / 1e-6 - 1;
   }
 }

@@ -9,7 +9,7 @@ class ScaledUnscentedWideTest extends PointRuleContract {
 
   /** Common practice: 1 + (1 - alpha^2 + beta). */
   @Override
-  double covarianceWeightSum() {
+  double covarianceWeightSum(int dimension) {
     return 1 + (1 - 1 + 2);
   }
 }

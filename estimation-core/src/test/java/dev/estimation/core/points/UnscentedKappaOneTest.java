@@ -4,6 +4,6 @@ package dev.estimation.core.points;
 class UnscentedKappaOneTest extends PointRuleContract {
   @Override
   PointRule rule() {
-    return UnscentedRule.scaled(1, 0, 1);
+    return UnscentedRule.symmetric(1);
   }
 }

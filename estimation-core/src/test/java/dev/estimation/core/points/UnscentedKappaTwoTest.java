@@ -4,6 +4,11 @@ package dev.estimation.core.points;
 class UnscentedKappaTwoTest extends PointRuleContract {
   @Override
   PointRule rule() {
-    return UnscentedRule.scaled(1, 0, 2);
+    return UnscentedRule.symmetric(2);
+  }
+
+  @Override
+  int degree(int dimension) {
+    return dimension == 1 ? 5 : 3;
   }
 }

@@ -4,6 +4,6 @@ package dev.estimation.core.points;
 class UnscentedKappaZeroTest extends PointRuleContract {
   @Override
   PointRule rule() {
-    return UnscentedRule.scaled(1, 0, 0);
+    return UnscentedRule.symmetric(0);
   }
 }

@@ -116,7 +116,7 @@ class NoiseDrivenTest {
     }
     // The product of two independent normal numbers x and n: mean 0 of n times x.
     assertWithin("mean", 0, estimate.mean(0), 1e-12, 1);
-    // Two of five inputs are read: 1, 5 or 9 evaluations; over all 1, 11 or 243.
+    // Two of five inputs are read: 1, 4, 5 or 9 evaluations; over all 1, 7, 11, 51 or 243.
     assertEquals(Matchings.evaluations(named, 2, 5), work.evaluations());
   }
 

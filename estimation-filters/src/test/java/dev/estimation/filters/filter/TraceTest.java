@@ -44,6 +44,7 @@ class TraceTest {
         Arguments.of("UKF_a0.5_b2_k0", unscented(0.5, 2, 0), -29.67858132825275),
         Arguments.of("CKF", PointMatching.of(CubatureRule.degreeThree()), -29.57752290183613),
         Arguments.of("GHKF3", hermite(3), -29.630874982910235), // the same as kappa = 1 here
+        Arguments.of("MS5", PointMatching.of(CubatureRule.mcNameeStenger()), -29.630874982910235),
         Arguments.of("GHKF5", hermite(5), -29.625514842472445));
   }
 

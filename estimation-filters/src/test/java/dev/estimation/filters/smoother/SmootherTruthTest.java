@@ -44,7 +44,8 @@ class SmootherTruthTest {
         Arguments.of("UKF_a0.5_b2_k0", PointMatching.of(UnscentedRule.scaled(0.5, 2, 0))),
         Arguments.of("CKF", PointMatching.of(CubatureRule.degreeThree())),
         Arguments.of("GHKF3", PointMatching.of(GaussHermiteRule.product(3))),
-        Arguments.of("GHKF5", PointMatching.of(GaussHermiteRule.product(5))));
+        Arguments.of("GHKF5", PointMatching.of(GaussHermiteRule.product(5))),
+        Arguments.of("MS5", PointMatching.of(CubatureRule.mcNameeStenger())));
   }
 
   /** 1e-12 relative: the rounding of 100 steps there and back. */

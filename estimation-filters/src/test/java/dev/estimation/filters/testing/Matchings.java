@@ -5,6 +5,7 @@ import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.SimplexRule;
 import dev.estimation.core.points.UnscentedRule;
 import java.util.ArrayList;
 import java.util.List;
@@ -30,22 +31,29 @@ public final class Matchings {
         Named.of("linearisation", Linearisation.firstOrder()),
         Named.of("unscented 1, 2, 0", PointMatching.of(UnscentedRule.scaled(1, 2, 0))),
         Named.of("unscented 0.5, 2, 1", PointMatching.of(UnscentedRule.scaled(0.5, 2, 1))),
-        Named.of("unscented 1, 0, 3-n", PointMatching.of(UnscentedRule.scaled(1, 0, n -> 3 - n))),
-        Named.of("cubature", PointMatching.of(CubatureRule.degreeThree())),
+        Named.of("unscented 3-n", PointMatching.of(UnscentedRule.symmetric(n -> 3 - n))),
+        Named.of("unscented at 2 deviations", PointMatching.of(UnscentedRule.atDeviations(2))),
+        Named.of("simplex", PointMatching.of(SimplexRule.spherical())),
+        Named.of("cubature 3", PointMatching.of(CubatureRule.degreeThree())),
+        Named.of("cubature 5", PointMatching.of(CubatureRule.degreeFive())),
+        Named.of("McNamee-Stenger", PointMatching.of(CubatureRule.mcNameeStenger())),
         Named.of("Gauss-Hermite 3", PointMatching.of(GaussHermiteRule.product(3))));
   }
 
   /**
-   * The evaluations of one call: one with a Jacobian, 3^k for the product of 3 nodes, 2 k + 1 for the
-   * others; k counts the inputs that a function reads, or all of them.
+   * The evaluations of one call: one with a Jacobian, 3^k for the product of 3 nodes, 2 k^2 + 1 for degree
+   * 5, k + 2 for the simplex, 2 k + 1 for the others; k counts the inputs that a function reads, or all.
    */
   public static int evaluations(Named<MomentMatching> matching, int active, int whole) {
-    String name = matching.getName();
-    if (isLinear(matching)) {
-      return 1;
-    }
-    int carried = name.endsWith("whole state") ? whole : active;
-    return name.startsWith("Gauss-Hermite") ? (int) Math.pow(3, carried) : 2 * carried + 1;
+    String[] words = matching.getName().split(", whole state", -1);
+    int k = words.length > 1 ? whole : active;
+    return switch (words[0]) {
+      case "linearisation" -> 1;
+      case "simplex" -> k + 2;
+      case "cubature 5", "McNamee-Stenger" -> 2 * k * k + 1;
+      case "Gauss-Hermite 3" -> (int) Math.pow(3, k);
+      default -> 2 * k + 1;
+    };
   }
 
   /** Whether it takes a Jacobian instead of points. */

@@ -7,7 +7,9 @@ import dev.estimation.core.matching.Linearisation;
 import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
+import dev.estimation.core.points.LatinHypercubeRule;
 import dev.estimation.core.points.PointRule;
+import dev.estimation.core.points.QuasiRandomRule;
 import dev.estimation.core.points.RandomRule;
 import dev.estimation.core.points.SimplexRule;
 import dev.estimation.core.points.SparseGridRule;
@@ -21,13 +23,15 @@ import java.util.function.IntToDoubleFunction;
  * {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
  * 3-n}), {@code unscented:KAPPA}, {@code deviations:S}, {@code simplex} or {@code simplex:WEIGHT} (of the
  * centre), {@code cubature}, {@code cubature5}, {@code mcnamee-stenger}, {@code hermite:NODES}, {@code
- * sparse:LEVEL}, {@code sparse-degree:DEGREE}, {@code random:COUNT,SEED}.
+ * sparse:LEVEL}, {@code sparse-degree:DEGREE}, {@code random:COUNT,SEED}, {@code antithetic:PAIRS,SEED},
+ * {@code latin:COUNT,SEED}, {@code sobol:COUNT}, {@code halton:COUNT}. The last five are standardised, as
+ * filters want them.
  */
 final class MethodParser {
   static final String FORMS = "linear, linear-iterated, linear-iterated:line-search,"
       + " unscented:ALPHA,BETA,KAPPA, unscented:KAPPA, deviations:S, simplex, simplex:WEIGHT,"
       + " cubature, cubature5, mcnamee-stenger, hermite:NODES, sparse:LEVEL, sparse-degree:DEGREE,"
-      + " random:COUNT,SEED";
+      + " random:COUNT,SEED, antithetic:PAIRS,SEED, latin:COUNT,SEED, sobol:COUNT, halton:COUNT";
 
   /** What is run when nothing is asked for. */
   static final List<String> DEFAULT = List.of(
@@ -112,6 +116,24 @@ final class MethodParser {
         requireCount(typed, settings, 2);
         int count = wholeNumber(typed, "COUNT", settings[0]);
         yield RandomRule.independent(count, seed(typed, settings[1])).standardised();
+      }
+      case "antithetic" -> {
+        requireCount(typed, settings, 2);
+        int pairs = wholeNumber(typed, "PAIRS", settings[0]);
+        yield RandomRule.antithetic(pairs, seed(typed, settings[1])).standardised();
+      }
+      case "latin" -> {
+        requireCount(typed, settings, 2);
+        int count = wholeNumber(typed, "COUNT", settings[0]);
+        yield LatinHypercubeRule.of(count, seed(typed, settings[1])).standardised();
+      }
+      case "sobol" -> {
+        requireCount(typed, settings, 1);
+        yield QuasiRandomRule.sobol(wholeNumber(typed, "COUNT", settings[0])).standardised();
+      }
+      case "halton" -> {
+        requireCount(typed, settings, 1);
+        yield QuasiRandomRule.halton(wholeNumber(typed, "COUNT", settings[0])).standardised();
       }
       default ->
         throw new BadInputException("method must be one of " + FORMS + "; got '" + typed + "'");

@@ -10,6 +10,8 @@ import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
+import java.util.HashSet;
+import java.util.Set;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -80,11 +82,34 @@ class MethodParserTest {
   }
 
   /** The mean of the sum of squares is 2 for standardised draws, whatever they are. */
-  @Test
-  void readsRandomDraws() {
-    MatchingWorkspace work = carry("random:50,-7", SUM_OF_SQUARES);
+  @ParameterizedTest
+  @ValueSource(
+      strings = {"random:50,-7", "antithetic:25,-7", "latin:50,-7", "sobol:50", "halton:50"})
+  void readsDrawnPoints(String typed) {
+    MatchingWorkspace work = carry(typed, SUM_OF_SQUARES);
     assertEquals(2, work.output().mean()[0], 1e-13);
     assertEquals(51, work.evaluations(), "the draws and the mean");
+  }
+
+  /** Each word has points of its own, and a seed tells: the variances differ. */
+  @Test
+  void everyWordHasPointsOfItsOwn() {
+    String[] words = {
+      "random:50,1", "random:50,2", "antithetic:25,1", "antithetic:25,2", "latin:50,1",
+      "latin:50,2", "sobol:50", "halton:50", "sobol:51", "halton:51"
+    };
+    Set<Double> variances = new HashSet<>();
+    for (String typed : words) {
+      MatchingWorkspace work = MethodParser.parse(typed)
+          .kind()
+          .matching()
+          .workspace(Space.reals(2), Space.reals(1), SUM_OF_SQUARES);
+      Moments input = new Moments(Space.reals(2));
+      input.set(Gaussian.independent(new double[2], new double[] {1, 1}));
+      work.carry(input, new double[0], null);
+      variances.add(work.output().covariance().get(0, 0));
+    }
+    assertEquals(words.length, variances.size());
   }
 
   @Test
@@ -160,6 +185,23 @@ class MethodParserTest {
         "random:1e3,5",
         "random:10,0.5",
         "random:10,5,5",
+        "antithetic:15,5",
+        "antithetic:16",
+        "antithetic:16,x",
+        "antithetic:1.5,5",
+        "latin:1,5",
+        "latin:10",
+        "latin:10,x",
+        "latin:100001,5",
+        "sobol",
+        "sobol:1",
+        "sobol:10,5",
+        "sobol:x",
+        "halton",
+        "halton:1",
+        "halton:10,5",
+        "halton:x",
+        "halton:100001",
         "spline"
       })
   void refusesTheRestInOneLine(String typed) {

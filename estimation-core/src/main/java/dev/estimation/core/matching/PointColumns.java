@@ -5,8 +5,8 @@ import dev.estimation.core.points.UnitPoints;
 import java.util.Arrays;
 
 /**
- * The weighted columns of a point matching, in this order: one for each point, one for delta, and those of
- * linear inputs. Two ways of writing one covariance:
+ * The weighted columns of a point matching, in this order: one for each point, one for delta, one for each
+ * replicate of several points, and those of linear inputs. Two ways of writing one covariance:
  *
  * <ul>
  *   <li>about the centre's image: columns d_i, and delta with weight f = wc_0 - wm_0 - 1;
@@ -27,6 +27,7 @@ final class PointColumns {
   private final WeightedColumns left;
   private final int rows;
   private final int deltaColumn;
+  private final int linearColumn;
 
   PointColumns(int rows, UnitPoints points, double[] linearWeights, Form form) {
     this.points = points;
@@ -38,16 +39,17 @@ final class PointColumns {
     double deltaWeight = aboutCentre + shiftFraction;
     this.meanWeights = new double[size];
     Arrays.setAll(meanWeights, points::weight);
-    int extra = deltaWeight == 0 ? 0 : 1;
-    this.deltaColumn = extra == 0 ? -1 : size;
-    this.weights = Arrays.copyOf(meanWeights, size + extra + linearWeights.length);
-    if (points.isSample()) {
-      Arrays.fill(weights, 0, size, 1.0 / (size - 1));
+    this.deltaColumn = deltaWeight == 0 ? -1 : size;
+    int replicates = size > points.replicates() ? points.replicates() : 0;
+    int first = size + (deltaWeight == 0 ? 0 : 1);
+    this.linearColumn = first + (replicates > 1 ? replicates : 0);
+    this.weights = Arrays.copyOf(meanWeights, linearColumn + linearWeights.length);
+    if (points.replicates() == size) {
+      Arrays.fill(weights, 0, size, 1 / (size - 1.0)); // independent draws
     }
-    if (extra == 1) {
-      weights[size] = deltaWeight;
-    }
-    System.arraycopy(linearWeights, 0, weights, size + extra, linearWeights.length);
+    Arrays.fill(weights, size, first, deltaWeight);
+    Arrays.fill(weights, first, linearColumn, 1 / (replicates * (replicates - 1.0)));
+    System.arraycopy(linearWeights, 0, weights, linearColumn, linearWeights.length);
     this.total = new WeightedColumns(rows, weights, form);
     this.left = new WeightedColumns(rows, weights, form);
   }
@@ -128,9 +130,8 @@ final class PointColumns {
         }
       }
     }
-    int first = meanWeights.length + (deltaColumn >= 0 ? 1 : 0);
-    for (int i = first; i < stride; i++) {
-      int row = (points.dimension() + (i - first) % linearInputs) * rows;
+    for (int i = linearColumn; i < stride; i++) {
+      int row = (points.dimension() + (i - linearColumn) % linearInputs) * rows;
       for (int c = 0, at = i; c < rows; c++, at += stride) {
         rest[at] -= w[row + c];
       }

@@ -21,9 +21,9 @@ import dev.estimation.core.space.Space;
  * function if {@code UnitPoints.covarianceWeightsPositive()}. The rounding of g itself is multiplied by
  * {@code UnitPoints.weightAmplification()}.
  *
- * <p>Independent draws have a sample mean and covariance of their own: for them P_zz and W are taken about
- * both sample means and divided by N - 1, and the workspace is a {@link SampledWorkspace} with standard
- * errors.
+ * <p>Samples ({@code UnitPoints.isSample()}) have a mean and covariance of their own: for them P_zz and W
+ * are taken about both sample means. Where they come in independent replicates, the workspace is a {@link
+ * SampledWorkspace}: its moments are free of bias and have standard errors.
  *
  * <p>Cost: the evaluations of the rule and one at the centre; about points * m^2 / 2 operations for
  * the covariance, and points * (m + n) for each coordinate that is not zero. <i>Immutable.</i> Source:
@@ -60,6 +60,8 @@ public final class PointMatching implements MomentMatching {
     }
     VectorFunction sampled = new Restructured(function, structure.withLinearInputs());
     UnitPoints draws = rule.points(structure.activeInputs(input.dimension()).length);
-    return new SampleWorkspace(input, output, sampled, draws, form);
+    return draws.replicates() > 1
+        ? new ReplicatedWorkspace(input, output, sampled, draws, form)
+        : new SampleWorkspace(input, output, sampled, draws, form);
   }
 }

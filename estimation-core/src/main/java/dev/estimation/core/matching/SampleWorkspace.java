@@ -6,8 +6,8 @@ import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
 
-/** Carries moments by independent draws, about their sample means. */
-final class SampleWorkspace extends PointWorkspace implements SampledWorkspace {
+/** Carries moments by points whose own mean is not 0 and covariance not I, about their means. */
+class SampleWorkspace extends PointWorkspace {
   private final WeightedColumns left;
 
   SampleWorkspace(
@@ -32,29 +32,5 @@ final class SampleWorkspace extends PointWorkspace implements SampledWorkspace {
       }
     }
     return left;
-  }
-
-  @Override
-  public double meanStandardError(int row) {
-    return Math.sqrt(mean(row, row, false) / points.size());
-  }
-
-  @Override
-  public double covarianceStandardError(int row, int column) {
-    double covariance = mean(row, column, false);
-    double fourth = mean(row, column, true);
-    return Math.sqrt(Math.max(0, fourth - covariance * covariance) / points.size());
-  }
-
-  /** The mean of e_r e_c over the draws, or of its square; e is taken about the sample mean. */
-  private double mean(int row, int column, boolean square) {
-    double[] data = columns().data();
-    int count = columns().count();
-    double sum = 0;
-    for (int i = 0; i < points.size(); i++) {
-      double product = data[row * count + i] * data[column * count + i];
-      sum += square ? product * product : product;
-    }
-    return sum / points.size();
   }
 }

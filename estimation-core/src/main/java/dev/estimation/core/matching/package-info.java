@@ -25,8 +25,13 @@
  *     <td>cost grows exponentially in n; never indefinite</td></tr>
  *   <tr><td>{@code SparseGridRule}</td><td>about (2 n)^q / q!</td><td>mean to total degree 2 q + 1 or
  *     more</td><td>some weights are negative: covariance may turn indefinite</td></tr>
- *   <tr><td>{@code RandomRule}</td><td>N + 1</td><td>nothing; affine g if standardised</td>
- *     <td>error shrinks as 1 / sqrt N; independent draws come with standard errors</td></tr>
+ *   <tr><td>{@code RandomRule}</td><td>N + 1</td>
+ *     <td>nothing; affine g if standardised; mean of odd g if antithetic</td>
+ *     <td>error shrinks as 1 / sqrt N; standard errors unless standardised</td></tr>
+ *   <tr><td>{@code LatinHypercubeRule}</td><td>N + 1</td><td>nothing; affine g if standardised</td>
+ *     <td>gains where inputs work apart; standard errors from replicates</td></tr>
+ *   <tr><td>{@code QuasiRandomRule}</td><td>N + 1</td><td>nothing; affine g if standardised</td>
+ *     <td>error shrinks nearly as 1 / N for few inputs; standard errors from random shifts</td></tr>
  * </table>
  *
  * <p>The page of {@code core.points} weighs the rules against each other.

@@ -24,6 +24,7 @@ public final class UnitPoints {
   private final int[] axes;
   private final double[] coordinates;
   private final boolean sample;
+  private final int replicates;
   private final int degree;
 
   private UnitPoints(
@@ -34,6 +35,7 @@ public final class UnitPoints {
       int entries,
       boolean sample) {
     this.sample = sample;
+    this.replicates = 0;
     this.dimension = dimension;
     this.centreMeanWeight = centreMeanWeight;
     this.centreCovarianceWeight = centreCovarianceWeight;
@@ -44,8 +46,9 @@ public final class UnitPoints {
     this.degree = 0;
   }
 
-  private UnitPoints(UnitPoints other, int degree) {
+  private UnitPoints(UnitPoints other, int degree, int replicates) {
     this.sample = other.sample;
+    this.replicates = replicates;
     this.dimension = other.dimension;
     this.centreMeanWeight = other.centreMeanWeight;
     this.centreCovarianceWeight = other.centreCovarianceWeight;
@@ -62,7 +65,7 @@ public final class UnitPoints {
    * @param total the degree up to which the mean of every polynomial is exact; 0 or more
    */
   public UnitPoints exactTo(int total) {
-    return new UnitPoints(this, total);
+    return new UnitPoints(this, total, replicates);
   }
 
   /** {@return the total degree up to which means of polynomials are exact; 0 unless it was said} */
@@ -90,17 +93,24 @@ public final class UnitPoints {
   }
 
   /**
-   * Independent draws of N(0, I), of equal weight. Their mean and covariance are 0 and I up to chance
-   * only, and moments by them have standard errors.
+   * Draws of equal weight, whose mean and covariance are 0 and I but roughly. Where they are two or
+   * more independent replicates of the same kind, moments by them have standard errors.
    *
    * @param dimension the number of coordinates of a draw
-   * @param draws copied
+   * @param draws one replicate after the other, copied
+   * @param replicates R, of the same size each: the number of draws if all are independent, 1 if
+   *     nothing is known of how they depend on each other
    * @return the points
    */
-  public static UnitPoints sample(int dimension, double[][] draws) {
+  public static UnitPoints sample(int dimension, double[][] draws, int replicates) {
+    if (replicates < 1 || draws.length == 0 || draws.length % replicates != 0) {
+      throw new IllegalArgumentException(
+          "draws must fall into 1 or more replicates of the same size, got " + draws.length
+              + " draws and " + replicates + " replicates");
+    }
     double[] weights = new double[draws.length];
     Arrays.fill(weights, 1.0 / draws.length);
-    return make(dimension, 0, 0, draws, weights, true);
+    return new UnitPoints(make(dimension, 0, 0, draws, weights, true), 0, replicates);
   }
 
   private static UnitPoints make(
@@ -161,9 +171,17 @@ public final class UnitPoints {
     return weights.length;
   }
 
-  /** {@return whether these are independent draws; see {@link #sample}} */
+  /** {@return whether mean and covariance are 0 and I but roughly; see {@link #sample}} */
   public boolean isSample() {
     return sample;
+  }
+
+  /**
+   * {@return the number of independent replicates, of equal size and one after the other; moments have
+   * standard errors if it is 2 or more; 0 unless these are a {@link #sample}}
+   */
+  public int replicates() {
+    return replicates;
   }
 
   /** {@return the weight of the centre in means} */

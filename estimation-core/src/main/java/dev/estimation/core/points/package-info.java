@@ -1,6 +1,6 @@
 /**
  * Point rules: sets of points and weights that stand for the standard normal distribution N(0, I).
- * Unscented, cubature, Gauss-Hermite and simplex differ in nothing else; {@code PointMatching} serves
+ * Unscented, cubature, Gauss-Hermite, sparse grids, random and quasi-random points differ in nothing else; {@code PointMatching} serves
  * them all. Rules and their points are immutable and are made once, when a workspace is.
  *
  * <table>
@@ -32,6 +32,14 @@
  *     <td>yes</td><td>1</td><td>cost grows exponentially in n</td></tr>
  *   <tr><td>rough functions, many inputs</td><td>{@code RandomRule}</td><td>N + 1</td>
  *     <td>0; 2 if standardised</td><td>yes</td><td>1</td><td>errors shrink as 1 / sqrt N</td></tr>
+ *   <tr><td>the same, inputs that work apart</td><td>{@code LatinHypercubeRule}</td><td>N + 1</td>
+ *     <td>0; 2 if standardised</td><td>yes</td><td>1</td><td>standard errors from replicates</td></tr>
+ *   <tr><td>the same, few inputs</td><td>{@code QuasiRandomRule}</td><td>N + 1</td>
+ *     <td>0; 2 if standardised</td><td>yes</td><td>1</td><td>errors shrink nearly as 1 / N; standard errors from random
+ *     shifts</td></tr>
+ *   <tr><td>high accuracy where products are too many</td><td>{@code SparseGridRule}</td>
+ *     <td>about (2 n)^q / q! at level q</td><td>2 q + 1 or more</td><td>no</td>
+ *     <td>2 to 200</td><td>negative weights grow with n</td></tr>
  * </table>
  *
  * <p>Points tell it themselves: {@code UnitPoints.degree()} (0 where a rule states none), {@code

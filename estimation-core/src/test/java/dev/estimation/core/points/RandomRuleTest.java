@@ -75,8 +75,26 @@ class RandomRuleTest {
     }
   }
 
+  /** The first of each pair is what independent draws of the seed are. */
+  @Test
+  void antitheticDrawsComeInPairs() {
+    UnitPoints points = RandomRule.antithetic(20, 5).points(3);
+    UnitPoints draws = RandomRule.independent(20, 5).points(3);
+    assertEquals(40, points.size());
+    for (int i = 0; i < 20; i++) {
+      for (int axis = 0; axis < 3; axis++) {
+        assertEquals(draws.coordinate(i, axis), points.coordinate(2 * i, axis));
+        assertEquals(-draws.coordinate(i, axis), points.coordinate(2 * i + 1, axis));
+      }
+    }
+  }
+
   @Test
   void badCountsAreRefused() {
+    assertRefused(() -> RandomRule.antithetic(15, 0), "16 pairs or more, got 15");
+    assertRefused(() -> RandomRule.antithetic(50_001, 0), "100002", "100000");
+    assertRefused(() -> RandomRule.antithetic(Integer.MAX_VALUE, 0), "4294967294", "100000");
+    assertTrue(RandomRule.antithetic(50_000, 0).points(1).size() == 100_000);
     assertRefused(() -> RandomRule.independent(1, 0), "2 draws or more, got 1");
     assertRefused(() -> RandomRule.independent(100_001, 0), "100001", "100000");
     RandomRule few = RandomRule.independent(3, 0).standardised();

@@ -53,6 +53,18 @@ class UnitPointsTest {
   }
 
   @Test
+  void replicatesMustBeOfEqualSize() {
+    double[][] draws = {{1}, {2}, {3}, {4}};
+    assertEquals(2, UnitPoints.sample(1, draws, 2).replicates());
+    assertEquals(2, UnitPoints.sample(1, draws, 2).exactTo(1).replicates());
+    assertEquals(0, UnitPoints.of(1, 0, 0, draws, new double[4]).replicates());
+    assertRefused(() -> UnitPoints.sample(1, draws, 3), "4 draws", "3 replicates");
+    assertRefused(() -> UnitPoints.sample(1, draws, 0), "4 draws", "0 replicates");
+    assertRefused(() -> UnitPoints.sample(1, draws, 8), "4 draws", "8 replicates");
+    assertRefused(() -> UnitPoints.sample(1, new double[0][], 1), "0 draws");
+  }
+
+  @Test
   void wrongShapesAndNumbersAreRefused() {
     double[][] places = triangle();
     assertRefused(() -> UnitPoints.of(2, 0, 0, places, new double[2]), "weights", "3", "2");

@@ -28,7 +28,9 @@ public final class AffineFunction implements VectorFunction {
 
   @Override
   public Structure structure() {
-    return Structure.UNKNOWN.withJacobian((input, given, jacobian) ->
-        System.arraycopy(matrix.data, 0, jacobian, 0, matrix.getNumElements()));
+    return Structure.UNKNOWN
+        .withJacobian((input, given, jacobian) ->
+            System.arraycopy(matrix.data, 0, jacobian, 0, matrix.getNumElements()))
+        .withHessian((input, given, hessians) -> {});
   }
 }

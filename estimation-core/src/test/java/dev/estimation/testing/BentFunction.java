@@ -6,7 +6,7 @@ import org.ejml.data.DMatrixRMaj;
 
 /**
  * z_r = sin(a_r' u) + (b_r' u)^2 / 4 + given[0], smooth and bent in every direction, with its
- * Jacobian.
+ * derivatives.
  */
 public final class BentFunction implements VectorFunction {
   private final DMatrixRMaj sine;
@@ -44,7 +44,9 @@ public final class BentFunction implements VectorFunction {
 
   @Override
   public Structure structure() {
-    return Structure.UNKNOWN.withJacobian((input, given, jacobian) -> derive(input, jacobian));
+    return Structure.UNKNOWN
+        .withJacobian((input, given, jacobian) -> derive(input, jacobian))
+        .withHessian((input, given, hessians) -> deriveTwice(input, hessians));
   }
 
   private void derive(double[] input, double[] jacobian) {
@@ -53,6 +55,19 @@ public final class BentFunction implements VectorFunction {
       double b = product(square, r, input);
       for (int j = 0; j < sine.numCols; j++) {
         jacobian[r * sine.numCols + j] = slope * sine.get(r, j) + b / 2 * square.get(r, j);
+      }
+    }
+  }
+
+  private void deriveTwice(double[] input, double[] hessians) {
+    int n = sine.numCols;
+    for (int r = 0; r < sine.numRows; r++) {
+      double curvature = -Math.sin(product(sine, r, input));
+      for (int j = 0; j < n; j++) {
+        for (int l = 0; l <= j; l++) {
+          hessians[(r * n + j) * n + l] =
+              curvature * sine.get(r, j) * sine.get(r, l) + square.get(r, j) * square.get(r, l) / 2;
+        }
       }
     }
   }

@@ -5,7 +5,7 @@ import dev.estimation.core.function.VectorFunction;
 
 /**
  * A function of k inputs that reads them from places in a longer vector: input j of the inner
- * function is component {@code places[j]}. It declares these active inputs and keeps the Jacobian.
+ * function is component {@code places[j]}. It declares these active inputs and keeps the derivatives.
  */
 public final class EmbeddedFunction implements VectorFunction {
   private final VectorFunction inner;
@@ -36,12 +36,12 @@ public final class EmbeddedFunction implements VectorFunction {
 
   @Override
   public Structure structure() {
-    Structure known = Structure.UNKNOWN.withActiveInputs(places);
-    return inner
-        .structure()
-        .jacobian()
-        .map(jacobian -> known.withJacobian((u, given, all) -> scatter(u, given, all)))
-        .orElse(known);
+    Structure known = inner.structure();
+    Structure result = Structure.UNKNOWN.withActiveInputs(places);
+    if (known.jacobian().isPresent()) {
+      result = result.withJacobian(this::scatter);
+    }
+    return known.hessian().isPresent() ? result.withHessian(this::scatterHessians) : result;
   }
 
   private void scatter(double[] input, double[] given, double[] jacobian) {
@@ -50,6 +50,21 @@ public final class EmbeddedFunction implements VectorFunction {
     for (int r = 0; r < outputs; r++) {
       for (int j = 0; j < places.length; j++) {
         jacobian[r * dimension + places[j]] = small[r * places.length + j];
+      }
+    }
+  }
+
+  private void scatterHessians(double[] input, double[] given, double[] hessians) {
+    int k = places.length;
+    double[] small = new double[outputs * k * k];
+    inner.structure().hessian().orElseThrow().evaluate(read(input), given, small);
+    for (int r = 0; r < outputs; r++) {
+      for (int j = 0; j < k; j++) {
+        for (int l = 0; l <= j; l++) {
+          int row = Math.max(places[j], places[l]);
+          int column = Math.min(places[j], places[l]);
+          hessians[(r * dimension + row) * dimension + column] = small[(r * k + j) * k + l];
+        }
       }
     }
   }

@@ -4,7 +4,9 @@ import dev.estimation.benchmarks.log.BadInputException;
 import dev.estimation.benchmarks.log.DecimalNumber;
 import dev.estimation.benchmarks.replay.FilterKind;
 import dev.estimation.core.matching.Linearisation;
+import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
+import dev.estimation.core.matching.SpreadLinearisation;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.LatinHypercubeRule;
@@ -20,7 +22,8 @@ import java.util.function.IntToDoubleFunction;
 
 /**
  * Reads methods: {@code linear}, {@code linear-iterated}, {@code linear-iterated:line-search},
- * {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
+ * {@code linear-spread}, {@code linear2-spread}, {@code linear2-axes} (linearisation of first and second
+ * order by differences over the spread), {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
  * 3-n}), {@code unscented:KAPPA}, {@code deviations:S}, {@code simplex} or {@code simplex:WEIGHT} (of the
  * centre), {@code cubature}, {@code cubature5}, {@code mcnamee-stenger}, {@code hermite:NODES}, {@code
  * sparse:LEVEL}, {@code sparse-degree:DEGREE}, {@code random:COUNT,SEED}, {@code antithetic:PAIRS,SEED},
@@ -29,6 +32,7 @@ import java.util.function.IntToDoubleFunction;
  */
 final class MethodParser {
   static final String FORMS = "linear, linear-iterated, linear-iterated:line-search,"
+      + " linear-spread, linear2-spread, linear2-axes,"
       + " unscented:ALPHA,BETA,KAPPA, unscented:KAPPA, deviations:S, simplex, simplex:WEIGHT,"
       + " cubature, cubature5, mcnamee-stenger, hermite:NODES, sparse:LEVEL, sparse-degree:DEGREE,"
       + " random:COUNT,SEED, antithetic:PAIRS,SEED, latin:COUNT,SEED, sobol:COUNT, halton:COUNT";
@@ -64,8 +68,20 @@ final class MethodParser {
         requireCount(typed, settings, 0);
         yield FilterKind.of(Linearisation.firstOrder());
       }
+      case "linear-spread", "linear2-spread", "linear2-axes" -> {
+        requireCount(typed, settings, 0);
+        yield FilterKind.of(overSpread(name));
+      }
       case "linear-iterated" -> FilterKind.iterated(iteration(typed, settings));
       default -> FilterKind.of(PointMatching.of(rule(name, typed, settings)));
+    };
+  }
+
+  private static MomentMatching overSpread(String name) {
+    return switch (name) {
+      case "linear-spread" -> SpreadLinearisation.firstOrder();
+      case "linear2-spread" -> SpreadLinearisation.secondOrder();
+      default -> SpreadLinearisation.secondOrderAlongAxes();
     };
   }
 

@@ -51,13 +51,24 @@ class MethodParserTest {
     "sparse:1, 2",
     "sparse:2, 4",
     "sparse-degree:3, 2",
-    "sparse-degree:5, 4"
+    "sparse-degree:5, 4",
+    "linear2-spread, 4",
+    "linear2-axes, 4"
   })
   void readsItsNumbers(String typed, double variance) {
     assertEquals(typed, MethodParser.parse(typed).typed());
     MatchingWorkspace work = carry(typed, SUM_OF_SQUARES);
     assertEquals(2, work.output().mean()[0], 1e-13); // rounding of sums of a few numbers
     assertEquals(variance, work.output().covariance().get(0, 0), 1e-12);
+  }
+
+  /** The product of two independent standard normal numbers has variance 1, all of second order. */
+  @ParameterizedTest
+  @CsvSource({"linear-spread, 0", "linear2-axes, 0", "linear2-spread, 1"})
+  void readsLinearisationsOverTheSpread(String typed, double variance) {
+    MatchingWorkspace work =
+        carry(typed, (input, given, output) -> output[0] = input[0] * input[1]);
+    assertEquals(variance, work.output().covariance().get(0, 0), 1e-15); // a few roundings of 1
   }
 
   /** Sixth moment along an axis (exact 15) by the two rules of degree 5 in two dimensions. */
@@ -136,6 +147,10 @@ class MethodParserTest {
         "Linear",
         "linear:",
         "linear:1",
+        "linear2",
+        "linear-spread:",
+        "linear2-spread:1",
+        "linear2-axes:2,3",
         "linear-iterated:",
         "linear-iterated:line",
         "linear-iterated:line-search,line-search",

@@ -1,6 +1,5 @@
 package dev.estimation.core.function;
 
-import dev.estimation.core.internal.Checks;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
 
@@ -20,13 +19,11 @@ import java.util.Arrays;
 public final class CentralDifferences implements Jacobian {
   private static final double STEP = Math.cbrt(0x1p-52);
 
-  private final Space input;
   private final Space output;
   private final VectorFunction function;
+  private final int columns;
   private final int[] active;
-  private final double[] steps;
-  private final double[] tangent;
-  private final double[] moved;
+  private final InputSteps steps;
   private final double[] ahead;
   private final double[] behind;
   private final double[] difference;
@@ -40,20 +37,11 @@ public final class CentralDifferences implements Jacobian {
    * @param scales one for each dimension of the input, finite and above 0, in its unit; copied
    */
   public CentralDifferences(Space input, Space output, VectorFunction function, double[] scales) {
-    Checks.length("input scales", scales, input.dimension());
-    for (int j = 0; j < scales.length; j++) {
-      if (!(scales[j] > 0 && scales[j] <= Double.MAX_VALUE)) {
-        throw new IllegalArgumentException(
-            "input scales[" + j + "] must be finite and > 0, got " + scales[j]);
-      }
-    }
-    this.input = input;
+    this.steps = new InputSteps(input, scales, STEP);
     this.output = output;
     this.function = function;
-    this.active = function.structure().activeInputs(input.dimension());
-    this.steps = Arrays.stream(scales).map(scale -> STEP * scale).toArray();
-    this.tangent = new double[input.dimension()];
-    this.moved = new double[input.storage()];
+    this.columns = input.dimension();
+    this.active = function.structure().activeInputs(columns);
     this.ahead = new double[output.storage()];
     this.behind = new double[output.storage()];
     this.difference = new double[output.dimension()];
@@ -61,11 +49,9 @@ public final class CentralDifferences implements Jacobian {
 
   @Override
   public void evaluate(double[] point, double[] given, double[] jacobian) {
-    int columns = input.dimension();
     Arrays.fill(jacobian, 0);
     for (int j : active) {
-      double width =
-          image(point, given, j, steps[j], ahead) - image(point, given, j, -steps[j], behind);
+      double width = image(point, given, j, 1, ahead) - image(point, given, j, -1, behind);
       output.difference(ahead, behind, difference);
       for (int i = 0; i < difference.length; i++) {
         jacobian[i * columns + j] = difference[i] / width;
@@ -74,14 +60,11 @@ public final class CentralDifferences implements Jacobian {
   }
 
   /** Evaluates g away from the point and returns the displacement, as rounded. */
-  private double image(double[] point, double[] given, int j, double step, double[] result) {
-    Arrays.fill(tangent, 0);
-    tangent[j] = step;
-    input.displace(point, tangent, moved);
-    input.difference(moved, point, tangent);
+  private double image(double[] point, double[] given, int j, int count, double[] result) {
+    double[] moved = steps.move(point, j, count);
     Arrays.fill(result, Double.NaN);
     function.evaluate(moved, given, result);
-    return tangent[j];
+    return steps.displacement(j);
   }
 
   /** {@return the function evaluations that one Jacobian costs} */

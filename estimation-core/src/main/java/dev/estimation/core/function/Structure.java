@@ -16,22 +16,25 @@ import java.util.Optional;
  *       (Morelande and Moran 2007, from memory): a coordinated turn, linear given the turn rate, costs what a
  *       function of one input costs.
  *   <li><i>Jacobian</i>: its partial derivatives.
+ *   <li><i>Hessian</i>: its second partial derivatives.
  * </ul>
  *
  * <p><i>Immutable.</i> Start from {@link #UNKNOWN} and add what is known.
  */
 public final class Structure {
-  /** Nothing is known: every input may matter, and there is no Jacobian. */
-  public static final Structure UNKNOWN = new Structure(null, new int[0], null);
+  /** Nothing is known: every input may matter, and there are no derivatives. */
+  public static final Structure UNKNOWN = new Structure(null, new int[0], null, null);
 
   private final int[] activeInputs;
   private final int[] linearInputs;
   private final Jacobian jacobian;
+  private final Hessian hessian;
 
-  private Structure(int[] activeInputs, int[] linearInputs, Jacobian jacobian) {
+  private Structure(int[] activeInputs, int[] linearInputs, Jacobian jacobian, Hessian hessian) {
     this.activeInputs = activeInputs;
     this.linearInputs = linearInputs;
     this.jacobian = jacobian;
+    this.hessian = hessian;
   }
 
   /**
@@ -44,7 +47,7 @@ public final class Structure {
     if (indices.length == 0) {
       throw new IllegalArgumentException("a function must read at least 1 input, got 0");
     }
-    return new Structure(indices.clone(), linearInputs, jacobian);
+    return new Structure(indices.clone(), linearInputs, jacobian, hessian);
   }
 
   /**
@@ -54,12 +57,12 @@ public final class Structure {
    * @return a structure that says so
    */
   public Structure withLinearInputs(int... indices) {
-    return new Structure(activeInputs, indices.clone(), jacobian);
+    return new Structure(activeInputs, indices.clone(), jacobian, hessian);
   }
 
   /** {@return this structure with every input active, and said to be linear in none} */
   public Structure withAllInputsActive() {
-    return new Structure(null, new int[0], jacobian);
+    return new Structure(null, new int[0], jacobian, hessian);
   }
 
   /**
@@ -68,7 +71,16 @@ public final class Structure {
    * @param derivatives of the function, over all inputs
    */
   public Structure withJacobian(Jacobian derivatives) {
-    return new Structure(activeInputs, linearInputs, derivatives);
+    return new Structure(activeInputs, linearInputs, derivatives, hessian);
+  }
+
+  /**
+   * {@return this structure with a Hessian}
+   *
+   * @param derivatives the second ones of the function, over all inputs
+   */
+  public Structure withHessian(Hessian derivatives) {
+    return new Structure(activeInputs, linearInputs, jacobian, derivatives);
   }
 
   /**
@@ -117,5 +129,10 @@ public final class Structure {
   /** {@return the Jacobian, where one is known} */
   public Optional<Jacobian> jacobian() {
     return Optional.ofNullable(jacobian);
+  }
+
+  /** {@return the Hessian, where one is known} */
+  public Optional<Hessian> hessian() {
+    return Optional.ofNullable(hessian);
   }
 }

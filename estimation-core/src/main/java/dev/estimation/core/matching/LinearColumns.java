@@ -14,17 +14,13 @@ import java.util.Arrays;
  * more evaluation for each of them, exactly since g is linear in it.
  */
 final class LinearColumns {
-  private static final int BLOCK = 4;
-
   private final BaseWorkspace owner;
   private final int nonlinear;
   private final int count;
   private final boolean centreWeighed;
   private final double[] weights;
   private final Jacobian jacobian;
-  private final int[] inputs;
-  private final int width;
-  private final double[] root;
+  private final RootProduct root;
   private final double[] derivatives;
   private final double[] displacement;
   private final double[] moved;
@@ -44,10 +40,7 @@ final class LinearColumns {
     for (int i = 0; i < weights.length; i++) {
       weights[i] = i < first ? points.centreMeanWeight() : points.weight((i - first) / count);
     }
-    this.inputs = new int[count];
-    Arrays.setAll(inputs, b -> owner.active.input(nonlinear + b));
-    this.width = (count + BLOCK - 1) / BLOCK * BLOCK;
-    this.root = new double[count * width];
+    this.root = new RootProduct(owner.active, nonlinear);
     int n = owner.inputSpace.dimension();
     int m = owner.outputSpace.dimension();
     this.derivatives = new double[m * n];
@@ -84,7 +77,7 @@ final class LinearColumns {
    */
   boolean fillCentre(double[] mean, double[] given, double[] centre, double[] data, int stride) {
     if (count > 0) {
-      takeRoot();
+      root.take();
     }
     return count == 0
         || !centreWeighed
@@ -99,18 +92,6 @@ final class LinearColumns {
     }
     int before = i + (centreWeighed ? 1 : 0);
     return fill(stride - weights.length + before * count, point, given, output, data, stride);
-  }
-
-  /** S, its rows padded with zeros to whole blocks. */
-  private void takeRoot() {
-    double[] factor = owner.active.factor().data;
-    int n = displacement.length;
-    for (int b = 0; b < count; b++) {
-      int row = inputs[b] * n + nonlinear;
-      for (int q = 0; q < count; q++) {
-        root[b * width + q] = factor[row + q];
-      }
-    }
   }
 
   private boolean fill(
@@ -128,49 +109,16 @@ final class LinearColumns {
     owner.jacobians++;
     double zero = 0;
     for (int c = 0; c < deviation.length; c++) {
-      zero += fillRow(c * displacement.length, data, c * stride + first);
+      zero += root.fillRow(derivatives, c * displacement.length, data, c * stride + first);
     }
     jacobianFault = zero != 0;
     return !jacobianFault;
   }
 
-  /** A row of A S, four columns at a time. Zero, or NaN if A has something that is not finite. */
-  private double fillRow(int row, double[] data, int at) {
-    double zero = 0;
-    for (int q = 0; q < count; q += BLOCK) {
-      double sum0 = 0;
-      double sum1 = 0;
-      double sum2 = 0;
-      double sum3 = 0;
-      for (int b = 0, column = q; b < count; b++, column += width) {
-        double derivative = derivatives[row + inputs[b]];
-        zero += derivative * 0;
-        sum0 += derivative * root[column];
-        sum1 += derivative * root[column + 1];
-        sum2 += derivative * root[column + 2];
-        sum3 += derivative * root[column + 3];
-      }
-      data[at + q] = sum0;
-      if (q + 1 < count) {
-        data[at + q + 1] = sum1;
-      }
-      if (q + 2 < count) {
-        data[at + q + 2] = sum2;
-      }
-      if (q + 3 < count) {
-        data[at + q + 3] = sum3;
-      }
-    }
-    return zero;
-  }
-
   private boolean fillByDifferences(
       int first, double[] point, double[] given, double[] output, double[] data, int stride) {
     for (int q = 0; q < count; q++) {
-      Arrays.fill(displacement, 0);
-      for (int b = q; b < count; b++) {
-        displacement[inputs[b]] = root[b * width + q];
-      }
+      root.fillColumn(q, displacement);
       owner.inputSpace.displace(point, displacement, moved);
       if (!owner.function.evaluate(moved, given, image)) {
         return false;

@@ -1,6 +1,5 @@
 package dev.estimation.core.matching;
 
-import dev.estimation.core.function.CentralDifferences;
 import dev.estimation.core.function.Jacobian;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Form;
@@ -8,100 +7,105 @@ import dev.estimation.core.internal.Checks;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
 
-/** Carries moments by the Jacobian at the mean; see {@link Linearisation}. */
-final class LinearWorkspace extends BaseWorkspace {
+/** Carries moments by the derivatives at the mean; see {@link Linearisation}. */
+final class LinearWorkspace extends TaylorWorkspace {
+  private final DerivativeSource source;
+  private final RootProduct root;
   private final Jacobian jacobian;
-  private final WeightedColumns columns;
-  private final WeightedColumns nothing;
   private final double[] derivatives;
-  private final double[] zero;
-  private final int differenceEvaluations;
+  private final double[] hessians;
+  private final double[] column;
 
   LinearWorkspace(
-      Space input, Space output, VectorFunction function, double[] inputScales, Form form) {
-    super(input, output, function, function.structure().activeInputs(input.dimension()), form);
-    Jacobian analytic = function.structure().jacobian().orElse(null);
-    this.jacobian = analytic != null ? analytic : differences(input, output, function, inputScales);
-    this.differenceEvaluations = analytic != null ? 0 : 2 * active.count();
-    this.derivatives = new double[output.dimension() * input.dimension()];
-    this.zero = new double[output.dimension()];
-    double[] ones = new double[active.count()];
-    Arrays.fill(ones, 1);
-    this.columns = new WeightedColumns(output.dimension(), ones, form);
-    this.nothing = new WeightedColumns(output.dimension(), new double[0], form);
-  }
-
-  private static Jacobian differences(
-      Space input, Space output, VectorFunction function, double[] inputScales) {
-    if (inputScales == null) {
-      throw new IllegalArgumentException(
-          "linearisation wants a Jacobian and the function offers none; offer one, or give"
-              + " input scales for central differences");
-    }
-    return new CentralDifferences(input, output, function, inputScales);
+      Space input, Space output, VectorFunction function, DerivativeSource source, Form form) {
+    super(input, output, function, source.hessian() != null, form);
+    this.root = new RootProduct(active, 0);
+    this.source = source;
+    this.jacobian = source.jacobian();
+    int entries = output.dimension() * input.dimension();
+    this.derivatives = new double[entries];
+    this.hessians = new double[source.hessian() == null ? 0 : entries * input.dimension()];
+    this.column = new double[active.count()];
   }
 
   @Override
-  MatchingStatus match(double[] mean, double[] given, double[] outputMean) {
+  MatchingStatus expand(double[] mean, double[] given) {
     Arrays.fill(derivatives, 0);
     jacobian.evaluate(copied(mean), given, derivatives);
-    jacobians++;
-    function.count(differenceEvaluations);
-    if (!Checks.allFinite(derivatives)) {
+    jacobians += 1 + source.furtherJacobians();
+    function.count(source.evaluations());
+    if (fillSlopes() != 0) {
       return MatchingStatus.JACOBIAN_NOT_FINITE;
     }
-    fillColumns();
-    outputSpace.displace(centre, zero, outputMean); // brings angles into their range
+    if (source.hessian() != null) {
+      Arrays.fill(hessians, 0);
+      source.hessian().evaluate(copied(mean), given, hessians);
+      if (!Checks.allFinite(hessians)) {
+        return MatchingStatus.JACOBIAN_NOT_FINITE;
+      }
+      fillBends();
+    }
     return MatchingStatus.MATCHED;
   }
 
-  /** G B over active inputs; Jacobians have many zeros, B is lower triangular there. */
-  private void fillColumns() {
+  /** G B, over active inputs. Zero, or NaN if G has something that is not finite. */
+  private double fillSlopes() {
+    int n = inputSpace.dimension();
+    double zero = 0;
+    root.take();
+    for (int r = 0; r < outputSpace.dimension(); r++) {
+      zero += root.fillRow(derivatives, r * n, slopesAndBends(), r * width());
+    }
+    return zero;
+  }
+
+  /** M_i = B' H_i B over active inputs, column by column of H_i B. */
+  private void fillBends() {
     double[] factor = active.factor().data;
-    double[] data = columns.data();
     int k = active.count();
     int n = inputSpace.dimension();
-    Arrays.fill(data, 0);
-    for (int r = 0, at = 0; at < data.length; r++, at += k) {
-      for (int a = 0; a < k; a++) {
-        int row = active.input(a);
-        double derivative = derivatives[r * n + row];
-        if (derivative != 0) {
-          for (int c = 0; c <= a; c++) {
-            data[at + c] += derivative * factor[row * n + c];
+    for (int i = 0; i < outputSpace.dimension(); i++) {
+      for (int b = 0; b < k; b++) {
+        fillColumn(i, b);
+        for (int a = b; a < k; a++) {
+          double sum = 0;
+          for (int r = a; r < k; r++) {
+            sum += factor[active.input(r) * n + a] * column[r];
           }
+          slopesAndBends()[i * width() + bend(a, b)] = sum;
         }
       }
     }
   }
 
-  @Override
-  WeightedColumns columns() {
-    return columns;
-  }
-
-  @Override
-  WeightedColumns residuals() {
-    return nothing;
-  }
-
-  /** W = (G B)'. */
-  @Override
-  void fillCross(double[] w) {
-    double[] data = columns.data();
+  /** Column b of H_i B. */
+  private void fillColumn(int i, int b) {
+    double[] factor = active.factor().data;
     int k = active.count();
-    int m = outputSpace.dimension();
-    for (int a = 0; a < k; a++) {
-      for (int r = 0; r < m; r++) {
-        w[a * m + r] = data[r * k + a];
+    int n = inputSpace.dimension();
+    for (int r = b; r < k; r++) {
+      column[r] = 0;
+      for (int s = b; s < k; s++) {
+        column[r] += second(i, active.input(r), active.input(s)) * factor[active.input(s) * n + b];
       }
     }
+  }
+
+  /** An entry of H_i, from its lower triangle. */
+  private double second(int i, int j, int l) {
+    int n = inputSpace.dimension();
+    return hessians[(i * n + Math.max(j, l)) * n + Math.min(j, l)];
   }
 
   @Override
   String jacobianFailure() {
     int n = inputSpace.dimension();
     int bad = Checks.firstNotFinite(derivatives);
-    return "Jacobian[" + bad / n + "][" + bad % n + "] must be finite, got " + derivatives[bad];
+    if (bad >= 0) {
+      return "Jacobian[" + bad / n + "][" + bad % n + "] must be finite, got " + derivatives[bad];
+    }
+    int second = Checks.firstNotFinite(hessians);
+    return "Hessian[" + second / (n * n) + "][" + second / n % n + "][" + second % n
+        + "] must be finite, got " + hessians[second];
   }
 }

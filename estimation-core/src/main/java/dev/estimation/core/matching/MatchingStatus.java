@@ -20,7 +20,7 @@ public enum MatchingStatus {
    * domain (try a smaller spread), too few outputs filled.
    */
   FUNCTION_NOT_FINITE,
-  /** The Jacobian has NaN or infinity. Usual causes: a singular point such as zero range. */
+  /** The Jacobian or the Hessian has NaN or infinity. Usual causes: a singular point such as zero range. */
   JACOBIAN_NOT_FINITE,
   /** The moments of the output overflow. Usual cause: a variance far outside the model's units. */
   OUTPUT_NOT_FINITE,

@@ -70,7 +70,7 @@ public interface MatchingWorkspace {
 
   /**
    * The covariance of what a regression on the input does not explain of the output, additive noise
-   * included: P_zz - W'W, formed without that subtraction. Linearisation gives the noise itself. Not positive
+   * included: P_zz - W'W, formed without that subtraction. First-order linearisation gives the noise itself. Not positive
    * semi-definite only where negative weights have made it so; an update would then give an indefinite
    * covariance.
    *
@@ -81,7 +81,10 @@ public interface MatchingWorkspace {
   /** {@return the function evaluations of the last call, those for numerical derivatives included} */
   int evaluations();
 
-  /** {@return the Jacobians formed in the last call, analytic or by differences} */
+  /**
+   * {@return the Jacobians formed in the last call, analytic or by differences, those that differences
+   * for a Hessian take included}
+   */
   int jacobians();
 
   /** {@return what was wrong in the last call, in words; empty if nothing was} */

@@ -11,6 +11,15 @@
  *   <tr><th>matching</th><th>evaluations</th><th>exact for</th><th>mind</th></tr>
  *   <tr><td>{@code Linearisation.firstOrder()}</td><td>1 and a Jacobian</td><td>affine g</td>
  *     <td>blind to curvature: bias and a covariance too small where g bends within the spread</td></tr>
+ *   <tr><td>{@code Linearisation.secondOrder()}</td><td>1, a Jacobian and a Hessian</td>
+ *     <td>quadratic g</td><td>sees the mean alone; never indefinite. Without a Hessian 2 n Jacobians, without
+ *     either about 2 n^2 evaluations, and input scales</td></tr>
+ *   <tr><td>{@code SpreadLinearisation.firstOrder()}</td><td>2 n + 1</td><td>affine g</td>
+ *     <td>slopes over the spread, no derivatives needed; mean and covariance still miss curvature</td></tr>
+ *   <tr><td>{@code SpreadLinearisation.secondOrderAlongAxes()}</td><td>2 n + 1</td>
+ *     <td>mean to degree 3; quadratic g without mixed products</td><td>never indefinite</td></tr>
+ *   <tr><td>{@code SpreadLinearisation.secondOrder()}</td><td>n^2 + n + 1</td><td>quadratic g</td>
+ *     <td>no derivatives needed; never indefinite</td></tr>
  *   <tr><td>{@code UnscentedRule}</td><td>2 n + 1</td><td>mean to degree 3</td>
  *     <td>spread parameters; covariance may turn indefinite where beta + alpha^2 kappa / n is
  *       negative</td></tr>

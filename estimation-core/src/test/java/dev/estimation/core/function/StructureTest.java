@@ -12,11 +12,13 @@ import org.junit.jupiter.api.Test;
 /** What a structure tells, and that it cannot be changed. */
 class StructureTest {
   private static final Jacobian JACOBIAN = (input, given, jacobian) -> jacobian[0] = 1;
+  private static final Hessian HESSIAN = (input, given, hessians) -> hessians[0] = 1;
 
   @Test
   void unknownReadsEverythingAndHasNoJacobian() {
     assertArrayEquals(new int[] {0, 1, 2}, Structure.UNKNOWN.activeInputs(3));
     assertFalse(Structure.UNKNOWN.jacobian().isPresent());
+    assertFalse(Structure.UNKNOWN.hessian().isPresent());
     assertFalse(new OnlyValues().structure().jacobian().isPresent());
   }
 
@@ -30,15 +32,19 @@ class StructureTest {
 
   @Test
   void eachPartIsKeptWhenTheOtherIsAdded() {
-    Structure first = Structure.UNKNOWN.withActiveInputs(4, 1).withJacobian(JACOBIAN);
-    Structure second = Structure.UNKNOWN.withJacobian(JACOBIAN).withActiveInputs(4, 1);
+    Structure first =
+        Structure.UNKNOWN.withHessian(HESSIAN).withActiveInputs(4, 1).withJacobian(JACOBIAN);
+    Structure second =
+        Structure.UNKNOWN.withJacobian(JACOBIAN).withActiveInputs(4, 1).withHessian(HESSIAN);
     for (Structure structure : new Structure[] {first, second}) {
       assertArrayEquals(new int[] {4, 1}, structure.activeInputs(5), "in the order given");
       assertSame(JACOBIAN, structure.jacobian().orElseThrow());
+      assertSame(HESSIAN, structure.hessian().orElseThrow());
     }
     Structure whole = first.withAllInputsActive();
     assertArrayEquals(new int[] {0, 1}, whole.activeInputs(2));
     assertSame(JACOBIAN, whole.jacobian().orElseThrow());
+    assertSame(HESSIAN, whole.hessian().orElseThrow());
     assertArrayEquals(new int[] {4, 1}, first.activeInputs(5), "the first is as it was");
   }
 

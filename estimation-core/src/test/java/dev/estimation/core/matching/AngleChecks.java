@@ -145,7 +145,9 @@ interface AngleChecks extends MatchingUnderTest {
 
     @Override
     public Structure structure() {
-      return Structure.UNKNOWN.withJacobian((u, given, j) -> j[0] = 1);
+      return Structure.UNKNOWN
+          .withJacobian((u, given, j) -> j[0] = 1)
+          .withHessian((u, given, h) -> {});
     }
   }
 }

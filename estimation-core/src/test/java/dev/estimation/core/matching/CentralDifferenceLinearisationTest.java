@@ -22,7 +22,7 @@ class CentralDifferenceLinearisationTest extends MomentMatchingContract
   }
 
   @Override
-  public int jacobians() {
+  public int jacobians(int carried) {
     return 1;
   }
 

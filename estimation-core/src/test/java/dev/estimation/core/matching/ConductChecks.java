@@ -26,7 +26,7 @@ interface ConductChecks extends MatchingUnderTest {
       for (int call = 0; call < 2; call++) {
         Outcome.of(work, new RandomGaussians(n).moments(n));
         assertEquals(evaluations(n), work.evaluations(), "evaluations for n = " + n);
-        assertEquals(jacobians(), work.jacobians(), "Jacobians for n = " + n);
+        assertEquals(jacobians(n), work.jacobians(), "Jacobians for n = " + n);
       }
     }
   }

@@ -54,6 +54,15 @@ interface FrozenInputChecks extends MatchingUnderTest {
         jacobian[2 * r + 1] = all[4 * r + 3];
       }
     });
+    Structure twice = structure.withHessian((u, given, hessians) -> {
+      double[] all = new double[48];
+      bent.structure().hessian().orElseThrow().evaluate(filled(values, u), given, all);
+      for (int r = 0; r < 3; r++) {
+        hessians[4 * r] = all[16 * r + 5];
+        hessians[4 * r + 2] = all[16 * r + 13];
+        hessians[4 * r + 3] = all[16 * r + 15];
+      }
+    });
     return new VectorFunction() {
       @Override
       public void evaluate(double[] input, double[] given, double[] output) {
@@ -62,7 +71,7 @@ interface FrozenInputChecks extends MatchingUnderTest {
 
       @Override
       public Structure structure() {
-        return structure;
+        return twice;
       }
     };
   }

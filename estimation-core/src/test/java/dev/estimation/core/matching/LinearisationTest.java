@@ -13,7 +13,7 @@ class LinearisationTest extends MomentMatchingContract implements FrozenInputChe
   }
 
   @Override
-  public int jacobians() {
+  public int jacobians(int carried) {
     return 1;
   }
 

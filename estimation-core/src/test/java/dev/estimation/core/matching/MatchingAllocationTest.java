@@ -30,28 +30,38 @@ class MatchingAllocationTest {
     List<Arguments> all = new ArrayList<>();
     for (int n : SIZES) {
       double[] scales = MatchingUnderTest.unitScales(n);
-      all.add(Arguments.of("linearisation", n, Linearisation.firstOrder(), true));
-      all.add(Arguments.of(
-          "differences", n, Linearisation.firstOrder().withInputScales(scales), false));
-      for (String name : List.of("unscented 1 2 0", "unscented 1e-3 2 0", "cubature 3")) {
-        all.add(Arguments.of(name, n, NamedMatchings.of(name), false));
+      all.add(Arguments.of("linearisation", n, Linearisation.firstOrder(), 1));
+      all.add(
+          Arguments.of("differences", n, Linearisation.firstOrder().withInputScales(scales), 0));
+      all.add(Arguments.of("second order", n, Linearisation.secondOrder(), 2));
+      MomentMatching scaled = Linearisation.secondOrder().withInputScales(scales);
+      all.add(Arguments.of("second differences", n, scaled, 0));
+      all.add(Arguments.of("differences of Jacobians", n, scaled, 1));
+      for (String name : List.of(
+          "spread 1",
+          "spread 2",
+          "spread axes",
+          "unscented 1 2 0",
+          "unscented 1e-3 2 0",
+          "cubature 3")) {
+        all.add(Arguments.of(name, n, NamedMatchings.of(name), 0));
       }
       PointRule kappa = UnscentedRule.scaled(1, 0, k -> 3 - k);
-      all.add(Arguments.of("kappa = 3 - n", n, PointMatching.of(kappa), false));
+      all.add(Arguments.of("kappa = 3 - n", n, PointMatching.of(kappa), 0));
       for (int nodes = 3; nodes <= 5 && Math.pow(nodes, n) <= 4096; nodes++) {
         String name = "Gauss-Hermite " + nodes;
-        all.add(Arguments.of(name, n, NamedMatchings.of(name), false));
+        all.add(Arguments.of(name, n, NamedMatchings.of(name), 0));
       }
     }
-    all.add(Arguments.of("Gauss-Hermite 3", 8, NamedMatchings.product(3), false));
+    all.add(Arguments.of("Gauss-Hermite 3", 8, NamedMatchings.product(3), 0));
     PointRule two = GaussHermiteRule.product(2);
-    all.add(Arguments.of("Gauss-Hermite 2", 12, PointMatching.of(two), false));
+    all.add(Arguments.of("Gauss-Hermite 2", 12, PointMatching.of(two), 0));
     return all.stream();
   }
 
   @ParameterizedTest
   @MethodSource("matchings")
-  void aCallAllocatesNothing(String name, int n, MomentMatching matching, boolean derivatives) {
+  void aCallAllocatesNothing(String name, int n, MomentMatching matching, int derivatives) {
     check(name, n, matching, new Wave(n, n, derivatives));
   }
 
@@ -59,7 +69,7 @@ class MatchingAllocationTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void aCallForSomeInputsAllocatesNothing(
-      String name, int n, MomentMatching matching, boolean derivatives) {
+      String name, int n, MomentMatching matching, int derivatives) {
     check(name, n, matching, new Wave(n, n - 1, derivatives));
     check(name, n, matching.overWholeInput(), new Wave(n, n - 1, derivatives));
   }
@@ -98,7 +108,7 @@ class MatchingAllocationTest {
   @Test
   void aFailedCallAllocatesNothing() {
     MatchingWorkspace work = NamedMatchings.of("cubature 3")
-        .workspace(Space.reals(5), Space.reals(2), new Wave(5, 4, false));
+        .workspace(Space.reals(5), Space.reals(2), new Wave(5, 4, 0));
     Moments input = new RandomGaussians(1).moments(5);
     Moments indefinite = new RandomGaussians(1).moments(5);
     indefinite.changeCovariance().set(3, 3, -1);
@@ -130,7 +140,7 @@ class MatchingAllocationTest {
     private final int read;
     private final Structure structure;
 
-    Wave(int inputs, int read, boolean derivatives) {
+    Wave(int inputs, int read, int derivatives) {
       this.inputs = inputs;
       this.read = read;
       int[] active = new int[read];
@@ -138,7 +148,11 @@ class MatchingAllocationTest {
         active[i] = read == inputs ? i : inputs - 1 - i;
       }
       Structure known = Structure.UNKNOWN.withActiveInputs(active);
-      this.structure = derivatives ? known.withJacobian(this::derive) : known;
+      this.structure = derivatives == 0
+          ? known
+          : derivatives == 1
+              ? known.withJacobian(this::derive)
+              : known.withJacobian(this::derive).withHessian(this::deriveTwice);
     }
 
     @Override
@@ -159,6 +173,14 @@ class MatchingAllocationTest {
       for (int i = inputs - read; i < inputs; i++) {
         jacobian[i] = 0.01;
         jacobian[inputs + i] = 0.02 * sum;
+      }
+    }
+
+    private void deriveTwice(double[] input, double[] given, double[] hessians) {
+      for (int j = inputs - read; j < inputs; j++) {
+        for (int l = inputs - read; l <= j; l++) {
+          hessians[(inputs + j) * inputs + l] = 0.002;
+        }
       }
     }
 

@@ -26,8 +26,8 @@ interface MatchingUnderTest {
   /** Evaluations that a call costs when this many inputs are carried. */
   int evaluations(int carried);
 
-  /** Jacobians that a call costs. */
-  default int jacobians() {
+  /** Jacobians that a call costs when this many inputs are carried. */
+  default int jacobians(int carried) {
     return 0;
   }
 

@@ -12,7 +12,9 @@ final class NamedMatchings {
   static MomentMatching of(String name) {
     String[] words = name.split(" ");
     return switch (words[0]) {
-      case "linearisation" -> Linearisation.firstOrder();
+      case "linearisation" ->
+        words.length == 1 ? Linearisation.firstOrder() : Linearisation.secondOrder();
+      case "spread" -> spread(words[1]);
       case "cubature" ->
         PointMatching.of(
             name.equals("cubature 5") ? CubatureRule.degreeFive() : CubatureRule.degreeThree());
@@ -22,6 +24,14 @@ final class NamedMatchings {
       case "unscented" -> PointMatching.of(unscented(words));
       case "Gauss-Hermite" -> product(Integer.parseInt(words[1]));
       default -> throw new IllegalArgumentException("no matching is named " + name);
+    };
+  }
+
+  private static MomentMatching spread(String order) {
+    return switch (order) {
+      case "1" -> SpreadLinearisation.firstOrder();
+      case "2" -> SpreadLinearisation.secondOrder();
+      default -> SpreadLinearisation.secondOrderAlongAxes();
     };
   }
 

@@ -2,11 +2,13 @@ package dev.estimation.core.matching;
 
 import static dev.estimation.testing.Agreement.assertVector;
 import static dev.estimation.testing.Agreement.assertWithin;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.space.Space;
+import dev.estimation.testing.PlainFunction;
 import dev.estimation.testing.RandomGaussians;
 import dev.estimation.testing.ReferenceTable;
 import java.util.stream.Stream;
@@ -26,9 +28,14 @@ class QuadraticFormsTest {
   }
 
   private static Outcome carry(String name, ReferenceTable.Row row) {
+    return carry(NamedMatchings.of(name), row, new Form(row));
+  }
+
+  private static Outcome carry(
+      MomentMatching matching, ReferenceTable.Row row, VectorFunction function) {
     Gaussian input = input(row);
-    MatchingWorkspace work = NamedMatchings.of(name)
-        .workspace(Space.reals(input.dimension()), Space.reals(1), new Form(row));
+    MatchingWorkspace work =
+        matching.workspace(Space.reals(input.dimension()), Space.reals(1), function);
     return Outcome.of(work, RandomGaussians.momentsOf(input));
   }
 
@@ -72,6 +79,40 @@ class QuadraticFormsTest {
     assertVector("covariance", row.numbers("covariance"), got.cross().data, 1e-14, 25);
   }
 
+  /**
+   * Exact for quadratic functions, with given Hessians and by differences over the spread: 25 roundings
+   * or so. Differences at the mean: relative errors of 1e-10 from Jacobians, of 1e-7 from values.
+   */
+  @ParameterizedTest
+  @MethodSource("forms")
+  void secondOrderIsExact(ReferenceTable.Row row) {
+    double[] scales = MatchingUnderTest.unitScales(input(row).dimension());
+    Linearisation differences = Linearisation.secondOrder().withInputScales(scales);
+    assertExact(row, carry(Linearisation.secondOrder(), row, new Form(row, true)), 1e-14);
+    assertExact(row, carry(SpreadLinearisation.secondOrder(), row, new Form(row)), 1e-14);
+    assertExact(row, carry(differences, row, new Form(row)), 1e-10);
+    assertExact(row, carry(differences, row, new PlainFunction(new Form(row))), 1e-7);
+  }
+
+  private static void assertExact(ReferenceTable.Row row, Outcome got, double tolerance) {
+    assertWithin("mean", row.number("mean"), got.mean[0], tolerance, 25);
+    double variance = got.covariance.get(0, 0);
+    assertWithin("variance", row.number("variance"), variance, 10 * tolerance, 200);
+    assertVector("covariance", row.numbers("covariance"), got.cross().data, tolerance, 25);
+  }
+
+  /** Along axes only the diagonal of B'SB counts: the mean is exact, the variance misses the rest. */
+  @ParameterizedTest
+  @MethodSource("forms")
+  void alongAxesTheProductsAreMissing(ReferenceTable.Row row) {
+    Outcome got = carry("spread axes", row);
+    assertWithin("mean", row.number("mean"), got.mean[0], 1e-14, 25);
+    assertVector("covariance", row.numbers("covariance"), got.cross().data, 1e-14, 25);
+    double missing = row.number("variance") - got.covariance.get(0, 0);
+    assertTrue(missing > 0.05, () -> "missing: " + missing);
+    assertTrue(missing < secondOrderTerms(row)[1], () -> "missing: " + missing);
+  }
+
   /** tr(SP) and 2 tr((SP)^2), S = (A + A') / 2. */
   private static double[] secondOrderTerms(ReferenceTable.Row row) {
     Gaussian input = input(row);
@@ -101,8 +142,14 @@ class QuadraticFormsTest {
     private final double[] a;
     private final double[] b;
     private final double c;
+    private final boolean twice;
 
     Form(ReferenceTable.Row row) {
+      this(row, false);
+    }
+
+    Form(ReferenceTable.Row row, boolean twice) {
+      this.twice = twice;
       a = row.numbers("a");
       b = row.numbers("b");
       c = row.number("c");
@@ -122,7 +169,17 @@ class QuadraticFormsTest {
 
     @Override
     public Structure structure() {
-      return Structure.UNKNOWN.withJacobian((input, given, jacobian) -> derive(input, jacobian));
+      Structure once =
+          Structure.UNKNOWN.withJacobian((input, given, jacobian) -> derive(input, jacobian));
+      return twice ? once.withHessian((input, given, hessians) -> deriveTwice(hessians)) : once;
+    }
+
+    private void deriveTwice(double[] hessians) {
+      for (int i = 0; i < b.length; i++) {
+        for (int j = 0; j <= i; j++) {
+          hessians[i * b.length + j] = a[i * b.length + j] + a[j * b.length + i];
+        }
+      }
     }
 
     private void derive(double[] input, double[] jacobian) {

@@ -19,9 +19,9 @@ import java.util.Arrays;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
-import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /** What a sum of squares needs of a matching: the rest of the input, and what stays unexplained. */
 class RestFactorTest {
@@ -31,6 +31,10 @@ class RestFactorTest {
   static List<String> matchings() {
     return List.of(
         "linearisation",
+        "spread 1",
+        "linearisation 2",
+        "spread 2",
+        "spread axes",
         "unscented 1 2 0",
         "unscented 0.5 2 1",
         "unscented 1 0 3-n",
@@ -38,8 +42,8 @@ class RestFactorTest {
         "Gauss-Hermite 3");
   }
 
-  static List<String> pointMatchings() {
-    return matchings().subList(1, 6);
+  static List<String> bentMatchings() {
+    return matchings().subList(2, 10);
   }
 
   private static MatchingWorkspace bent(String name, Moments input, DMatrixRMaj noise, int... at) {
@@ -107,18 +111,19 @@ class RestFactorTest {
   }
 
   @ParameterizedTest
-  @MethodSource("pointMatchings")
+  @MethodSource("bentMatchings")
   void bendsAreUnexplained(String name) {
     MatchingWorkspace work = bent(name, new RandomGaussians(2).moments(WHOLE), null, 1, 4);
     DMatrixRMaj got = work.unexplained().matrix();
     assertTrue(Math.abs(CommonOps_DDRM.trace(got)) > 1e-3, "no noise, yet not nothing");
   }
 
-  @Test
-  void linearisationLeavesTheNoiseItself() {
+  @ParameterizedTest
+  @ValueSource(strings = {"linearisation", "spread 1"})
+  void linearisationLeavesTheNoiseItself(String name) {
     RandomGaussians random = new RandomGaussians(3);
     DMatrixRMaj noise = random.covariance(OUTPUTS);
-    MatchingWorkspace work = bent("linearisation", random.moments(WHOLE), noise, 3, 1);
+    MatchingWorkspace work = bent(name, random.moments(WHOLE), noise, 3, 1);
     DMatrixRMaj got = work.unexplained().matrix();
     assertSameBits("noise", noise, got);
   }

@@ -23,7 +23,7 @@ interface WholeInputChecks extends MatchingUnderTest {
     RandomGaussians random = new RandomGaussians(12);
     Moments input = random.moments(5);
     AffineFunction affine = new AffineFunction(random.matrix(2, 2), random.vector(2));
-    EmbeddedFunction function = new EmbeddedFunction(affine, 2, 5, 3, 1);
+    EmbeddedFunction function = new EmbeddedFunction(offered(affine), 2, 5, 3, 1);
     Outcome part = carry(overActiveInputs(), input, function, 2);
     Outcome whole = carry(matching(MatchingUnderTest.unitScales(5)), input, function, 5);
     assertVector("mean", part.mean, whole.mean, meanRounding(5, 10), 1);

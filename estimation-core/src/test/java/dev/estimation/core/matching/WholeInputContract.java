@@ -1,5 +1,7 @@
 package dev.estimation.core.matching;
 
+import dev.estimation.core.function.VectorFunction;
+
 /** The contract for matchings over the whole input, whatever a function reads. */
 abstract class WholeInputContract
     implements AffineChecks,
@@ -22,6 +24,11 @@ abstract class WholeInputContract
   }
 
   @Override
+  public VectorFunction offered(VectorFunction function) {
+    return narrow().offered(function);
+  }
+
+  @Override
   public int carried(int active, int whole) {
     return whole;
   }
@@ -32,8 +39,8 @@ abstract class WholeInputContract
   }
 
   @Override
-  public int jacobians() {
-    return narrow().jacobians();
+  public int jacobians(int carried) {
+    return narrow().jacobians(carried);
   }
 
   @Override

@@ -15,6 +15,8 @@ final class BadFunctions implements VectorFunction {
   static final double OVERFLOWS = 7;
   static final double BAD_JACOBIAN = 8;
 
+  static final double BAD_HESSIAN = 9;
+
   private final boolean derivatives;
 
   BadFunctions(boolean derivatives) {
@@ -45,13 +47,25 @@ final class BadFunctions implements VectorFunction {
 
   @Override
   public Structure structure() {
-    return derivatives ? Structure.UNKNOWN.withJacobian(BadFunctions::derive) : Structure.UNKNOWN;
+    return derivatives
+        ? Structure.UNKNOWN
+            .withJacobian(BadFunctions::derive)
+            .withHessian(BadFunctions::deriveTwice)
+        : Structure.UNKNOWN;
   }
 
   private static void derive(double[] input, double[] given, double[] jacobian) {
     jacobian[0] = given[0] == OVERFLOWS ? 1e200 : 1;
     jacobian[1] = 0.2 * input[1];
     jacobian[3] = given[0] == BAD_JACOBIAN ? Double.NaN : Math.cos(input[1]);
+    if (given[0] == WRITES_INPUT) {
+      input[0] = 1e9;
+    }
+  }
+
+  private static void deriveTwice(double[] input, double[] given, double[] hessians) {
+    hessians[3] = 0.2;
+    hessians[7] = given[0] == BAD_HESSIAN ? Double.NaN : -Math.sin(input[1]);
     if (given[0] == WRITES_INPUT) {
       input[0] = 1e9;
     }

@@ -11,6 +11,7 @@ import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
+import dev.estimation.core.matching.SpreadLinearisation;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.UnscentedRule;
@@ -26,10 +27,14 @@ final class UglyFixture {
   private final DMatrixRMaj covariance;
   private final DMatrixRMaj cross;
 
-  /** The matchings that are tried; the first takes the function's Jacobian, the second does not. */
+  /** The matchings that are tried. */
   enum Way {
     LINEARISATION,
     DIFFERENCES,
+    SECOND_ORDER,
+    SECOND_DIFFERENCES,
+    SPREAD,
+    SPREAD_SECOND_ORDER,
     UNSCENTED,
     UNSCENTED_NARROW,
     CUBATURE,
@@ -39,6 +44,9 @@ final class UglyFixture {
       return switch (this) {
         case LINEARISATION -> Linearisation.firstOrder();
         case DIFFERENCES -> Linearisation.firstOrder().withInputScales(1, 1);
+        case SECOND_ORDER, SECOND_DIFFERENCES -> Linearisation.secondOrder().withInputScales(1, 1);
+        case SPREAD -> SpreadLinearisation.firstOrder();
+        case SPREAD_SECOND_ORDER -> SpreadLinearisation.secondOrder();
         case UNSCENTED -> PointMatching.of(UnscentedRule.scaled(1, 2, 0));
         case UNSCENTED_NARROW -> PointMatching.of(UnscentedRule.scaled(1e-3, 2, 0));
         case CUBATURE -> PointMatching.of(CubatureRule.degreeThree());
@@ -48,12 +56,12 @@ final class UglyFixture {
 
     /** Those that evaluate a standard deviation or so away from the mean. */
     static Stream<Way> wide() {
-      return Stream.of(UNSCENTED, CUBATURE, GAUSS_HERMITE);
+      return Stream.of(SPREAD, SPREAD_SECOND_ORDER, UNSCENTED, CUBATURE, GAUSS_HERMITE);
     }
   }
 
   UglyFixture(Way way) {
-    BadFunctions function = new BadFunctions(way == Way.LINEARISATION);
+    BadFunctions function = new BadFunctions(way == Way.LINEARISATION || way == Way.SECOND_ORDER);
     work = way.matching().workspace(Space.reals(2), Space.reals(2), function);
     assertEquals(MatchingStatus.MATCHED, carry(good(), BadFunctions.GOOD));
     mean = work.output().mean().clone();

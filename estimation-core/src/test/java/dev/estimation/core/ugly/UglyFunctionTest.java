@@ -125,6 +125,18 @@ class UglyFunctionTest {
     fixture.assertUsable();
   }
 
+  @Test
+  void aHessianThatIsNaN() {
+    UglyFixture fixture = new UglyFixture(Way.SECOND_ORDER);
+    fixture.assertFails(
+        MatchingStatus.JACOBIAN_NOT_FINITE,
+        UglyFixture.good(),
+        BadFunctions.BAD_HESSIAN,
+        "Hessian[1][1][1]",
+        "NaN");
+    fixture.assertUsable();
+  }
+
   /** A derivative that overflows by differences: the function is finite, the quotient is not. */
   @Test
   void differencesThatAreNotFinite() {

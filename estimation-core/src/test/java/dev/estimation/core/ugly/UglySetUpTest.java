@@ -11,6 +11,9 @@ import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.core.space.Space;
+import dev.estimation.testing.AffineFunction;
+import dev.estimation.testing.OnceDifferentiable;
+import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Test;
 
 /** Set-ups that cannot work are refused when a workspace is made, not at the first step. */
@@ -42,6 +45,15 @@ class UglySetUpTest {
   @Test
   void linearisationWithoutAJacobian() {
     assertRefused(Linearisation.firstOrder(), 2, PLAIN, "Jacobian", "input scales");
+    assertRefused(Linearisation.secondOrder(), 2, PLAIN, "Jacobian", "input scales");
+  }
+
+  @Test
+  void secondOrderWithoutAHessian() {
+    AffineFunction sum = new AffineFunction(new DMatrixRMaj(1, 2), 0);
+    VectorFunction function = new OnceDifferentiable(sum);
+    assertRefused(Linearisation.secondOrder(), 2, function, "Hessian", "input scales", "spread");
+    Linearisation.firstOrder().workspace(Space.reals(2), Space.reals(1), function);
   }
 
   @Test

@@ -24,7 +24,8 @@ final class AdditiveTransition extends Transition {
             model.stateSpace(),
             model.stateSpace(),
             function,
-            "motion model " + FilterPlan.nameOf(model) + "; its Jacobian: DifferentiableMotion"));
+            "motion model " + FilterPlan.nameOf(model)
+                + "; its derivatives: DifferentiableMotion, TwiceDifferentiableMotion"));
     this.model = model;
     this.function = function;
   }

@@ -4,6 +4,7 @@ import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.filters.model.DifferentiableMotion;
 import dev.estimation.filters.model.MotionModel;
+import dev.estimation.filters.model.TwiceDifferentiableMotion;
 
 /** A motion model over a set time: given is the control. Owned by one workspace. */
 final class MotionFunction implements VectorFunction {
@@ -27,12 +28,15 @@ final class MotionFunction implements VectorFunction {
 
   @Override
   public Structure structure() {
-    if (model instanceof DifferentiableMotion differentiable) {
-      return model
-          .structure()
-          .withJacobian((state, control, jacobian) ->
-              differentiable.moveJacobian(state, control, time, dt, jacobian));
+    Structure structure = model.structure();
+    if (model instanceof DifferentiableMotion once) {
+      structure = structure.withJacobian(
+          (state, control, jacobian) -> once.moveJacobian(state, control, time, dt, jacobian));
     }
-    return model.structure();
+    if (model instanceof TwiceDifferentiableMotion twice) {
+      structure = structure.withHessian(
+          (state, control, hessians) -> twice.moveHessian(state, control, time, dt, hessians));
+    }
+    return structure;
   }
 }

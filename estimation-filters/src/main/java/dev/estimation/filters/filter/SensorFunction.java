@@ -4,6 +4,7 @@ import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.model.SensorModel;
+import dev.estimation.filters.model.TwiceDifferentiableSensor;
 
 /** A sensor model as a function of the state. */
 final class SensorFunction implements VectorFunction {
@@ -20,9 +21,13 @@ final class SensorFunction implements VectorFunction {
 
   @Override
   public Structure structure() {
-    if (model instanceof DifferentiableSensor differentiable) {
-      return model.structure().withJacobian(differentiable::measureJacobian);
+    Structure structure = model.structure();
+    if (model instanceof DifferentiableSensor once) {
+      structure = structure.withJacobian(once::measureJacobian);
     }
-    return model.structure();
+    if (model instanceof TwiceDifferentiableSensor twice) {
+      structure = structure.withHessian(twice::measureHessian);
+    }
+    return structure;
   }
 }

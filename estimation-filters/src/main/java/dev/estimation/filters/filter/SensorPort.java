@@ -49,7 +49,8 @@ public final class SensorPort {
         stateSpace,
         space,
         new SensorFunction(sensor),
-        "sensor model " + name + "; its Jacobian: DifferentiableSensor");
+        "sensor model " + name
+            + "; its derivatives: DifferentiableSensor, TwiceDifferentiableSensor");
     this.noise = new NoiseMatrix("measurementNoise", m, true);
     this.innovation = new Innovation(space, matching, plan.iteration() != null);
     this.posterior = new Posterior(stateSpace, matching, plan.form());

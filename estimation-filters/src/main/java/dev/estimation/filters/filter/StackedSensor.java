@@ -5,6 +5,7 @@ import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.model.SensorModel;
+import dev.estimation.filters.model.TwiceDifferentiableSensor;
 import java.util.Arrays;
 
 /** A number of rows of one sensor as one measurement, with independent noise. Owned by one port. */
@@ -32,6 +33,9 @@ class StackedSensor implements SensorModel {
   }
 
   static StackedSensor of(SensorModel sensor, int rows, Space state) {
+    if (sensor instanceof TwiceDifferentiableSensor twice) {
+      return new TwiceDifferentiable(twice, rows, state);
+    }
     return sensor instanceof DifferentiableSensor differentiable
         ? new Differentiable(differentiable, rows, state)
         : new StackedSensor(sensor, rows, state);
@@ -99,7 +103,7 @@ class StackedSensor implements SensorModel {
   }
 
   /** The rows of a sensor that knows its Jacobian. */
-  private static final class Differentiable extends StackedSensor implements DifferentiableSensor {
+  private static class Differentiable extends StackedSensor implements DifferentiableSensor {
     private final DifferentiableSensor sensor;
     private final double[] rowJacobian;
 
@@ -116,6 +120,29 @@ class StackedSensor implements SensorModel {
         Arrays.fill(rowJacobian, 0);
         sensor.measureJacobian(copied(state), givenOf(row, given), rowJacobian);
         System.arraycopy(rowJacobian, 0, jacobian, row * size, size);
+      }
+    }
+  }
+
+  /** The rows of a sensor that knows its Hessian too. */
+  private static final class TwiceDifferentiable extends Differentiable
+      implements TwiceDifferentiableSensor {
+    private final TwiceDifferentiableSensor sensor;
+    private final double[] rowHessians;
+
+    TwiceDifferentiable(TwiceDifferentiableSensor sensor, int rows, Space state) {
+      super(sensor, rows, state);
+      this.sensor = sensor;
+      this.rowHessians = new double[width * state.dimension() * state.dimension()];
+    }
+
+    @Override
+    public void measureHessian(double[] state, double[] given, double[] hessians) {
+      int size = rowHessians.length;
+      for (int row = 0; row < rows; row++) {
+        Arrays.fill(rowHessians, 0);
+        sensor.measureHessian(copied(state), givenOf(row, given), rowHessians);
+        System.arraycopy(rowHessians, 0, hessians, row * size, size);
       }
     }
   }

@@ -3,7 +3,8 @@ package dev.estimation.filters.model;
 /**
  * How a state moves: x(t + dt) = f(x, control, t, dt) + w, w ~ N(0, Q).
  *
- * <p>A model that also has a Jacobian is a {@link DifferentiableMotion}. The active inputs of its
+ * <p>A model that also has a Jacobian is a {@link DifferentiableMotion}, one that has a Hessian too a {@link
+ * TwiceDifferentiableMotion}. The active inputs of its
  * structure are components of the state.
  */
 public non-sealed interface MotionModel extends Motion {

@@ -123,11 +123,10 @@ class FilterTest {
     Estimate estimate = plan.start(0, standard(0, 0, 0));
     assertEquals(StepStatus.APPLIED, work.predict(estimate, 0.1));
     assertEquals(StepStatus.APPLIED, port.update(estimate, new double[2]));
-    int jacobians = Matchings.isLinear(named) ? 1 : 0;
-    assertEquals(jacobians, work.jacobians());
-    assertEquals(jacobians, port.jacobians());
     // The motion reads all of three components, the sensor two of them.
     assertEquals(Matchings.evaluations(named, 3, 3), work.evaluations());
+    assertEquals(Matchings.jacobians(named, 3, 3), work.jacobians());
+    assertEquals(Matchings.jacobians(named, 2, 3), port.jacobians());
     assertEquals(Matchings.evaluations(named, 2, 3), port.evaluations());
   }
 

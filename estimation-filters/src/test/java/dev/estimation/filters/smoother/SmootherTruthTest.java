@@ -39,6 +39,7 @@ class SmootherTruthTest {
   static List<Arguments> pendulumRules() {
     return List.of(
         Arguments.of("EKF1", Linearisation.firstOrder()),
+        Arguments.of("EKF2", Linearisation.secondOrder()),
         Arguments.of("UKF_a1_b0_k1", PointMatching.of(UnscentedRule.scaled(1, 0, 1))),
         Arguments.of("UKF_a1_b2_k1", PointMatching.of(UnscentedRule.scaled(1, 2, 1))),
         Arguments.of("UKF_a0.5_b2_k0", PointMatching.of(UnscentedRule.scaled(0.5, 2, 0))),

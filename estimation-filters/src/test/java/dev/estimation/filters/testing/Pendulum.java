@@ -2,15 +2,15 @@ package dev.estimation.filters.testing;
 
 import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableMotion;
-import dev.estimation.filters.model.DifferentiableSensor;
+import dev.estimation.filters.model.TwiceDifferentiableMotion;
+import dev.estimation.filters.model.TwiceDifferentiableSensor;
 
 /**
  * A pendulum driven by white noise and seen from the side: the textbook example of Sarkka 2013,
  * <i>Bayesian Filtering and Smoothing</i>, examples 3.7 and 5.1 (structure and parameters second
  * hand, from public pages that cite the book). The angle is a plain real there.
  */
-public final class Pendulum implements DifferentiableMotion {
+public final class Pendulum implements TwiceDifferentiableMotion {
   private static final double GRAVITY = 9.81;
   private static final double DENSITY = 0.01;
 
@@ -35,13 +35,19 @@ public final class Pendulum implements DifferentiableMotion {
   }
 
   @Override
+  public void moveHessian(
+      double[] state, double[] control, double time, double dt, double[] hessians) {
+    hessians[4] = GRAVITY * Math.sin(state[0]) * dt;
+  }
+
+  @Override
   public void processNoise(
       double[] state, double[] control, double time, double dt, double[] covariance) {
     new ConstantVelocity(DENSITY).processNoise(state, control, time, dt, covariance);
   }
 
   /** The sine of the angle, variance 0.1. */
-  public static final class SideView implements DifferentiableSensor {
+  public static final class SideView implements TwiceDifferentiableSensor {
     @Override
     public Space measurementSpace() {
       return Space.reals(1);
@@ -55,6 +61,11 @@ public final class Pendulum implements DifferentiableMotion {
     @Override
     public void measureJacobian(double[] state, double[] given, double[] jacobian) {
       jacobian[0] = Math.cos(state[0]);
+    }
+
+    @Override
+    public void measureHessian(double[] state, double[] given, double[] hessians) {
+      hessians[0] = -Math.sin(state[0]);
     }
 
     @Override

@@ -133,9 +133,11 @@ final class ResultsDocument {
     Gaussian estimate = snapshot.estimate();
     putNumber(node, "time", snapshot.time());
     ArrayNode mean = node.putArray("mean");
+    for (double number : estimate.mean()) {
+      mean.add(number);
+    }
     ArrayNode covariance = node.putArray("covariance");
     for (int i = 0; i < estimate.dimension(); i++) {
-      mean.add(estimate.mean(i));
       ArrayNode row = covariance.addArray();
       for (int j = 0; j < estimate.dimension(); j++) {
         row.add(estimate.covariance(i, j));

@@ -1,13 +1,17 @@
 package dev.estimation.core.gaussian;
 
 import dev.estimation.core.internal.Checks;
-import dev.estimation.core.internal.LowerFactor;
-import dev.estimation.core.internal.SymmetricMatrix;
+import dev.estimation.core.space.Space;
 import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 
 /**
  * A mean and a covariance: what is known of a vector.
+ *
+ * <p>The {@link #dimension()} is the size of the covariance. The mean has as many numbers, unless it is a
+ * point of a {@link Space} that needs more: a unit quaternion has a mean of 4 numbers and a covariance of 3
+ * x 3, that of the difference from the mean. Such a mean is given with its space. Two values are equal
+ * if all their numbers are.
  *
  * <p>The covariance is finite, symmetric and positive semi-definite; a variance may be zero. Mirrored
  * entries may differ by 1e-12 sqrt(p_ii p_jj), the rounding of a matrix product; the lower triangle
@@ -35,18 +39,7 @@ public final class Gaussian {
    *     not symmetric or not positive semi-definite
    */
   public static Gaussian of(double[] mean, double[][] covariance) {
-    int n = mean.length;
-    DMatrixRMaj matrix = new DMatrixRMaj(n, n);
-    if (covariance.length != n) {
-      throw wrongShape(n, covariance.length + " rows");
-    }
-    for (int i = 0; i < n; i++) {
-      if (covariance[i].length != n) {
-        throw wrongShape(n, "row " + i + " of length " + covariance[i].length);
-      }
-      System.arraycopy(covariance[i], 0, matrix.data, i * n, n);
-    }
-    return checked(mean.clone(), matrix);
+    return new Gaussian(point(mean), CovarianceInput.of(mean.length, covariance, "the mean"));
   }
 
   /**
@@ -58,11 +51,7 @@ public final class Gaussian {
    * @throws IllegalArgumentException as for {@link #of(double[], double[][])}
    */
   public static Gaussian of(double[] mean, DMatrixRMaj covariance) {
-    int n = mean.length;
-    if (covariance.numRows != n || covariance.numCols != n) {
-      throw wrongShape(n, covariance.numRows + " x " + covariance.numCols);
-    }
-    return checked(mean.clone(), covariance.copy());
+    return new Gaussian(point(mean), CovarianceInput.of(mean.length, covariance, "the mean"));
   }
 
   /**
@@ -73,70 +62,82 @@ public final class Gaussian {
    * @return the value
    */
   public static Gaussian independent(double[] mean, double[] standardDeviations) {
-    int n = mean.length;
-    Checks.length("standardDeviations", standardDeviations, n);
-    DMatrixRMaj matrix = new DMatrixRMaj(n, n);
-    for (int i = 0; i < n; i++) {
-      if (!(standardDeviations[i] >= 0)) {
-        throw new IllegalArgumentException(
-            "standardDeviations[" + i + "] must be 0 or more, got " + standardDeviations[i]);
-      }
-      matrix.data[i * n + i] = standardDeviations[i] * standardDeviations[i];
-    }
-    return checked(mean.clone(), matrix);
-  }
-
-  private static IllegalArgumentException wrongShape(int n, String got) {
-    return new IllegalArgumentException(
-        "covariance must be " + n + " x " + n + " to match the mean, got " + got);
-  }
-
-  private static Gaussian checked(double[] mean, DMatrixRMaj covariance) {
-    int n = mean.length;
-    if (n == 0) {
-      throw new IllegalArgumentException("mean must have at least 1 component, got 0");
-    }
-    Checks.finite("mean", mean);
-    int bad = SymmetricMatrix.firstNotFinite(covariance);
-    if (bad >= 0) {
-      throw new IllegalArgumentException(
-          "covariance" + place(bad, n) + " must be finite, got " + covariance.data[bad]);
-    }
-    int odd = SymmetricMatrix.firstAsymmetric(covariance);
-    if (odd >= 0) {
-      int mirror = odd % n * n + odd / n;
-      throw new IllegalArgumentException(
-          "covariance must be symmetric, got " + place(odd, n) + " = " + covariance.data[odd]
-              + " and " + place(mirror, n) + " = " + covariance.data[mirror]);
-    }
-    SymmetricMatrix.mirrorLower(covariance);
-    LowerFactor factor = new LowerFactor(n);
-    if (!factor.factorSemidefinite(covariance)) {
-      throw new IllegalArgumentException("covariance is not positive semi-definite: "
-          + factor.failure() + ", largest diagonal " + largestDiagonal(covariance));
-    }
-    return new Gaussian(mean, covariance);
-  }
-
-  private static String place(int index, int n) {
-    return "[" + index / n + "][" + index % n + "]";
-  }
-
-  private static double largestDiagonal(DMatrixRMaj matrix) {
-    double largest = Double.NEGATIVE_INFINITY;
-    for (int i = 0; i < matrix.numRows; i++) {
-      largest = Math.max(largest, matrix.get(i, i));
-    }
-    return largest;
-  }
-
-  /** {@return the number of components} */
-  public int dimension() {
-    return mean.length;
+    return new Gaussian(point(mean), CovarianceInput.diagonal(mean.length, standardDeviations));
   }
 
   /**
-   * {@return the mean of one component}
+   * A mean and covariance in a space.
+   *
+   * @param space where the vector lives, of dimension d
+   * @param mean a point of the space, copied; then displaced by zero, which brings angles into their
+   *     range and gives a quaternion the length 1
+   * @param covariance d rows of d numbers, copied
+   * @return the value
+   * @throws IllegalArgumentException as for {@link #of(double[], double[][])}, or if the space does not
+   *     contain the mean
+   */
+  public static Gaussian of(Space space, double[] mean, double[][] covariance) {
+    return new Gaussian(
+        point(space, mean), CovarianceInput.of(space.dimension(), covariance, space));
+  }
+
+  /**
+   * A mean and covariance in a space.
+   *
+   * @param space where the vector lives, of dimension d
+   * @param mean as for {@link #of(Space, double[], double[][])}
+   * @param covariance d x d, copied
+   * @return the value
+   * @throws IllegalArgumentException as for {@link #of(Space, double[], double[][])}
+   */
+  public static Gaussian of(Space space, double[] mean, DMatrixRMaj covariance) {
+    return new Gaussian(
+        point(space, mean), CovarianceInput.of(space.dimension(), covariance, space));
+  }
+
+  /**
+   * Independent components in a space.
+   *
+   * @param space where the vector lives, of dimension d
+   * @param mean as for {@link #of(Space, double[], double[][])}
+   * @param standardDeviations d numbers, each 0 or more, in the units of differences
+   * @return the value
+   */
+  public static Gaussian independent(Space space, double[] mean, double[] standardDeviations) {
+    return new Gaussian(
+        point(space, mean), CovarianceInput.diagonal(space.dimension(), standardDeviations));
+  }
+
+  private static double[] point(double[] mean) {
+    if (mean.length == 0) {
+      throw new IllegalArgumentException("mean must have at least 1 component, got 0");
+    }
+    Checks.finite("mean", mean);
+    return mean.clone();
+  }
+
+  private static double[] point(Space space, double[] mean) {
+    if (mean.length != space.storage()) {
+      throw new IllegalArgumentException("mean must have length " + space.storage()
+          + " to be a point of " + space + ", got " + mean.length);
+    }
+    Checks.finite("mean", mean);
+    if (!space.contains(mean)) {
+      throw new IllegalArgumentException(
+          "mean must be a point of " + space + ", got " + Arrays.toString(mean));
+    }
+    double[] point = new double[mean.length];
+    space.displace(mean, new double[space.dimension()], point);
+    return point;
+  }
+
+  /** {@return the size of the covariance} */
+  public int dimension() {
+    return covariance.numRows;
+  }
+
+  /**
+   * {@return one number of the mean}
    *
    * @param index from 0
    */
@@ -155,7 +156,7 @@ public final class Gaussian {
   }
 
   /**
-   * {@return the standard deviation of one component}
+   * {@return the standard deviation of one component of differences from the mean}
    *
    * @param index from 0
    */
@@ -175,7 +176,12 @@ public final class Gaussian {
 
   void copyInto(double[] meanTarget, DMatrixRMaj covarianceTarget) {
     System.arraycopy(mean, 0, meanTarget, 0, mean.length);
-    System.arraycopy(covariance.data, 0, covarianceTarget.data, 0, mean.length * mean.length);
+    int size = covariance.getNumElements();
+    System.arraycopy(covariance.data, 0, covarianceTarget.data, 0, size);
+  }
+
+  boolean isIn(Space space) {
+    return dimension() == space.dimension() && space.contains(mean);
   }
 
   @Override
@@ -192,8 +198,7 @@ public final class Gaussian {
 
   @Override
   public String toString() {
-    int n = mean.length;
-    double[] deviations = new double[n];
+    double[] deviations = new double[dimension()];
     Arrays.setAll(deviations, this::standardDeviation);
     return "Gaussian[mean " + Arrays.toString(mean) + ", standard deviations "
         + Arrays.toString(deviations) + "]";

@@ -2,6 +2,7 @@ package dev.estimation.core.gaussian;
 
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.space.Space;
+import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -67,11 +68,16 @@ public final class Moments {
    * Takes the values of a Gaussian of the same size.
    *
    * @param value copied from
+   * @throws IllegalArgumentException if its dimension is not that of the space, or its mean no point there
    */
   public void set(Gaussian value) {
-    if (value.dimension() != mean.length) {
-      throw new IllegalArgumentException("a Gaussian must have dimension " + mean.length
+    if (value.dimension() != space.dimension()) {
+      throw new IllegalArgumentException("a Gaussian must have dimension " + space.dimension()
           + " to be set here, got " + value.dimension());
+    }
+    if (!value.isIn(space)) {
+      throw new IllegalArgumentException("a Gaussian must have a mean in " + space
+          + " to be set here, got " + Arrays.toString(value.mean()));
     }
     value.copyInto(mean, changeCovariance());
   }
@@ -83,6 +89,10 @@ public final class Moments {
    */
   public void set(Moments other) {
     Checks.length("mean", other.mean, mean.length);
+    if (other.covariance.dimension() != covariance.dimension()) {
+      throw new IllegalArgumentException("moments must have dimension " + covariance.dimension()
+          + " to be set here, got " + other.covariance.dimension());
+    }
     System.arraycopy(other.mean, 0, mean, 0, mean.length);
     covariance.set(other.covariance);
   }
@@ -124,6 +134,6 @@ public final class Moments {
    * @throws IllegalArgumentException if they are not those of a Gaussian
    */
   public Gaussian toGaussian() {
-    return Gaussian.of(mean, covariance());
+    return Gaussian.of(space, mean, covariance());
   }
 }

@@ -220,7 +220,9 @@ abstract class BaseWorkspace implements MatchingWorkspace {
       case INPUT_NOT_DEFINITE -> "covariance is not positive semi-definite: " + active.failure();
       case FUNCTION_NOT_FINITE -> function.failure();
       case JACOBIAN_NOT_FINITE -> jacobianFailure();
-      case OUTPUT_NOT_FINITE -> "moments of the output are not finite: the deviations overflow";
+      case OUTPUT_NOT_FINITE ->
+        "moments of the output are not finite: the deviations overflow, or the function has left "
+            + outputSpace;
       case OUTPUT_NOT_DEFINITE ->
         "covariance of the output is not positive definite: negative weights outweigh the others";
     };

@@ -14,8 +14,11 @@ import dev.estimation.core.space.Space;
  * <p>With d_i = g(u_i) - g(m): delta = sum w_i d_i, mean = g(m) + delta, P_zz = sum w_i d_i d_i' +
  * (wc_0 - wm_0 - 1) delta delta', W = sum w_i xi_i d_i'. Sums run over all points but the centre, whose
  * deviation is zero, so a large negative centre weight costs no digits in them. Differences are those
- * of the output space: angles are averaged around the centre's image, so deviations must stay within
- * half a turn of it.
+ * of the output space: angles and rotations are averaged around the centre's image, so deviations must stay
+ * within half a turn of it. The mean of rotations is the first step towards the intrinsic one, where
+ * deviations sum to zero ({@link #withMeanPasses} goes on), not the nearest to the mean of matrices or
+ * quaternions: of 350, 0 and 20 degrees about one axis it is 3.333 degrees, and not 3.295. The covariance
+ * is that of differences as seen from the centre's image.
  *
  * <p>Zero variances give points that do not move along them. P_zz is positive semi-definite for every
  * function if {@code UnitPoints.covarianceWeightsPositive()}. The rounding of g itself is multiplied by
@@ -27,7 +30,8 @@ import dev.estimation.core.space.Space;
  *
  * <p>Cost: the evaluations of the rule and one at the centre; about points * m^2 / 2 operations for
  * the covariance, and points * (m + n) for each coordinate that is not zero. <i>Immutable.</i> Source:
- * Sarkka and Svensson 2023, <i>Bayesian Filtering and Smoothing</i>, 2nd ed., chapters 8 and 9.
+ * Sarkka and Svensson 2023, <i>Bayesian Filtering and Smoothing</i>, 2nd ed., chapters 8 and 9; means in
+ * curved spaces: Pennec 2006, <i>Intrinsic statistics on Riemannian manifolds</i> (from memory).
  */
 public final class PointMatching implements MomentMatching {
   /** For functions that are linear in all their inputs: no points, and 1 + wm_0 - wc_0 = 0. */
@@ -35,9 +39,11 @@ public final class PointMatching implements MomentMatching {
       UnitPoints.of(0, 1, 2, new double[0][], new double[0]);
 
   private final PointRule rule;
+  private final int meanPasses;
 
-  private PointMatching(PointRule rule) {
+  private PointMatching(PointRule rule, int meanPasses) {
     this.rule = rule;
+    this.meanPasses = meanPasses;
   }
 
   /**
@@ -46,7 +52,25 @@ public final class PointMatching implements MomentMatching {
    * @param rule the points
    */
   public static PointMatching of(PointRule rule) {
-    return new PointMatching(rule);
+    return new PointMatching(rule, 1);
+  }
+
+  /**
+   * The same with more passes for the mean. In a space that is curved, such as rotations, deviations from
+   * g(m) are not quite deviations from the mean: each further pass takes the mean of the last one as the centre
+   * c and the deviations d_i = g(u_i) - c anew, d_0 = g(m) - c included, and moves to c + sum w_i d_i. Passes
+   * converge to the intrinsic mean, from which deviations sum to zero. Covariances are taken about
+   * the last centre. Of reals and angles nothing changes but rounding, unless angles spread so far that some lie
+   * half a turn from g(m). Cost: no evaluation; a difference an image and pass, and memory for the images.
+   *
+   * @param passes 1 or more; 1 unless set
+   * @return the matching
+   */
+  public PointMatching withMeanPasses(int passes) {
+    if (passes < 1) {
+      throw new IllegalArgumentException("mean passes must be 1 or more, got " + passes);
+    }
+    return new PointMatching(rule, passes);
   }
 
   @Override
@@ -56,12 +80,12 @@ public final class PointMatching implements MomentMatching {
     int nonlinear = structure.nonlinearInputs(input.dimension()).length;
     UnitPoints points = nonlinear == 0 ? CENTRE_ALONE : rule.points(nonlinear);
     if (!points.isSample()) {
-      return new PointWorkspace(input, output, function, points, form);
+      return new PointWorkspace(input, output, function, points, meanPasses, form);
     }
     VectorFunction sampled = new Restructured(function, structure.withLinearInputs());
     UnitPoints draws = rule.points(structure.activeInputs(input.dimension()).length);
     return draws.replicates() > 1
-        ? new ReplicatedWorkspace(input, output, sampled, draws, form)
-        : new SampleWorkspace(input, output, sampled, draws, form);
+        ? new ReplicatedWorkspace(input, output, sampled, draws, meanPasses, form)
+        : new SampleWorkspace(input, output, sampled, draws, meanPasses, form);
   }
 }

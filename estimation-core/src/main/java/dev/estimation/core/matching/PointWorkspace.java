@@ -15,12 +15,19 @@ class PointWorkspace extends BaseWorkspace {
 
   private final PointColumns columns;
   private final LinearColumns linear;
+  private final CentreRefinement refinement;
   private final double[] displacement;
   private final double[] point;
   private final double[] image;
   private final double[] deviation;
 
-  PointWorkspace(Space input, Space output, VectorFunction function, UnitPoints points, Form form) {
+  PointWorkspace(
+      Space input,
+      Space output,
+      VectorFunction function,
+      UnitPoints points,
+      int meanPasses,
+      Form form) {
     super(input, output, function, LinearColumns.inputs(function, input), form);
     this.points = points;
     this.linear = LinearColumns.of(this, function, points);
@@ -30,6 +37,8 @@ class PointWorkspace extends BaseWorkspace {
     this.image = new double[output.storage()];
     this.deviation = new double[output.dimension()];
     this.shift = new double[output.dimension()];
+    this.refinement =
+        meanPasses == 1 ? null : new CentreRefinement(output, points.size(), meanPasses);
   }
 
   @Override
@@ -48,13 +57,20 @@ class PointWorkspace extends BaseWorkspace {
       for (int c = 0, at = i; c < deviation.length; c++, at += stride) {
         data[at] = deviation[c];
       }
+      if (refinement != null) {
+        refinement.keep(i, image);
+      }
       if (!linear.fillPoint(i, point, given, image, data, stride)) {
         return linear.fault();
       }
     }
     columns.fillShift(shift);
+    if (refinement == null) {
+      outputSpace.displace(centre, shift, outputMean);
+    } else {
+      refinement.run(centre, columns, shift, outputMean);
+    }
     columns.centre(shift);
-    outputSpace.displace(centre, shift, outputMean);
     return MatchingStatus.MATCHED;
   }
 

@@ -15,8 +15,13 @@ final class ReplicatedWorkspace extends SampleWorkspace implements SampledWorksp
   private final double[] pointMean;
 
   ReplicatedWorkspace(
-      Space input, Space output, VectorFunction function, UnitPoints points, Form form) {
-    super(input, output, function, points, form);
+      Space input,
+      Space output,
+      VectorFunction function,
+      UnitPoints points,
+      int meanPasses,
+      Form form) {
+    super(input, output, function, points, meanPasses, form);
     this.replicates = points.replicates();
     this.size = points.size() / replicates;
     this.pointMean = new double[points.dimension()];

@@ -11,8 +11,13 @@ class SampleWorkspace extends PointWorkspace {
   private final WeightedColumns left;
 
   SampleWorkspace(
-      Space input, Space output, VectorFunction function, UnitPoints points, Form form) {
-    super(input, output, function, points, form);
+      Space input,
+      Space output,
+      VectorFunction function,
+      UnitPoints points,
+      int meanPasses,
+      Form form) {
+    super(input, output, function, points, meanPasses, form);
     double[] weights = Arrays.copyOf(columns().weights(), columns().count() + active.count());
     Arrays.fill(weights, columns().count(), weights.length, -1);
     this.left = new WeightedColumns(output.dimension(), weights, form);

@@ -71,28 +71,40 @@ public final class FlatSpace implements Space {
 
   @Override
   public void difference(double[] a, double[] b, double[] tangent) {
+    difference(a, b, 0, tangent, 0);
+  }
+
+  @Override
+  public void difference(
+      double[] a, double[] b, int pointStart, double[] tangent, int tangentStart) {
     for (int i = 0; i < angle.length; i++) {
-      tangent[i] = a[i] - b[i];
+      tangent[tangentStart + i] = a[pointStart + i] - b[pointStart + i];
     }
     if (anyAngle) {
-      wrapAngles(tangent);
+      wrapAngles(tangent, tangentStart);
     }
   }
 
   @Override
   public void displace(double[] point, double[] tangent, double[] result) {
+    displace(point, tangent, 0, result, 0);
+  }
+
+  @Override
+  public void displace(
+      double[] point, double[] tangent, int tangentStart, double[] result, int pointStart) {
     for (int i = 0; i < angle.length; i++) {
-      result[i] = point[i] + tangent[i];
+      result[pointStart + i] = point[pointStart + i] + tangent[tangentStart + i];
     }
     if (anyAngle) {
-      wrapAngles(result);
+      wrapAngles(result, pointStart);
     }
   }
 
-  private void wrapAngles(double[] values) {
+  private void wrapAngles(double[] values, int start) {
     for (int i = 0; i < angle.length; i++) {
       if (angle[i]) {
-        values[i] = Angle.wrap(values[i]);
+        values[start + i] = Angle.wrap(values[start + i]);
       }
     }
   }

@@ -7,7 +7,9 @@ import dev.estimation.core.function.Structure;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.gaussian.Form;
+import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.gaussian.Moments;
+import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.PointRule;
 import dev.estimation.core.points.UnscentedRule;
@@ -102,6 +104,23 @@ class MatchingAllocationTest {
   private static int evaluations(MatchingWorkspace work, Runnable call) {
     call.run();
     return work.evaluations();
+  }
+
+  @Test
+  void rotationsInSeveralPassesAllocateNothing() {
+    Space space = Space.unitQuaternion().and(Space.reals(1));
+    Moments input = new Moments(space);
+    input.set(
+        Gaussian.independent(space, new double[] {1, 0, 0, 0, 0}, new double[] {0.4, 0.3, 0.2, 1}));
+    double[] given = new double[0];
+    MatchingWorkspace work = PointMatching.of(CubatureRule.degreeThree())
+        .withMeanPasses(3)
+        .workspace(space, space, (u, none, z) -> System.arraycopy(u, 0, z, 0, 5));
+    assertEquals(0, AllocationMeter.bytesPerCall(1000, 1000, () -> {
+      if (work.carry(input, given, null) != MatchingStatus.MATCHED) {
+        throw new IllegalStateException(work.failure());
+      }
+    }));
   }
 
   /** A failed call allocates nothing either, until its words are asked for. */

@@ -7,4 +7,5 @@ abstract class MomentMatchingContract
         ActiveInputChecks,
         ConductChecks,
         AngleChecks,
+        RotationChecks,
         ConditioningChecks {}

@@ -27,7 +27,7 @@ public final class NormalisedError {
    * The error of some components of a state.
    *
    * @param space where the state lives
-   * @param components distinct indices of the components whose truth is known; copied
+   * @param components distinct indices of the components of a difference whose truth is known; copied
    * @return the measure
    */
   public static NormalisedError of(Space space, int... components) {
@@ -44,25 +44,45 @@ public final class NormalisedError {
   }
 
   /**
-   * The normalised error squared of an estimate.
+   * The normalised error squared of an estimate in a space where a point has a number for each component
+   * of a difference.
    *
    * @param estimate of the whole state
    * @param truth of the chosen components, in their order
    * @return e' P^-1 e; NaN if the covariance of the components is not positive definite
-   * @throws IllegalArgumentException if shapes differ
+   * @throws IllegalArgumentException if shapes differ, or the space has quaternions
    */
   public double squared(Gaussian estimate, double[] truth) {
-    int k = components.length;
-    Checks.length("truth", truth, k);
-    if (estimate.dimension() != space.dimension()) {
+    Checks.length("truth", truth, components.length);
+    if (space.storage() != space.dimension()) {
       throw new IllegalArgumentException(
-          "estimate must have dimension " + space.dimension() + ", got " + estimate.dimension());
+          "truth of single components must be of reals and angles, got" + " the space " + space
+              + "; see squaredFrom");
     }
+    double[] actual = estimate.mean();
+    requireSize(estimate, actual);
+    for (int i = 0; i < components.length; i++) {
+      actual[components[i]] = truth[i];
+    }
+    return squaredFrom(estimate, actual);
+  }
+
+  /**
+   * The normalised error squared of an estimate from a whole point; only the chosen components of their
+   * difference count.
+   *
+   * @param estimate of the whole state
+   * @param point the true state; what of it is not known is taken from the mean of the estimate
+   * @return e' P^-1 e; NaN if the covariance of the components is not positive definite
+   * @throws IllegalArgumentException if shapes differ
+   */
+  public double squaredFrom(Gaussian estimate, double[] point) {
+    Checks.length("point", point, space.storage());
     double[] mean = estimate.mean();
-    double[] actual = mean.clone();
+    requireSize(estimate, mean);
+    int k = components.length;
     DMatrixRMaj covariance = new DMatrixRMaj(k, k);
     for (int i = 0; i < k; i++) {
-      actual[components[i]] = truth[i];
       for (int j = 0; j < k; j++) {
         covariance.set(i, j, estimate.covariance(components[i], components[j]));
       }
@@ -72,7 +92,7 @@ public final class NormalisedError {
       return Double.NaN;
     }
     double[] error = new double[space.dimension()];
-    space.difference(mean, actual, error);
+    space.difference(mean, point, error);
     double[] chosen = new double[k];
     for (int i = 0; i < k; i++) {
       chosen[i] = error[components[i]];
@@ -83,5 +103,13 @@ public final class NormalisedError {
       sum += value * value;
     }
     return sum;
+  }
+
+  private void requireSize(Gaussian estimate, double[] mean) {
+    if (estimate.dimension() != space.dimension() || mean.length != space.storage()) {
+      throw new IllegalArgumentException("estimate must have dimension " + space.dimension()
+          + " and a mean of " + space.storage() + " numbers, got " + estimate.dimension() + " and "
+          + mean.length);
+    }
   }
 }

@@ -22,6 +22,7 @@ public final class Estimate {
     this.time = time;
     this.moments = new Moments(space);
     moments.set(initial);
+    // Angles into their range, quaternions to length 1.
     space.displace(moments.mean(), new double[space.dimension()], moments.changeMean());
   }
 
@@ -31,7 +32,7 @@ public final class Estimate {
   }
 
   /**
-   * {@return the mean of one component}
+   * {@return one number of the mean, a point of the state space}
    *
    * @param index from 0
    */
@@ -40,7 +41,7 @@ public final class Estimate {
   }
 
   /**
-   * {@return the covariance of two components}
+   * {@return the covariance of two components of differences from the mean}
    *
    * @param row from 0
    * @param column from 0
@@ -50,7 +51,7 @@ public final class Estimate {
   }
 
   /**
-   * {@return the standard deviation of one component}
+   * {@return the standard deviation of one component of differences from the mean}
    *
    * @param index from 0
    */

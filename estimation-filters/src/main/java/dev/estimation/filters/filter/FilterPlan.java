@@ -74,12 +74,20 @@ public final class FilterPlan {
   }
 
   /**
-   * {@return the iterated extended Kalman filter: updates are linearised anew until they settle}
+   * The iterated extended Kalman filter: updates are linearised anew until they settle.
    *
    * @param motion how the state moves
    * @param iteration how updates are iterated
+   * @return the plan
+   * @throws IllegalArgumentException if the state has quaternions, whose displacements do not add up as the
+   *     rounds assume
    */
   public static FilterPlan iteratedExtended(Motion motion, IteratedUpdate iteration) {
+    Space space = motion.stateSpace();
+    if (space.storage() != space.dimension()) {
+      throw new IllegalArgumentException("iterated updates want a state of reals and angles, got "
+          + space + " (motion model " + nameOf(motion) + ")");
+    }
     return new FilterPlan(
         motion, extended(motion).matching, Double.NaN, iteration, Form.COVARIANCE);
   }
@@ -147,7 +155,8 @@ public final class FilterPlan {
    * A new track.
    *
    * @param time of the estimate (s), finite
-   * @param initial mean and covariance; angles are brought into [-pi, pi)
+   * @param initial mean and covariance; angles are brought into [-pi, pi). With quaternions: {@code
+   *     Gaussian.of(space, mean, covariance)}
    * @return the estimate of the track
    */
   public Estimate start(double time, Gaussian initial) {

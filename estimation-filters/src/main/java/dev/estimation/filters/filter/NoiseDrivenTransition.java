@@ -5,6 +5,7 @@ import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
+import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.NoiseDrivenMotion;
 import org.ejml.data.DMatrixRMaj;
 
@@ -19,12 +20,12 @@ final class NoiseDrivenTransition extends Transition {
     this(
         model,
         new NoiseDrivenFunction(model),
-        new AppendedReals(model.stateSpace(), model.noiseDimension()),
+        model.stateSpace().and(Space.reals(model.noiseDimension())),
         plan);
   }
 
   private NoiseDrivenTransition(
-      NoiseDrivenMotion model, NoiseDrivenFunction function, AppendedReals space, FilterPlan plan) {
+      NoiseDrivenMotion model, NoiseDrivenFunction function, Space space, FilterPlan plan) {
     super(
         FilterPlan.nameOf(model),
         model.controlDimension(),

@@ -97,7 +97,9 @@ public final class SensorPort {
   }
 
   private StepStatus updateChecked(Estimate estimate, double[] measurement, double[] given) {
-    if (!input.isFinite("measurement", measurement) || !input.isFinite("given", given)) {
+    if (!input.isFinite("measurement", measurement)
+        || !input.isFinite("given", given)
+        || !input.isPoint("measurement", measurement, space)) {
       return StepStatus.INPUT_NOT_FINITE;
     }
     Moments prior = estimate.moments();

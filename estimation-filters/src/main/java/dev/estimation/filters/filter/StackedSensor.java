@@ -1,7 +1,6 @@
 package dev.estimation.filters.filter;
 
 import dev.estimation.core.function.Structure;
-import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.model.SensorModel;
@@ -28,7 +27,7 @@ class StackedSensor implements SensorModel {
     this.space = stacked(sensor.measurementSpace(), rows);
     this.rowState = new double[state.storage()];
     this.rowGiven = new double[givenWidth];
-    this.rowMeasurement = new double[width];
+    this.rowMeasurement = new double[sensor.measurementSpace().storage()];
     this.rowNoise = new double[width * width];
   }
 
@@ -42,13 +41,9 @@ class StackedSensor implements SensorModel {
   }
 
   private static Space stacked(Space row, int rows) {
-    if (!(row instanceof FlatSpace flat)) {
-      throw new IllegalArgumentException(
-          "stacked rows must have a measurement space of reals and angles, got " + row);
-    }
-    FlatSpace all = flat;
+    Space all = row;
     for (int i = 1; i < rows; i++) {
-      all = all.and(flat);
+      all = all.and(row);
     }
     return all;
   }
@@ -65,11 +60,12 @@ class StackedSensor implements SensorModel {
 
   @Override
   public void measure(double[] state, double[] given, double[] measurement) {
+    int length = rowMeasurement.length;
     for (int row = 0; row < rows; row++) {
       // The row arrives filled with the NaN that marks what was left out.
-      System.arraycopy(measurement, row * width, rowMeasurement, 0, width);
+      System.arraycopy(measurement, row * length, rowMeasurement, 0, length);
       sensor.measure(copied(state), givenOf(row, given), rowMeasurement);
-      System.arraycopy(rowMeasurement, 0, measurement, row * width, width);
+      System.arraycopy(rowMeasurement, 0, measurement, row * length, length);
     }
   }
 

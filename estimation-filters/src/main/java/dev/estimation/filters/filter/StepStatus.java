@@ -12,7 +12,10 @@ public enum StepStatus {
   TIME_BEFORE_ESTIMATE,
   /** The time of the step is NaN or infinite. */
   TIME_NOT_FINITE,
-  /** A measurement, a given or a control is NaN or infinite. Usual cause: bad input. */
+  /**
+   * A measurement, a given or a control is NaN or infinite, or a measured quaternion is none. Usual
+   * cause: bad input.
+   */
   INPUT_NOT_FINITE,
   /** The model gave NaN or infinity, or left a component out. Usual cause: a fault in the plug-in. */
   MODEL_NOT_FINITE,

@@ -88,7 +88,7 @@ public final class FixedIntervalSmoother {
    *     not finite
    */
   public SmoothedTrack smooth() {
-    SmoothedTrack track = new SmoothedTrack(steps);
+    SmoothedTrack track = new SmoothedTrack(space, steps);
     BackwardStep backward = new BackwardStep(space);
     for (int k = steps.size() - 2; k >= 0; k--) {
       backward.smooth(track, k, steps.get(k + 1));

@@ -1,6 +1,7 @@
 package dev.estimation.filters.smoother;
 
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.space.Space;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 
@@ -9,11 +10,13 @@ import org.ejml.data.DMatrixRMaj;
  * to be read by any thread.
  */
 public final class SmoothedTrack {
+  private final Space space;
   private final double[] times;
   private final double[][] means;
   private final DMatrixRMaj[] covariances;
 
-  SmoothedTrack(List<RecordedStep> steps) {
+  SmoothedTrack(Space space, List<RecordedStep> steps) {
+    this.space = space;
     int count = steps.size();
     this.times = new double[count];
     this.means = new double[count][];
@@ -41,7 +44,7 @@ public final class SmoothedTrack {
   }
 
   /**
-   * {@return the smoothed mean of one component}
+   * {@return one number of the smoothed mean, a point of the state space}
    *
    * @param step from 0
    * @param index from 0
@@ -51,7 +54,7 @@ public final class SmoothedTrack {
   }
 
   /**
-   * {@return the smoothed covariance of two components}
+   * {@return the smoothed covariance of two components of differences from the mean}
    *
    * @param step from 0
    * @param row from 0
@@ -68,7 +71,7 @@ public final class SmoothedTrack {
    * @throws IllegalArgumentException if rounding has made its covariance indefinite
    */
   public Gaussian gaussian(int step) {
-    return Gaussian.of(means[step], covariances[step]);
+    return Gaussian.of(space, means[step], covariances[step]);
   }
 
   double[] meanArray(int step) {

@@ -6,6 +6,7 @@ import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
+import dev.estimation.filters.testing.Attitude;
 import dev.estimation.filters.testing.ChainMotion;
 import dev.estimation.filters.testing.ChainSight;
 import dev.estimation.filters.testing.Matchings;
@@ -61,6 +62,31 @@ class VariantsAllocationTest {
         0,
         AllocationMeter.bytesPerCall(
             100, 100, () -> require(work.predict(estimate, estimate.time() + 0.001, speed))));
+  }
+
+  @ParameterizedTest
+  @MethodSource("matchings")
+  void quaternions(MomentMatching matching) {
+    double[] state = {0.5, -0.5, 0.5, 0.5, 0.01, -0.02, 0.03};
+    FilterPlan plan = FilterPlan.of(new Attitude.Gyroscopes(0.01, 0.001), matching);
+    FilterWorkspace work = plan.workspace();
+    SensorPort direction = work.port(new Attitude.Direction(0.1));
+    SensorPort camera = work.port(new Attitude.Camera(0.1));
+    StackedPort cameras = work.port(new Attitude.Camera(0.1), 2);
+    Estimate estimate = plan.start(
+        0, Gaussian.independent(Attitude.SPACE, state, new double[] {1, 1, 1, 0.1, 0.1, 0.1}));
+    double[] rates = new double[3];
+    double[] up = {0, 0, 1};
+    double[] seen = {0.6, 0, 0.8};
+    double[] attitude = {0.8, 0.6, 0, 0};
+    double[] attitudes = {0.8, 0.6, 0, 0, 1, 0, 0, 0};
+    double[] nothing = new double[0];
+    assertEquals(0, AllocationMeter.bytesPerCall(100, 100, () -> {
+      require(work.predict(estimate, estimate.time() + 0.1, rates));
+      require(direction.update(estimate, seen, up));
+      require(camera.update(estimate, attitude));
+      require(cameras.update(estimate, 2, attitudes, nothing));
+    }));
   }
 
   @Test

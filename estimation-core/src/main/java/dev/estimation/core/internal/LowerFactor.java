@@ -1,6 +1,5 @@
 package dev.estimation.core.internal;
 
-import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.decomposition.TriangularSolver_DDRM;
 
@@ -21,14 +20,10 @@ public final class LowerFactor {
   private static final double LARGEST_ROUNDING = 1e-6;
 
   private final int size;
-  private final int[] order;
   private final DMatrixRMaj columns;
   private final double[] inverse;
   private final double[] growth;
-  private final int[] start;
   private final double[] least;
-  private final int[] from;
-  private final int[] to;
   private int growthKnown;
   private int failedPivot = -1;
   private double failedValue;
@@ -39,38 +34,11 @@ public final class LowerFactor {
    * @param size rows and columns
    */
   public LowerFactor(int size) {
-    this(naturalOrder(size));
-  }
-
-  /**
-   * Factors of matrices whose rows and columns are taken in another order: L with P = L L', rows in
-   * natural order; L[order, :] is lower triangular. The first k columns carry P[:, order[0..k)].
-   *
-   * @param order a permutation of 0..n-1, copied
-   */
-  public LowerFactor(int[] order) {
-    this.size = order.length;
-    this.order = order.clone();
+    this.size = size;
     this.columns = new DMatrixRMaj(size, size);
     this.inverse = new double[size];
     this.growth = new double[size];
-    this.start = Arrays.stream(order).map(row -> row * size).toArray();
     this.least = new double[size];
-    this.from = new int[size * (size + 1) / 2];
-    this.to = new int[from.length];
-    for (int q = 0, i = 0; q < size; q++) {
-      for (int c = 0; c <= q; c++, i++) {
-        int row = Math.max(order[q], order[c]);
-        from[i] = row * size + Math.min(order[q], order[c]);
-        to[i] = start[q] + c;
-      }
-    }
-  }
-
-  private static int[] naturalOrder(int size) {
-    int[] order = new int[size];
-    Arrays.setAll(order, i -> i);
-    return order;
   }
 
   /** {@return the factor; a failed attempt leaves it in part} */
@@ -79,7 +47,7 @@ public final class LowerFactor {
   }
 
   /**
-   * Factors a positive definite matrix, reading its lower triangle in natural order. A pivot not
+   * Factors a positive definite matrix, reading its lower triangle. A pivot not
    * above {@code n eps} times its diagonal entry fails; NaN and infinity fail.
    *
    * @param matrix n x n, read
@@ -103,13 +71,15 @@ public final class LowerFactor {
   /** Plainly if every pivot is large, else with a close look at each. */
   private boolean factor(DMatrixRMaj matrix, boolean definite) {
     double[] p = matrix.data;
-    for (int i = 0; i < from.length; i++) {
-      columns.data[to[i]] = p[from[i]];
+    double[] l = columns.data;
+    for (int q = 0, row = 0; q < size; q++, row += size) {
+      int diagonal = row + q;
+      for (int i = row; i <= diagonal; i++) {
+        l[i] = p[i];
+      }
+      least[q] = NEARLY_ZERO * p[diagonal];
     }
-    for (int q = 0; q < size; q++) {
-      least[q] = NEARLY_ZERO * p[order[q] * (size + 1)];
-    }
-    if (PlainCholesky.factor(columns.data, start, least)) {
+    if (PlainCholesky.factor(l, size, least)) {
       failedPivot = -1;
       return true;
     }
@@ -122,15 +92,14 @@ public final class LowerFactor {
     int n = size;
     growthKnown = 0;
     for (int q = 0; q < n; q++) {
-      int row = order[q];
       for (int c = 0; c < q; c++) {
-        double rest = lower(p, row, order[c]) - dot(b, row * n, order[c] * n, c);
-        if (inverse[c] == 0 && !vanishes(rest, p, row, c)) {
+        double rest = p[q * n + c] - dot(b, q * n, c * n, c);
+        if (inverse[c] == 0 && !vanishes(rest, p, q, c)) {
           return fail(c, 0);
         }
-        b[row * n + c] = rest * inverse[c];
+        b[q * n + c] = rest * inverse[c];
       }
-      double pivot = p[row * (n + 1)] - dot(b, row * n, row * n, q);
+      double pivot = p[q * (n + 1)] - dot(b, q * n, q * n, q);
       if (!setPivot(pivot, p, q, definite)) {
         return fail(q, pivot);
       }
@@ -141,24 +110,22 @@ public final class LowerFactor {
 
   /** Sets the diagonal entry; false if the pivot is not allowed. */
   private boolean setPivot(double pivot, double[] p, int q, boolean definite) {
-    int row = order[q];
-    double variance = p[row * (size + 1)];
+    double variance = p[q * (size + 1)];
     double root = pivot > NEARLY_ZERO * variance && pivot <= Double.MAX_VALUE
         ? Math.sqrt(pivot)
         : smallRoot(pivot, p, q, definite);
     if (!(root >= 0)) {
       return false;
     }
-    double[] b = columns.data;
-    b[row * size + q] = root;
+    columns.data[q * (size + 1)] = root;
     inverse[q] = root == 0 ? 0 : 1 / root;
     return true;
   }
 
   /** The root of a pivot that is small or worse: zero for a zero variance, NaN if it is not allowed. */
   private double smallRoot(double pivot, double[] p, int q, boolean definite) {
-    double variance = p[order[q] * (size + 1)];
-    double bound = definite ? variance : bound(p, order[q], q);
+    double variance = p[q * (size + 1)];
+    double bound = definite ? variance : bound(p, q, q);
     double threshold = Math.min(size * EPSILON * bound, LARGEST_ROUNDING * variance);
     if (!(pivot >= -threshold && pivot <= Double.MAX_VALUE && bound <= Double.MAX_VALUE)) {
       return Double.NaN;
@@ -169,12 +136,8 @@ public final class LowerFactor {
     return definite ? Double.NaN : 0;
   }
 
-  private double lower(double[] p, int row, int column) {
-    return p[row >= column ? row * size + column : column * size + row];
-  }
-
   private boolean vanishes(double rest, double[] p, int row, int c) {
-    double unit = size * EPSILON * Math.sqrt(bound(p, order[c], c));
+    double unit = size * EPSILON * Math.sqrt(bound(p, c, c));
     return Math.abs(rest) <= unit * Math.sqrt(bound(p, row, c));
   }
 
@@ -185,9 +148,8 @@ public final class LowerFactor {
    */
   private double bound(double[] p, int row, int c) {
     for (; growthKnown < c; growthKnown++) {
-      int earlier = order[growthKnown];
       double scale = inverse[growthKnown];
-      growth[growthKnown] = sum(p, earlier, growthKnown) * scale * scale;
+      growth[growthKnown] = sum(p, growthKnown, growthKnown) * scale * scale;
     }
     return sum(p, row, c);
   }
@@ -234,15 +196,14 @@ public final class LowerFactor {
   }
 
   /**
-   * Takes what was filled into {@link #columns()}, a lower triangular matrix in this object's order, for the
-   * factor.
+   * Takes what was filled into {@link #columns()} for the factor.
    *
    * @return whether every diagonal entry is finite and 0 or more
    */
   public boolean accept() {
     failedPivot = -1;
     for (int q = 0; q < size; q++) {
-      double root = columns.data[order[q] * size + q];
+      double root = columns.data[q * (size + 1)];
       if (!(root >= 0 && root <= Double.MAX_VALUE)) {
         return fail(q, root);
       }
@@ -253,7 +214,7 @@ public final class LowerFactor {
   /** {@return whether no pivot of the factor is zero, or as small as the rounding of its row} */
   public boolean isDefinite() {
     for (int q = 0; q < size; q++) {
-      int row = order[q] * size;
+      int row = q * size;
       double scale = 0;
       for (int c = 0; c <= q; c++) {
         scale += Math.abs(columns.data[row + c]);
@@ -266,7 +227,7 @@ public final class LowerFactor {
   }
 
   /**
-   * Copies the factor of another of the same size and order.
+   * Copies the factor of another of the same size.
    *
    * @param other copied from
    */

@@ -11,35 +11,34 @@ final class PlainCholesky {
   /**
    * Factors in place.
    *
-   * @param l the matrix on and below the diagonal, updated; in part if the result is false
-   * @param start where each row begins
+   * @param l n x n, the matrix on and below the diagonal, updated; in part if the result is false
+   * @param n rows
    * @param least for each row, what its pivot must exceed
    * @return false if a pivot does not, or is not finite
    */
-  static boolean factor(double[] l, int[] start, double[] least) {
-    int n = start.length;
+  static boolean factor(double[] l, int n, double[] least) {
     int j = 0;
     for (; j + 2 < n; j += 3) {
-      if (!factorThree(l, start, least, j)) {
+      if (!factorThree(l, n, least, j)) {
         return false;
       }
     }
-    return j == n || (j + 1 == n ? factorOne(l, start, least, j) : factorTwo(l, start, least, j));
+    return j == n || (j + 1 == n ? factorOne(l, n, least, j) : factorTwo(l, n, least, j));
   }
 
   private static boolean isLarge(double pivot, double least) {
     return pivot > least && pivot <= Double.MAX_VALUE;
   }
 
-  private static boolean factorOne(double[] l, int[] start, double[] least, int j) {
-    double pivot = l[start[j] + j];
-    l[start[j] + j] = Math.sqrt(pivot);
+  private static boolean factorOne(double[] l, int n, double[] least, int j) {
+    double pivot = l[j * n + j];
+    l[j * n + j] = Math.sqrt(pivot);
     return isLarge(pivot, least[j]);
   }
 
-  private static boolean factorTwo(double[] l, int[] start, double[] least, int j) {
-    int first = start[j] + j;
-    int second = start[j + 1] + j;
+  private static boolean factorTwo(double[] l, int n, double[] least, int j) {
+    int first = j * n + j;
+    int second = first + n;
     double pivot = l[first];
     double root = Math.sqrt(pivot);
     double below = l[second] * (root * (1 / pivot));
@@ -51,10 +50,10 @@ final class PlainCholesky {
   }
 
   /** Three columns, and what they take from those to the right. Reciprocals do not wait for roots. */
-  private static boolean factorThree(double[] l, int[] start, double[] least, int j) {
-    int first = start[j] + j;
-    int second = start[j + 1] + j;
-    int third = start[j + 2] + j;
+  private static boolean factorThree(double[] l, int n, double[] least, int j) {
+    int first = j * n + j;
+    int second = first + n;
+    int third = second + n;
     double pivot0 = l[first];
     double root0 = Math.sqrt(pivot0);
     double inverse0 = root0 * (1 / pivot0);
@@ -78,8 +77,8 @@ final class PlainCholesky {
     l[third + 1] = l21;
     l[third + 2] = root2;
     double inverse2 = root2 * (1 / pivot2);
-    for (int r = j + 3; r < start.length; r++) {
-      int row = start[r] + j;
+    for (int r = j + 3; r < n; r++) {
+      int row = r * n + j;
       double x0 = l[row] * inverse0;
       double x1 = (l[row + 1] - x0 * l10) * inverse1;
       double x2 = (l[row + 2] - x0 * l20 - x1 * l21) * inverse2;
@@ -87,8 +86,8 @@ final class PlainCholesky {
       l[row + 1] = x1;
       l[row + 2] = x2;
       for (int c = j + 3; c <= r; c++) {
-        int other = start[c] + j;
-        l[start[r] + c] -= x0 * l[other] + x1 * l[other + 1] + x2 * l[other + 2];
+        int other = c * n + j;
+        l[r * n + c] -= x0 * l[other] + x1 * l[other + 1] + x2 * l[other + 2];
       }
     }
     return true;

@@ -7,6 +7,7 @@ import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.space.Space;
+import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -42,7 +43,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     this.outputSpace = outputSpace;
     this.form = form;
     int m = outputSpace.dimension();
-    this.active = new ActiveFactor(inputs, inputSpace.dimension(), form);
+    this.active = new ActiveFactor(inputs, inputSpace.dimension());
     this.function = new GuardedFunction(function);
     this.cross = new DMatrixRMaj(active.count(), m);
     this.centre = new double[outputSpace.storage()];
@@ -82,6 +83,11 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     }
     if (!function.evaluate(copied(mean), given, centre)) {
       return MatchingStatus.FUNCTION_NOT_FINITE;
+    }
+    if (!Arrays.equals(handed, mean)) {
+      failedIndex = Arrays.mismatch(handed, mean);
+      failedValue = handed[failedIndex];
+      return MatchingStatus.FUNCTION_CHANGED_INPUT;
     }
     MatchingStatus matched = match(mean, given, output.changeMean());
     if (matched != MatchingStatus.MATCHED) {
@@ -219,6 +225,9 @@ abstract class BaseWorkspace implements MatchingWorkspace {
       case NOISE_NOT_DEFINITE -> "additive noise is not positive semi-definite";
       case INPUT_NOT_DEFINITE -> "covariance is not positive semi-definite: " + active.failure();
       case FUNCTION_NOT_FINITE -> function.failure();
+      case FUNCTION_CHANGED_INPUT ->
+        "the function must only read its input, wrote " + failedValue + " on input[" + failedIndex
+            + "]";
       case JACOBIAN_NOT_FINITE -> jacobianFailure();
       case OUTPUT_NOT_FINITE ->
         "moments of the output are not finite: the deviations overflow, or the function has left "

@@ -20,6 +20,8 @@ public enum MatchingStatus {
    * domain (try a smaller spread), too few outputs filled.
    */
   FUNCTION_NOT_FINITE,
+  /** The function wrote on its input; found out at the mean. Usual cause: a fault in the plug-in. */
+  FUNCTION_CHANGED_INPUT,
   /** The Jacobian or the Hessian has NaN or infinity. Usual causes: a singular point such as zero range. */
   JACOBIAN_NOT_FINITE,
   /** The moments of the output overflow. Usual cause: a variance far outside the model's units. */

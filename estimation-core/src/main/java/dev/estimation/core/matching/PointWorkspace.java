@@ -50,7 +50,7 @@ class PointWorkspace extends BaseWorkspace {
     }
     for (int i = 0; i < points.size(); i++) {
       place(i, mean);
-      if (!function.evaluate(copied(point), given, image)) {
+      if (!function.evaluate(linear.count() == 0 ? point : copied(point), given, image)) {
         return MatchingStatus.FUNCTION_NOT_FINITE;
       }
       outputSpace.difference(image, centre, deviation);

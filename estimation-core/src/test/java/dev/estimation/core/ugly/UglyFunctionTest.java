@@ -93,7 +93,9 @@ class UglyFunctionTest {
     Moments input = UglyFixture.good();
     double[] mean = input.mean().clone();
     DMatrixRMaj covariance = input.covariance().copy();
-    fixture.carry(input, BadFunctions.WRITES_INPUT);
+    assertEquals(
+        MatchingStatus.FUNCTION_CHANGED_INPUT, fixture.carry(input, BadFunctions.WRITES_INPUT));
+    assertNames(fixture.work.failure(), "input[");
     assertSameBits("mean", mean, input.mean());
     assertSameBits("covariance", covariance, input.covariance());
     fixture.assertUsable();

@@ -19,6 +19,8 @@ public enum StepStatus {
   INPUT_NOT_FINITE,
   /** The model gave NaN or infinity, or left a component out. Usual cause: a fault in the plug-in. */
   MODEL_NOT_FINITE,
+  /** The model wrote on the state that it is given to read. Usual cause: a fault in the plug-in. */
+  MODEL_CHANGED_INPUT,
   /** Process or measurement noise is not a covariance. Usual cause: a fault in the plug-in. */
   NOISE_NOT_VALID,
   /**
@@ -38,6 +40,7 @@ public enum StepStatus {
     return switch (matched) {
       case MATCHED -> APPLIED;
       case FUNCTION_NOT_FINITE, JACOBIAN_NOT_FINITE -> MODEL_NOT_FINITE;
+      case FUNCTION_CHANGED_INPUT -> MODEL_CHANGED_INPUT;
       case INPUT_NOT_DEFINITE, OUTPUT_NOT_DEFINITE -> NOT_DEFINITE;
       case NOISE_NOT_FINITE, NOISE_NOT_DEFINITE -> NOISE_NOT_VALID;
       case INPUT_NOT_FINITE, OUTPUT_NOT_FINITE -> RESULT_NOT_FINITE;

@@ -2,6 +2,7 @@ package dev.estimation.filters.ugly;
 
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
@@ -21,7 +22,7 @@ import org.junit.jupiter.api.Named;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
-/** Models that write on the state they are given, against their contract, and then fail. */
+/** Models that write on the state they are given, against their contract, and fail or not. */
 class TrespassingModelTest {
   private static final Gaussian START =
       Gaussian.of(new double[] {1, 2}, new double[][] {{1, 0.2}, {0.2, 2}});
@@ -50,6 +51,42 @@ class TrespassingModelTest {
     long[] before = Bits.of(estimate, 2);
     assertEquals(StepStatus.MODEL_NOT_FINITE, port.update(estimate, new double[] {1}));
     assertArrayEquals(before, Bits.of(estimate, 2));
+  }
+
+  @ParameterizedTest
+  @MethodSource("matchings")
+  void isToldWhereNothingElseIsWrong(MomentMatching matching) {
+    FilterPlan plan = FilterPlan.of(new Scribbler(), matching);
+    SensorPort port = plan.workspace().port(new Smudger());
+    Estimate estimate = plan.start(0, START);
+    long[] before = Bits.of(estimate, 2);
+    assertEquals(StepStatus.MODEL_CHANGED_INPUT, port.update(estimate, new double[] {1}));
+    assertTrue(port.failure().contains("input[1]") && port.failure().contains("Smudger"));
+    assertArrayEquals(before, Bits.of(estimate, 2));
+  }
+
+  /** Writes on one component after it has read it. */
+  private static final class Smudger implements DifferentiableSensor {
+    @Override
+    public Space measurementSpace() {
+      return Space.reals(1);
+    }
+
+    @Override
+    public void measure(double[] state, double[] given, double[] measurement) {
+      measurement[0] = state[0];
+      state[1] = 0;
+    }
+
+    @Override
+    public void measureJacobian(double[] state, double[] given, double[] jacobian) {
+      jacobian[0] = 1;
+    }
+
+    @Override
+    public void measurementNoise(double[] state, double[] given, double[] covariance) {
+      covariance[0] = 1;
+    }
   }
 
   /** Writes on the state everywhere; its motion is NaN. */

@@ -49,28 +49,18 @@ public final class Checks {
 
   /**
    * Whether the first elements are finite. A finite number times zero is zero, any other is NaN: sums
-   * of these need no branch, and four of them at once no waiting.
+   * of these need no branch.
    *
    * @param values checked
    * @param count how many
    * @return whether all are finite
    */
   public static boolean allFinite(double[] values, int count) {
-    double a = 0;
-    double b = 0;
-    double c = 0;
-    double d = 0;
-    int i = 0;
-    for (; i + 3 < count; i += 4) {
-      a += values[i] * 0;
-      b += values[i + 1] * 0;
-      c += values[i + 2] * 0;
-      d += values[i + 3] * 0;
+    double zero = 0;
+    for (int i = 0; i < count; i++) {
+      zero += values[i] * 0;
     }
-    for (; i < count; i++) {
-      a += values[i] * 0;
-    }
-    return (a + b) + (c + d) == 0;
+    return zero == 0;
   }
 
   /**

@@ -24,6 +24,7 @@ public final class LowerFactor {
   private final double[] inverse;
   private final double[] growth;
   private final double[] least;
+  private final int[] lowerIndices;
   private int growthKnown;
   private int failedPivot = -1;
   private double failedValue;
@@ -39,6 +40,7 @@ public final class LowerFactor {
     this.inverse = new double[size];
     this.growth = new double[size];
     this.least = new double[size];
+    this.lowerIndices = SymmetricMatrix.lowerIndices(size);
   }
 
   /** {@return the factor; a failed attempt leaves it in part} */
@@ -72,12 +74,11 @@ public final class LowerFactor {
   private boolean factor(DMatrixRMaj matrix, boolean definite) {
     double[] p = matrix.data;
     double[] l = columns.data;
-    for (int q = 0, row = 0; q < size; q++, row += size) {
-      int diagonal = row + q;
-      for (int i = row; i <= diagonal; i++) {
-        l[i] = p[i];
-      }
-      least[q] = NEARLY_ZERO * p[diagonal];
+    for (int at : lowerIndices) {
+      l[at] = p[at];
+    }
+    for (int q = 0; q < size; q++) {
+      least[q] = NEARLY_ZERO * p[q * (size + 1)];
     }
     if (PlainCholesky.factor(l, size, least)) {
       failedPivot = -1;

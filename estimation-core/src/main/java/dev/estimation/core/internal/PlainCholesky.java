@@ -49,22 +49,27 @@ final class PlainCholesky {
     return isLarge(pivot, least[j]) && isLarge(next, least[j + 1]);
   }
 
-  /** Three columns, and what they take from those to the right. Reciprocals do not wait for roots. */
+  /** Three columns, and what they take from those to the right. Nothing but the results waits for roots. */
   private static boolean factorThree(double[] l, int n, double[] least, int j) {
     int first = j * n + j;
     int second = first + n;
     int third = second + n;
     double pivot0 = l[first];
+    double reciprocal0 = 1 / pivot0;
+    double a10 = l[second];
+    double a20 = l[third];
+    double pivot1 = l[second + 1] - a10 * a10 * reciprocal0;
+    double reciprocal1 = 1 / pivot1;
+    double a21 = l[third + 1] - a20 * a10 * reciprocal0;
+    double pivot2 = l[third + 2] - a20 * a20 * reciprocal0 - a21 * a21 * reciprocal1;
     double root0 = Math.sqrt(pivot0);
-    double inverse0 = root0 * (1 / pivot0);
-    double l10 = l[second] * inverse0;
-    double l20 = l[third] * inverse0;
-    double pivot1 = l[second + 1] - l10 * l10;
     double root1 = Math.sqrt(pivot1);
-    double inverse1 = root1 * (1 / pivot1);
-    double l21 = (l[third + 1] - l20 * l10) * inverse1;
-    double pivot2 = l[third + 2] - l20 * l20 - l21 * l21;
     double root2 = Math.sqrt(pivot2);
+    double inverse0 = root0 * reciprocal0;
+    double inverse1 = root1 * reciprocal1;
+    double l10 = a10 * inverse0;
+    double l20 = a20 * inverse0;
+    double l21 = a21 * inverse1;
     if (!(isLarge(pivot0, least[j])
         && isLarge(pivot1, least[j + 1])
         && isLarge(pivot2, least[j + 2]))) {

@@ -28,6 +28,21 @@ public final class SymmetricMatrix {
   }
 
   /**
+   * {@return the row-major indices of the entries on and below the diagonal, row by row}
+   *
+   * @param n rows
+   */
+  public static int[] lowerIndices(int n) {
+    int[] indices = new int[n * (n + 1) / 2];
+    for (int row = 0, at = 0; row < n; row++) {
+      for (int column = 0; column <= row; column++) {
+        indices[at++] = row * n + column;
+      }
+    }
+    return indices;
+  }
+
+  /**
    * {@return whether every entry is finite}
    *
    * @param matrix checked

@@ -25,10 +25,9 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   int jacobians;
   private final DMatrixRMaj cross;
   private final Moments output;
-  private final Covariance noise;
+  private Covariance noise;
   private final Covariance unexplained;
   private final double[] handed;
-  private boolean noisy;
   private boolean outputKnown = true;
   private boolean crossKnown;
   private boolean unexplainedKnown;
@@ -49,7 +48,6 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     this.centre = new double[outputSpace.storage()];
     this.output = new Moments(outputSpace);
     this.handed = new double[inputSpace.storage()];
-    this.noise = new Covariance(m);
     this.unexplained = new Covariance(m);
   }
 
@@ -74,8 +72,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
       failedValue = mean[failedIndex];
       return MatchingStatus.INPUT_NOT_FINITE;
     }
-    noisy = additiveNoise != null;
-    if (noisy && form == Form.SQUARE_ROOT && !additiveNoise.factor()) {
+    if (additiveNoise != null && form == Form.SQUARE_ROOT && !additiveNoise.factor()) {
       return faultOf(additiveNoise, MatchingStatus.NOISE_NOT_DEFINITE);
     }
     if (!active.factor(input)) {
@@ -93,22 +90,20 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     if (matched != MatchingStatus.MATCHED) {
       return matched;
     }
-    if (noisy) {
-      noise.set(additiveNoise);
-    }
+    noise = additiveNoise;
     outputKnown = false;
     MatchingStatus ended = use == Use.PREDICTION ? fillCovariance() : MatchingStatus.MATCHED;
     if (Checks.allFinite(output.mean()) && ended != MatchingStatus.OUTPUT_NOT_FINITE) {
       return ended;
     }
-    return noisy
+    return additiveNoise != null
         ? faultOf(additiveNoise, MatchingStatus.OUTPUT_NOT_FINITE)
         : MatchingStatus.OUTPUT_NOT_FINITE;
   }
 
   private MatchingStatus fillCovariance() {
     outputKnown = true;
-    return columns().fill(noisy ? noise : null, output.factoredCovariance());
+    return columns().fill(noise, output.factoredCovariance());
   }
 
   /** The noise that is not finite, or another fault. */
@@ -183,8 +178,8 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   }
 
   @Override
-  public final boolean isInputFactorLower() {
-    return active.isNatural();
+  public final int[] inputOrder() {
+    return active.order();
   }
 
   /** Made when asked for: a filter's prediction does without it. */
@@ -200,7 +195,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   @Override
   public Covariance unexplained() {
     if (!unexplainedKnown) {
-      residuals().fill(noisy ? noise : null, unexplained);
+      residuals().fill(noise, unexplained);
       unexplainedKnown = true;
     }
     return unexplained;

@@ -107,10 +107,7 @@ final class LinearColumns {
     Arrays.fill(derivatives, 0);
     jacobian.evaluate(owner.copied(point), given, derivatives);
     owner.jacobians++;
-    double zero = 0;
-    for (int c = 0; c < deviation.length; c++) {
-      zero += root.fillRow(derivatives, c * displacement.length, data, c * stride + first);
-    }
+    double zero = root.fill(derivatives, deviation.length, data, first, stride);
     jacobianFault = zero != 0;
     return !jacobianFault;
   }

@@ -50,13 +50,8 @@ final class LinearWorkspace extends TaylorWorkspace {
 
   /** G B, over active inputs. Zero, or NaN if G has something that is not finite. */
   private double fillSlopes() {
-    int n = inputSpace.dimension();
-    double zero = 0;
     root.take();
-    for (int r = 0; r < outputSpace.dimension(); r++) {
-      zero += root.fillRow(derivatives, r * n, slopesAndBends(), r * width());
-    }
-    return zero;
+    return root.fill(derivatives, outputSpace.dimension(), slopesAndBends(), 0, width());
   }
 
   /** M_i = B' H_i B over active inputs, column by column of H_i B. */

@@ -19,7 +19,8 @@ public interface MatchingWorkspace {
    *
    * @param input read; its lower factor is made if it has none
    * @param given read and handed to the function
-   * @param additiveNoise covariance added to the output's, m x m, read; or null
+   * @param additiveNoise covariance added to the output's, m x m, kept until the next call and not to be
+   *     changed before; or null
    * @param use what the result is for
    * @return {@link MatchingStatus#MATCHED} if the results below are valid; otherwise they are not, and
    *     {@link #failure()} says what was wrong
@@ -32,7 +33,7 @@ public interface MatchingWorkspace {
    *
    * @param input read
    * @param given read and handed to the function
-   * @param additiveNoise read; or null
+   * @param additiveNoise kept until the next call; or null
    * @return how it ended
    */
   default MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise) {
@@ -62,8 +63,8 @@ public interface MatchingWorkspace {
    */
   DMatrixRMaj inputFactor();
 
-  /** {@return whether that factor is lower triangular: the active inputs are the first, in order} */
-  boolean isInputFactorLower();
+  /** {@return the inputs, active ones first: with its rows in this order, that factor is lower triangular} */
+  int[] inputOrder();
 
   /** {@return W, k x m, with P_uz = B W; read only, valid until the next call} */
   DMatrixRMaj unitCrossCovariance();

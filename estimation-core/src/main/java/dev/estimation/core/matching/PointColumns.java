@@ -25,6 +25,9 @@ final class PointColumns {
   private final double[] weights;
   private final WeightedColumns total;
   private final WeightedColumns left;
+  private final int[] axes;
+  private final double[] coordinates;
+  private final double[] weightedCoordinates;
   private final int rows;
   private final int deltaColumn;
   private final int linearColumn;
@@ -50,8 +53,26 @@ final class PointColumns {
     Arrays.fill(weights, size, first, deltaWeight);
     Arrays.fill(weights, first, linearColumn, 1 / (replicates * (replicates - 1.0)));
     System.arraycopy(linearWeights, 0, weights, linearColumn, linearWeights.length);
+    int onAxes = pointsOnAxes(points);
+    this.axes = new int[onAxes];
+    this.coordinates = new double[onAxes];
+    this.weightedCoordinates = new double[onAxes];
+    for (int i = 0; i < onAxes; i++) {
+      axes[i] = points.axis(points.start(i));
+      coordinates[i] = points.coordinate(points.start(i));
+      weightedCoordinates[i] = weights[i] * coordinates[i];
+    }
     this.total = new WeightedColumns(rows, weights, form);
     this.left = new WeightedColumns(rows, weights, form);
+  }
+
+  /** How many of the first points lie on axes: all of them in many rules. */
+  private static int pointsOnAxes(UnitPoints points) {
+    int count = 0;
+    while (count < points.size() && points.start(count + 1) - points.start(count) == 1) {
+      count++;
+    }
+    return count;
   }
 
   WeightedColumns total() {
@@ -97,13 +118,16 @@ final class PointColumns {
     double[] data = total.data();
     int stride = weights.length;
     Arrays.fill(w, 0);
-    for (int i = 0; i < meanWeights.length; i++) {
-      int end = points.start(i + 1);
-      for (int entry = points.start(i); entry < end; entry++) {
-        double factor = weights[i] * points.coordinate(entry);
-        int row = points.axis(entry) * rows;
-        for (int c = 0, at = i; c < rows; c++, at += stride) {
-          w[row + c] += factor * data[at];
+    for (int c = 0; c < rows; c++) {
+      int at = c * stride;
+      for (int i = 0; i < axes.length; i++) {
+        w[axes[i] * rows + c] += weightedCoordinates[i] * data[at + i];
+      }
+      for (int i = axes.length; i < meanWeights.length; i++) {
+        double weighted = weights[i] * data[at + i];
+        int end = points.start(i + 1);
+        for (int entry = points.start(i); entry < end; entry++) {
+          w[points.axis(entry) * rows + c] += weighted * points.coordinate(entry);
         }
       }
     }
@@ -117,23 +141,30 @@ final class PointColumns {
    * @param linearInputs how many of the k, the last
    */
   WeightedColumns residuals(double[] w, int linearInputs) {
+    double[] data = total.data();
     double[] rest = left.data();
-    System.arraycopy(total.data(), 0, rest, 0, rest.length);
     int stride = weights.length;
-    for (int i = 0; i < meanWeights.length; i++) {
-      int end = points.start(i + 1);
-      for (int entry = points.start(i); entry < end; entry++) {
-        double coordinate = points.coordinate(entry);
-        int row = points.axis(entry) * rows;
-        for (int c = 0, at = i; c < rows; c++, at += stride) {
-          rest[at] -= coordinate * w[row + c];
+    for (int c = 0; c < rows; c++) {
+      int at = c * stride;
+      for (int i = 0; i < axes.length; i++) {
+        rest[at + i] = data[at + i] - coordinates[i] * w[axes[i] * rows + c];
+      }
+      for (int i = axes.length; i < meanWeights.length; i++) {
+        double sum = data[at + i];
+        int end = points.start(i + 1);
+        for (int entry = points.start(i); entry < end; entry++) {
+          sum -= points.coordinate(entry) * w[points.axis(entry) * rows + c];
         }
+        rest[at + i] = sum;
+      }
+      for (int i = meanWeights.length; i < linearColumn; i++) {
+        rest[at + i] = data[at + i];
       }
     }
     for (int i = linearColumn; i < stride; i++) {
       int row = (points.dimension() + (i - linearColumn) % linearInputs) * rows;
       for (int c = 0, at = i; c < rows; c++, at += stride) {
-        rest[at] -= w[row + c];
+        rest[at] = data[at] - w[row + c];
       }
     }
     return left;

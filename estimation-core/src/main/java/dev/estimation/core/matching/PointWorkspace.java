@@ -16,8 +16,8 @@ class PointWorkspace extends BaseWorkspace {
   private final PointColumns columns;
   private final LinearColumns linear;
   private final CentreRefinement refinement;
-  private final double[] displacement;
-  private final double[] point;
+  private final PointPlacement placement;
+  private final boolean flat;
   private final double[] image;
   private final double[] deviation;
 
@@ -32,8 +32,8 @@ class PointWorkspace extends BaseWorkspace {
     this.points = points;
     this.linear = LinearColumns.of(this, function, points);
     this.columns = new PointColumns(output.dimension(), points, linear.weights(), form);
-    this.displacement = new double[input.dimension()];
-    this.point = new double[input.storage()];
+    this.placement = new PointPlacement(points, active, input);
+    this.flat = output.isVectorSpace();
     this.image = new double[output.storage()];
     this.deviation = new double[output.dimension()];
     this.shift = new double[output.dimension()];
@@ -48,15 +48,14 @@ class PointWorkspace extends BaseWorkspace {
     if (!linear.fillCentre(mean, given, centre, data, stride)) {
       return linear.fault();
     }
+    placement.begin(mean);
+    Arrays.fill(shift, 0);
     for (int i = 0; i < points.size(); i++) {
-      place(i, mean);
-      if (!function.evaluate(linear.count() == 0 ? point : copied(point), given, image)) {
+      double[] point = placement.place(i, mean);
+      if (!function.evaluate(point, given, image)) {
         return MatchingStatus.FUNCTION_NOT_FINITE;
       }
-      outputSpace.difference(image, centre, deviation);
-      for (int c = 0, at = i; c < deviation.length; c++, at += stride) {
-        data[at] = deviation[c];
-      }
+      takeDeviation(i, data, stride);
       if (refinement != null) {
         refinement.keep(i, image);
       }
@@ -64,7 +63,6 @@ class PointWorkspace extends BaseWorkspace {
         return linear.fault();
       }
     }
-    columns.fillShift(shift);
     if (refinement == null) {
       outputSpace.displace(centre, shift, outputMean);
     } else {
@@ -74,24 +72,21 @@ class PointWorkspace extends BaseWorkspace {
     return MatchingStatus.MATCHED;
   }
 
-  /** Sets {@link #point} to m + L xi_i. */
-  private void place(int i, double[] mean) {
-    Arrays.fill(displacement, 0);
-    int end = points.start(i + 1);
-    for (int entry = points.start(i); entry < end; entry++) {
-      addColumn(points.axis(entry), points.coordinate(entry));
+  /** Puts d_i into its column, and its share into delta = sum w_i d_i. */
+  private void takeDeviation(int i, double[] data, int stride) {
+    double weight = points.weight(i);
+    if (flat) {
+      for (int c = 0, at = i; c < shift.length; c++, at += stride) {
+        double difference = image[c] - centre[c];
+        data[at] = difference;
+        shift[c] += weight * difference;
+      }
+      return;
     }
-    inputSpace.displace(mean, displacement, point);
-  }
-
-  /** Adds a column of L times a coordinate to the displacement, over active inputs. */
-  private void addColumn(int axis, double coordinate) {
-    double[] factor = active.factor().data;
-    int n = displacement.length;
-    int count = active.count();
-    for (int a = axis; a < count; a++) {
-      int row = active.input(a);
-      displacement[row] += factor[row * n + axis] * coordinate;
+    outputSpace.difference(image, centre, deviation);
+    for (int c = 0, at = i; c < shift.length; c++, at += stride) {
+      data[at] = deviation[c];
+      shift[c] += weight * deviation[c];
     }
   }
 

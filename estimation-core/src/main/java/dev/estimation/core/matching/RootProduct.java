@@ -13,7 +13,6 @@ final class RootProduct {
   private final int first;
   private final int count;
   private final int[] inputs;
-  private final int width;
   private final double[] root;
 
   /** The part of the factor with the rows of inputs and the columns from {@code first} to the active count. */
@@ -23,18 +22,17 @@ final class RootProduct {
     this.count = active.count() - first;
     this.inputs = new int[count];
     Arrays.setAll(inputs, b -> active.input(first + b));
-    this.width = (count + BLOCK - 1) / BLOCK * BLOCK;
-    this.root = new double[count * width];
+    this.root = new double[count * count];
   }
 
-  /** Takes S, its rows padded with zeros to whole blocks. */
+  /** Takes S. */
   void take() {
     double[] factor = active.factor().data;
     int n = active.factor().numCols;
     for (int b = 0; b < count; b++) {
       int row = inputs[b] * n + first;
       for (int q = 0; q < count; q++) {
-        root[b * width + q] = factor[row + q];
+        root[b * count + q] = factor[row + q];
       }
     }
   }
@@ -42,41 +40,105 @@ final class RootProduct {
   /** Fills the displacement of the inputs by a column of S, the others left alone. */
   void fillColumn(int q, double[] displacement) {
     for (int b = 0; b < count; b++) {
-      displacement[inputs[b]] = root[b * width + q];
+      displacement[inputs[b]] = root[b * count + q];
     }
   }
 
   /**
-   * Fills a row of A S.
+   * Fills A S.
    *
-   * @param row where the row of A begins, which has an entry for every input
-   * @param at where the row of the product begins
+   * @param a row by row, an entry for every input
+   * @param rows of A
+   * @param product row by row
+   * @param start where the first row of the product begins
+   * @param stride from one row of the product to the next
    * @return zero, or NaN if A has something that is not finite
    */
-  double fillRow(double[] a, int row, double[] product, int at) {
+  double fill(double[] a, int rows, double[] product, int start, int stride) {
     double zero = 0;
     for (int q = 0; q < count; q += BLOCK) {
-      double sum0 = 0;
-      double sum1 = 0;
-      double sum2 = 0;
-      double sum3 = 0;
-      for (int b = 0, column = q; b < count; b++, column += width) {
-        double derivative = a[row + inputs[b]];
-        zero += derivative * 0;
-        sum0 += derivative * root[column];
-        sum1 += derivative * root[column + 1];
-        sum2 += derivative * root[column + 2];
-        sum3 += derivative * root[column + 3];
+      if (count - q >= BLOCK) {
+        zero += startFour(a, rows, product, start + q, stride, q);
+        for (int b = q + BLOCK; b < count; b++) {
+          addFour(a, rows, product, start + q, stride, b, q);
+        }
+      } else {
+        zero += fillFew(a, rows, product, start, stride, q);
       }
-      product[at + q] = sum0;
-      if (q + 1 < count) {
-        product[at + q + 1] = sum1;
-      }
-      if (q + 2 < count) {
-        product[at + q + 2] = sum2;
-      }
-      if (q + 3 < count) {
-        product[at + q + 3] = sum3;
+    }
+    return zero;
+  }
+
+  /** Four columns of A times the triangle of S on its diagonal: ten numbers that one loop keeps at hand. */
+  private double startFour(double[] a, int rows, double[] product, int start, int stride, int q) {
+    int n = active.factor().numCols;
+    int first = q * (count + 1);
+    int second = first + count;
+    int third = second + count;
+    int fourth = third + count;
+    double root00 = root[first];
+    double root10 = root[second];
+    double root11 = root[second + 1];
+    double root20 = root[third];
+    double root21 = root[third + 1];
+    double root22 = root[third + 2];
+    double root30 = root[fourth];
+    double root31 = root[fourth + 1];
+    double root32 = root[fourth + 2];
+    double root33 = root[fourth + 3];
+    int input0 = inputs[q];
+    int input1 = inputs[q + 1];
+    int input2 = inputs[q + 2];
+    int input3 = inputs[q + 3];
+    double zero = 0;
+    for (int r = 0; r < rows; r++) {
+      double a0 = a[r * n + input0];
+      double a1 = a[r * n + input1];
+      double a2 = a[r * n + input2];
+      double a3 = a[r * n + input3];
+      int at = start + r * stride;
+      product[at] = a0 * root00 + a1 * root10 + (a2 * root20 + a3 * root30);
+      product[at + 1] = a1 * root11 + (a2 * root21 + a3 * root31);
+      product[at + 2] = a2 * root22 + a3 * root32;
+      product[at + 3] = a3 * root33;
+      zero += (a0 + a1 + a2 + a3) * 0;
+    }
+    return zero;
+  }
+
+  /** Adds column b of A times row b of S, in four columns. */
+  private void addFour(
+      double[] a, int rows, double[] product, int start, int stride, int b, int q) {
+    int n = active.factor().numCols;
+    int row = b * count + q;
+    double root0 = root[row];
+    double root1 = root[row + 1];
+    double root2 = root[row + 2];
+    double root3 = root[row + 3];
+    int input = inputs[b];
+    for (int r = 0; r < rows; r++) {
+      double derivative = a[r * n + input];
+      int at = start + r * stride;
+      product[at] += derivative * root0;
+      product[at + 1] += derivative * root1;
+      product[at + 2] += derivative * root2;
+      product[at + 3] += derivative * root3;
+    }
+  }
+
+  /** The last columns, fewer than four. */
+  private double fillFew(double[] a, int rows, double[] product, int start, int stride, int q) {
+    int n = active.factor().numCols;
+    double zero = 0;
+    for (int c = q; c < count; c++) {
+      for (int r = 0; r < rows; r++) {
+        double sum = 0;
+        for (int b = c; b < count; b++) {
+          double derivative = a[r * n + inputs[b]];
+          sum += derivative * root[b * count + c];
+          zero += derivative * 0;
+        }
+        product[start + r * stride + c] = sum;
       }
     }
     return zero;

@@ -5,6 +5,7 @@ import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.core.internal.Householder;
 import dev.estimation.core.internal.Products;
+import dev.estimation.core.internal.SymmetricMatrix;
 
 /**
  * A covariance as a weighted sum of squares of columns, C D C', with additive noise. {@link #data()} is
@@ -18,6 +19,8 @@ final class WeightedColumns {
   private final int positives;
   private final double[] scaled;
   private final double[] column;
+  private final int[] lowerIndices;
+  private final double[] zeros;
 
   WeightedColumns(int rows, double[] weights, Form form) {
     this.rows = rows;
@@ -31,6 +34,8 @@ final class WeightedColumns {
     this.positives = count;
     this.scaled = new double[form == Form.SQUARE_ROOT ? rows * count : 0];
     this.column = new double[rows];
+    this.lowerIndices = SymmetricMatrix.lowerIndices(rows);
+    this.zeros = new double[rows * rows];
   }
 
   /** Component c of column i stands at c * count() + i. */
@@ -58,31 +63,13 @@ final class WeightedColumns {
     }
     double[] lower = result.changeLowerTriangle().data;
     Products.fillOuterProduct(data, weights, rows, weights.length, lower);
-    double zero = noise == null ? lowerTimesZero(lower) : addLower(noise.matrix().data, lower);
+    double zero = 0;
+    double[] added = noise == null ? zeros : noise.lowerTriangle().data;
+    for (int at : lowerIndices) {
+      lower[at] += added[at];
+      zero += lower[at] * 0; // NaN unless finite
+    }
     return zero == 0 ? MatchingStatus.MATCHED : MatchingStatus.OUTPUT_NOT_FINITE;
-  }
-
-  /** Zero if every sum is finite, else NaN. */
-  private double addLower(double[] noise, double[] lower) {
-    double zero = 0;
-    for (int r = 0; r < rows; r++) {
-      int end = r * rows + r;
-      for (int i = r * rows; i <= end; i++) {
-        lower[i] += noise[i];
-        zero += lower[i] * 0;
-      }
-    }
-    return zero;
-  }
-
-  private double lowerTimesZero(double[] lower) {
-    double zero = 0;
-    for (int r = 0; r < rows; r++) {
-      for (int c = 0; c <= r; c++) {
-        zero += lower[r * rows + c] * 0;
-      }
-    }
-    return zero;
   }
 
   private MatchingStatus fillFactor(Covariance noise, double[] lower) {

@@ -60,6 +60,11 @@ public final class FlatSpace implements Space {
   }
 
   @Override
+  public boolean isVectorSpace() {
+    return !anyAngle;
+  }
+
+  @Override
   public int storage() {
     return angle.length;
   }

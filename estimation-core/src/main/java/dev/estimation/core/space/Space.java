@@ -23,6 +23,14 @@ public interface Space {
   int dimension();
 
   /**
+   * {@return whether differences and displacements are those of the components, as they are for real numbers;
+   * then they need not be asked for}
+   */
+  default boolean isVectorSpace() {
+    return false;
+  }
+
+  /**
    * The difference a - b, as seen from b.
    *
    * @param a read

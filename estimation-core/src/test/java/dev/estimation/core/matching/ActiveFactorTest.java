@@ -2,12 +2,12 @@ package dev.estimation.core.matching;
 
 import static dev.estimation.testing.Agreement.assertMatrix;
 import static org.junit.jupiter.api.Assertions.assertEquals;
-import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.LowerFactor;
+import dev.estimation.core.internal.RowOrder;
 import dev.estimation.testing.RandomGaussians;
 import java.util.Arrays;
 import org.ejml.data.DMatrixRMaj;
@@ -85,10 +85,17 @@ class ActiveFactorTest {
     }
   }
 
+  /** There and back again. */
   @Test
-  void naturalOrderIsNoted() {
-    assertTrue(new ActiveFactor(new int[] {0, 1}, 4).isNatural());
-    assertFalse(new ActiveFactor(new int[] {1, 0}, 4).isNatural());
-    assertFalse(new ActiveFactor(new int[] {3}, 4).isNatural());
+  void theNaturalOrderComesBack() {
+    for (int n = 1; n <= 8; n++) {
+      RandomGaussians random = new RandomGaussians(700 + n);
+      Moments input = random.moments(n);
+      ActiveFactor active = new ActiveFactor(Arrays.copyOf(random.permutation(n), 1 + n / 2), n);
+      assertTrue(active.factor(input));
+      DMatrixRMaj back = active.factor().copy();
+      new RowOrder(active.order(), RowOrder.natural(n)).apply(back.data);
+      assertMatrix("L", input.lowerFactor(), back, ROUNDING, 1);
+    }
   }
 }

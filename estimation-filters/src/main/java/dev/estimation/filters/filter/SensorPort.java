@@ -53,7 +53,7 @@ public final class SensorPort {
             + "; its derivatives: DifferentiableSensor, TwiceDifferentiableSensor");
     this.noise = new NoiseMatrix("measurementNoise", m, true);
     this.innovation = new Innovation(space, matching, plan.iteration() != null);
-    this.posterior = new Posterior(stateSpace, matching, plan.form());
+    this.posterior = new Posterior(stateSpace, matching);
     this.mean = new double[stateSpace.storage()];
     this.iteration = plan.iteration() == null
         ? null

@@ -12,12 +12,15 @@ import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.PointRule;
+import dev.estimation.core.points.QuasiRandomRule;
+import dev.estimation.core.points.SparseGridRule;
 import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.core.space.Space;
 import dev.estimation.testing.AllocationMeter;
 import dev.estimation.testing.RandomGaussians;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -45,9 +48,18 @@ class MatchingAllocationTest {
           "spread axes",
           "unscented 1 2 0",
           "unscented 1e-3 2 0",
-          "cubature 3")) {
+          "simplex 1/3",
+          "cubature 3",
+          "cubature 5",
+          "McNamee-Stenger")) {
         all.add(Arguments.of(name, n, NamedMatchings.of(name), 0));
       }
+      Map<String, PointRule> rules = Map.of(
+          "at 2 deviations", UnscentedRule.atDeviations(2),
+          "sparse grid 2", SparseGridRule.ofLevel(2),
+          "sparse grid of degree 7", SparseGridRule.ofDegree(7),
+          "Sobol", QuasiRandomRule.sobol(100).standardised());
+      rules.forEach((name, rule) -> all.add(Arguments.of(name, n, PointMatching.of(rule), 0)));
       PointRule kappa = UnscentedRule.scaled(1, 0, k -> 3 - k);
       all.add(Arguments.of("kappa = 3 - n", n, PointMatching.of(kappa), 0));
       for (int nodes = 3; nodes <= 5 && Math.pow(nodes, n) <= 4096; nodes++) {
@@ -65,6 +77,12 @@ class MatchingAllocationTest {
   @MethodSource("matchings")
   void aCallAllocatesNothing(String name, int n, MomentMatching matching, int derivatives) {
     check(name, n, matching, new Wave(n, n, derivatives));
+  }
+
+  @Test
+  void aCallOfAMixedProductAllocatesNothing() {
+    MomentMatching mixed = PointMatching.of(GaussHermiteRule.product(3, 5));
+    check("mixed product", 2, mixed, new Wave(2, 2, 0));
   }
 
   /** The same for functions that read a part, whose factor is made in another order. */

@@ -72,13 +72,8 @@ final class LinearColumns {
     return count;
   }
 
-  /**
-   * Begins a call, and fills the columns of the centre if it has a weight; false if a value is not finite.
-   */
+  /** Fills the columns of the centre, if it has a weight; false if a value is not finite. */
   boolean fillCentre(double[] mean, double[] given, double[] centre, double[] data, int stride) {
-    if (count > 0) {
-      root.take();
-    }
     return count == 0
         || !centreWeighed
         || fill(stride - weights.length, mean, given, centre, data, stride);

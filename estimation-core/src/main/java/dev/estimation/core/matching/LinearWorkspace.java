@@ -50,7 +50,6 @@ final class LinearWorkspace extends TaylorWorkspace {
 
   /** G B, over active inputs. Zero, or NaN if G has something that is not finite. */
   private double fillSlopes() {
-    root.take();
     return root.fill(derivatives, outputSpace.dimension(), slopesAndBends(), 0, width());
   }
 

@@ -13,7 +13,6 @@ final class RootProduct {
   private final int first;
   private final int count;
   private final int[] inputs;
-  private final double[] root;
 
   /** The part of the factor with the rows of inputs and the columns from {@code first} to the active count. */
   RootProduct(ActiveFactor active, int first) {
@@ -22,26 +21,18 @@ final class RootProduct {
     this.count = active.count() - first;
     this.inputs = new int[count];
     Arrays.setAll(inputs, b -> active.input(first + b));
-    this.root = new double[count * count];
-  }
-
-  /** Takes S. */
-  void take() {
-    double[] factor = active.factor().data;
-    int n = active.factor().numCols;
-    for (int b = 0; b < count; b++) {
-      int row = inputs[b] * n + first;
-      for (int q = 0; q < count; q++) {
-        root[b * count + q] = factor[row + q];
-      }
-    }
   }
 
   /** Fills the displacement of the inputs by a column of S, the others left alone. */
   void fillColumn(int q, double[] displacement) {
     for (int b = 0; b < count; b++) {
-      displacement[inputs[b]] = root[b * count + q];
+      displacement[inputs[b]] = entry(b, q);
     }
+  }
+
+  /** S, in the factor of the input. */
+  private double entry(int b, int q) {
+    return active.factor().data[inputs[b] * active.factor().numCols + first + q];
   }
 
   /**
@@ -72,20 +63,16 @@ final class RootProduct {
   /** Four columns of A times the triangle of S on its diagonal: ten numbers that one loop keeps at hand. */
   private double startFour(double[] a, int rows, double[] product, int start, int stride, int q) {
     int n = active.factor().numCols;
-    int first = q * (count + 1);
-    int second = first + count;
-    int third = second + count;
-    int fourth = third + count;
-    double root00 = root[first];
-    double root10 = root[second];
-    double root11 = root[second + 1];
-    double root20 = root[third];
-    double root21 = root[third + 1];
-    double root22 = root[third + 2];
-    double root30 = root[fourth];
-    double root31 = root[fourth + 1];
-    double root32 = root[fourth + 2];
-    double root33 = root[fourth + 3];
+    double root00 = entry(q, q);
+    double root10 = entry(q + 1, q);
+    double root11 = entry(q + 1, q + 1);
+    double root20 = entry(q + 2, q);
+    double root21 = entry(q + 2, q + 1);
+    double root22 = entry(q + 2, q + 2);
+    double root30 = entry(q + 3, q);
+    double root31 = entry(q + 3, q + 1);
+    double root32 = entry(q + 3, q + 2);
+    double root33 = entry(q + 3, q + 3);
     int input0 = inputs[q];
     int input1 = inputs[q + 1];
     int input2 = inputs[q + 2];
@@ -110,11 +97,10 @@ final class RootProduct {
   private void addFour(
       double[] a, int rows, double[] product, int start, int stride, int b, int q) {
     int n = active.factor().numCols;
-    int row = b * count + q;
-    double root0 = root[row];
-    double root1 = root[row + 1];
-    double root2 = root[row + 2];
-    double root3 = root[row + 3];
+    double root0 = entry(b, q);
+    double root1 = entry(b, q + 1);
+    double root2 = entry(b, q + 2);
+    double root3 = entry(b, q + 3);
     int input = inputs[b];
     for (int r = 0; r < rows; r++) {
       double derivative = a[r * n + input];
@@ -135,7 +121,7 @@ final class RootProduct {
         double sum = 0;
         for (int b = c; b < count; b++) {
           double derivative = a[r * n + inputs[b]];
-          sum += derivative * root[b * count + c];
+          sum += derivative * entry(b, c);
           zero += derivative * 0;
         }
         product[start + r * stride + c] = sum;

@@ -83,10 +83,8 @@ public final class FlatSpace implements Space {
   public void difference(
       double[] a, double[] b, int pointStart, double[] tangent, int tangentStart) {
     for (int i = 0; i < angle.length; i++) {
-      tangent[tangentStart + i] = a[pointStart + i] - b[pointStart + i];
-    }
-    if (anyAngle) {
-      wrapAngles(tangent, tangentStart);
+      double difference = a[pointStart + i] - b[pointStart + i];
+      tangent[tangentStart + i] = angle[i] ? Angle.wrap(difference) : difference;
     }
   }
 
@@ -99,18 +97,8 @@ public final class FlatSpace implements Space {
   public void displace(
       double[] point, double[] tangent, int tangentStart, double[] result, int pointStart) {
     for (int i = 0; i < angle.length; i++) {
-      result[pointStart + i] = point[pointStart + i] + tangent[tangentStart + i];
-    }
-    if (anyAngle) {
-      wrapAngles(result, pointStart);
-    }
-  }
-
-  private void wrapAngles(double[] values, int start) {
-    for (int i = 0; i < angle.length; i++) {
-      if (angle[i]) {
-        values[start + i] = Angle.wrap(values[start + i]);
-      }
+      double sum = point[pointStart + i] + tangent[tangentStart + i];
+      result[pointStart + i] = angle[i] ? Angle.wrap(sum) : sum;
     }
   }
 

@@ -167,21 +167,4 @@ public final class Products {
     }
     lower[r * (m + 1)] = sum;
   }
-
-  /**
-   * The sum of the squares of all numbers.
-   *
-   * @param a read
-   * @return the sum
-   */
-  public static double sumOfSquares(double[] a) {
-    double even = 0;
-    double odd = 0;
-    int i = 0;
-    for (; i + 1 < a.length; i += 2) {
-      even += a[i] * a[i];
-      odd += a[i + 1] * a[i + 1];
-    }
-    return i < a.length ? even + odd + a[i] * a[i] : even + odd;
-  }
 }

@@ -2,7 +2,6 @@ package dev.estimation.filters.filter;
 
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
-import dev.estimation.core.internal.Products;
 import dev.estimation.core.internal.RowOrder;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
@@ -47,7 +46,7 @@ final class Posterior {
       }
     }
     space.displace(prior.mean(), correction, moments.changeMean());
-    return finish(root);
+    return finish(root, squares);
   }
 
   /** Takes the covariance of a reduced update and a mean found otherwise. */
@@ -55,12 +54,12 @@ final class Posterior {
     double[] root = moments.changeFactor().data;
     squares.fillRoot(matching.inputFactor().data, correction.length, root);
     System.arraycopy(mean, 0, moments.changeMean(), 0, mean.length);
-    return finish(root);
+    return finish(root, squares);
   }
 
-  private StepStatus finish(double[] root) {
-    // Squares, so that the covariance is finite too.
-    if (!Checks.allFinite(moments.mean()) || !(Products.sumOfSquares(root) <= Double.MAX_VALUE)) {
+  private StepStatus finish(double[] root, UnitLeastSquares squares) {
+    // A factor is at most as large as that of the prior, so the covariance is finite if U is.
+    if (!Checks.allFinite(moments.mean()) || !squares.isFinite()) {
       return StepStatus.RESULT_NOT_FINITE;
     }
     naturalOrder.apply(root);

@@ -94,6 +94,15 @@ final class UnitLeastSquares {
     return 2 * sum;
   }
 
+  /** Whether U is finite: its diagonal has the length of each row. */
+  boolean isFinite() {
+    double zero = 0;
+    for (int a = 0; a < k; a++) {
+      zero += triangle[a * (k + 1)] * 0;
+    }
+    return zero == 0;
+  }
+
   /** z, of which B s is B U^-T z. */
   double target(int column) {
     return triangle[k * k + column];

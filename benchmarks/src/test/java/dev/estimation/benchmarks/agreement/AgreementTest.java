@@ -17,6 +17,8 @@ import dev.estimation.benchmarks.replay.RunResult;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.benchmarks.replay.Snapshot;
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.matching.PointMatching;
+import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.filters.filter.IteratedUpdate;
 import java.util.ArrayList;
 import java.util.List;
@@ -25,6 +27,8 @@ import java.util.stream.Stream;
 import org.junit.jupiter.api.DynamicTest;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestFactory;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 
 /**
  * Runs on recorded logs agree with an independent program that was written from the published
@@ -78,7 +82,8 @@ class AgreementTest {
   }
 
   /**
-   * The active components come first in the state, so these two see the same numbers either way.
+   * The active components come first in the state, so these two see the same numbers either way. So do motions
+   * that are linear in all; a turn is linear in all but the rate, whose points then lie elsewhere: see below.
    */
   @TestFactory
   List<DynamicTest> activeInputsAloneGiveTheSame() {
@@ -89,13 +94,29 @@ class AgreementTest {
     for (ReplayCase replayed : List.of(vessel(), uwb())) {
       for (String variant : replayed.variants()) {
         for (ReferenceFilter filter : List.of(ReferenceFilter.LINEAR, ReferenceFilter.HERMITE)) {
-          tests.add(DynamicTest.dynamicTest(
-              variant + " " + filter.name(),
-              () -> compareWithWholeState(replayed.load(variant), filter)));
+          if (filter == ReferenceFilter.LINEAR || !variant.endsWith("ct")) {
+            tests.add(DynamicTest.dynamicTest(
+                variant + " " + filter.name(),
+                () -> compareWithWholeState(replayed.load(variant), filter.kind(), SAME)));
+          }
         }
       }
     }
     return tests;
+  }
+
+  /**
+   * Points for the turn rate alone against points over the whole state: they differ by the truncation of the product
+   * and converge. Measured, largest of both targets: 1e-3 standard deviations with 3 nodes, which are themselves 0.28 from
+   * 15 nodes, and 8e-7 with 5.
+   */
+  @ParameterizedTest
+  @CsvSource({"3, 2e-3", "5, 2e-6"})
+  void pointsOfTheTurnRateAloneConverge(int nodes, double limit) {
+    assumeTrue(ReferenceFiles.exist());
+    FilterKind kind = FilterKind.of(PointMatching.of(GaussHermiteRule.product(nodes)));
+    compareWithWholeState(vessel().load("target1-ct"), kind, limit);
+    compareWithWholeState(vessel().load("target2-ct"), kind, limit);
   }
 
   private static ReplayCase vessel() {
@@ -163,14 +184,17 @@ class AgreementTest {
   }
 
   private static RunResult run(LoadedVariant variant, ReferenceFilter filter) {
-    Replayer replayer =
-        new Replayer(variant.scenario().orElseThrow(), filter.kind().overWholeState());
+    Replayer replayer = overWholeState(variant, filter.kind());
     return filter.smoothed() ? replayer.runAndSmooth().smoothed() : replayer.run();
   }
 
-  private static void compareWithWholeState(LoadedVariant variant, ReferenceFilter filter) {
-    RunResult whole = run(variant, filter);
-    RunResult active = new Replayer(variant.scenario().orElseThrow(), filter.kind()).run();
+  private static Replayer overWholeState(LoadedVariant variant, FilterKind kind) {
+    return new Replayer(variant.scenario().orElseThrow(), kind.overWholeState());
+  }
+
+  private static void compareWithWholeState(LoadedVariant variant, FilterKind kind, double limit) {
+    RunResult whole = overWholeState(variant, kind).run();
+    RunResult active = new Replayer(variant.scenario().orElseThrow(), kind).run();
     EstimateDistance distance = new EstimateDistance();
     for (int step = 0; step < whole.steps(); step++) {
       Snapshot expected = whole.history().get(step);
@@ -181,7 +205,7 @@ class AgreementTest {
           estimate.covariance().getData());
     }
     assertTrue(
-        distance.largest() <= SAME,
-        "distance must be at most " + SAME + ", got " + distance.largest());
+        distance.largest() <= limit,
+        "distance must be at most " + limit + ", got " + distance.largest());
   }
 }

@@ -10,6 +10,7 @@ import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
 import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
 import dev.estimation.filters.model.DifferentiableSensor;
+import java.util.Arrays;
 
 /** Holds the Jacobians and active inputs of models against differences. */
 public final class ModelJacobians {
@@ -32,28 +33,40 @@ public final class ModelJacobians {
         scales);
   }
 
-  /** Both Jacobians of a noise-driven motion at noise 0. */
+  /** Both Jacobians of a noise-driven motion, over state and noise; scales of both, one after the other. */
   public static void noiseDriven(
       DifferentiableNoiseDrivenMotion model,
       double[] state,
+      double[] noise,
       double[] control,
       double dt,
-      double[] scales,
-      double[] noiseScales) {
+      double... scales) {
     int d = state.length;
-    int q = noiseScales.length;
-    double[] noNoise = new double[q];
+    int q = noise.length;
+    VectorFunction move =
+        (input, given, output) -> model.move(head(input, d), tail(input, d), given, 0, dt, output);
+    Jacobian jacobian = (input, given, filled) -> {
+      double[] byState = new double[d * d];
+      double[] byNoise = new double[d * q];
+      model.moveJacobians(head(input, d), tail(input, d), given, 0, dt, byState, byNoise);
+      for (int r = 0; r < d; r++) {
+        System.arraycopy(byState, r * d, filled, r * (d + q), d);
+        System.arraycopy(byNoise, r * q, filled, r * (d + q) + d, q);
+      }
+    };
+    double[] joint = Arrays.copyOf(state, d + q);
+    System.arraycopy(noise, 0, joint, d, q);
     Space space = model.stateSpace();
-    VectorFunction byState =
-        (input, given, output) -> model.move(input, noNoise, given, 0, dt, output);
-    Jacobian stateJacobian = (input, given, filled) ->
-        model.moveJacobians(input, given, 0, dt, filled, new double[d * q]);
-    check(space, space, new Model(byState, stateJacobian), state, control, scales);
-    VectorFunction byNoise =
-        (input, given, output) -> model.move(state, input, given, 0, dt, output);
-    Jacobian noiseJacobian = (input, given, filled) ->
-        model.moveJacobians(state, given, 0, dt, new double[d * d], filled);
-    check(Space.reals(q), space, new Model(byNoise, noiseJacobian), noNoise, control, noiseScales);
+    Model function = new Model(move, model.structure().withJacobian(jacobian));
+    check(space.and(Space.reals(q)), space, function, joint, control, scales);
+  }
+
+  private static double[] head(double[] joint, int length) {
+    return Arrays.copyOf(joint, length);
+  }
+
+  private static double[] tail(double[] joint, int from) {
+    return Arrays.copyOfRange(joint, from, joint.length);
   }
 
   /** At a state. */
@@ -75,10 +88,6 @@ public final class ModelJacobians {
   }
 
   private record Model(VectorFunction values, Structure structure) implements VectorFunction {
-    Model(VectorFunction values, Jacobian jacobian) {
-      this(values, Structure.UNKNOWN.withJacobian(jacobian));
-    }
-
     @Override
     public void evaluate(double[] input, double[] given, double[] output) {
       values.evaluate(input, given, output);

@@ -51,7 +51,7 @@ class BadInputTest {
         "replay --method hermite:1",
         "replay --method unscented:1,2,-3",
         "replay --method random:5",
-        "replay --method random:5,1",
+        "replay --whole-state --method random:5,1",
         "replay --method linear-iterated:damped",
         "replay --smooth=twice",
         "replay --lag 1",
@@ -81,13 +81,17 @@ class BadInputTest {
     assertRefused(replay("ship", vessel), "ship", "vessel, uwb, robot, gnss, demo");
     assertRefused(replay("robot", robot, "--variant", "far"), "far", "near, wide");
     assertRefused(replay("gnss", gnss, "--variant", "near"), "near", "far");
-    assertRefused(replay("robot", robot, "--method", "random:4,1"), "random:4,1", "near");
+    assertRefused(
+        replay("robot", robot, "--whole-state", "--method", "random:4,1"), "random:4,1", "near");
     assertRefused(replay("uwb", uwb, "--lag", "soon"), "--lag", "soon");
     assertRefused(replay("uwb", uwb, "--bias", "NaN"), "--bias", "NaN");
     assertRefused(replay("uwb", uwb, "--near-start", "1"), "--near-start", "X,Y");
     assertRefused(replay("uwb", uwb, "--near-start", "1,y"), "--near-start", "'y'");
     assertRefused(replay("vessel", vessel, "--height", "1"), "--height", "uwb");
-    assertRefused(replay("vessel", vessel, "--method", "hermite:40"), "hermite:40", "target1-cv");
+    assertRefused(
+        replay("vessel", vessel, "--whole-state", "--method", "hermite:40"),
+        "hermite:40",
+        "target1-cv");
     assertRefused(replay("vessel", folder.resolve("none")), "none");
     assertRefused(replay("vessel", vessel.resolve("scans.csv")), "scans.csv");
     assertRefused(replay("vessel", ""), "log folder");

@@ -12,12 +12,40 @@ import java.util.Optional;
  *       over these alone; how the rest varies with the output follows by regression, exactly for
  *       Gaussian inputs.
  *   <li><i>Linear inputs</i>: those of the active inputs in which the function is linear once the others are
- *       given, g(u) = A(u_a) u_b + c(u_a). Points are drawn for u_a alone and the rest follows in closed form
- *       (Morelande and Moran 2007, from memory): a coordinated turn, linear given the turn rate, costs what a
- *       function of one input costs.
+ *       given. Points are drawn for the others alone.
  *   <li><i>Jacobian</i>: its partial derivatives.
  *   <li><i>Hessian</i>: its second partial derivatives.
  * </ul>
+ *
+ * <p>With linear inputs u_b, the other active ones u_a, and g(u) = A(u_a) u_b + c(u_a), given u_a the mean and
+ * covariance of u_b are
+ *
+ * <pre>
+ * m_b|a = m_b + P_ba P_aa^-1 (u_a - m_a)        P_b|a = P_bb - P_ba P_aa^-1 P_ab
+ * </pre>
+ *
+ * <p>and so, with expectations over u_a alone, where points are,
+ *
+ * <pre>
+ * mean  = E[A m_b|a + c]                        P_zz = Cov[A m_b|a + c] + E[A P_b|a A']
+ * P_az  = Cov[u_a, A m_b|a + c]                 P_bz = P_ba P_aa^-1 P_az + P_b|a E[A]'
+ * </pre>
+ *
+ * <p>No inverse is formed: with L the lower factor of the covariance, u_a first, P_ba P_aa^-1 (u_a - m_a) is L_ba xi, and
+ * S = L_bb has P_b|a = S S', so that columns A S add to those of points. What u_b contributes is exact, also where
+ * P_aa is singular. Declare it wherever it is true: a coordinated turn is linear in all but its rate, a
+ * pseudorange in the clock, a range rate in the velocity. A claim that is not true gives wrong
+ * moments and no message.
+ *
+ * <p>Cost, a and b the numbers of inputs and N(a) the points of a rule, the centre included, of which N' have a mean
+ * weight: N(a) evaluations, and for A N' Jacobians or, without a Jacobian, N' b evaluations more. A function that
+ * is linear in all its inputs takes 1 evaluation and 1 Jacobian, or 1 + b evaluations, and is exact. Without a
+ * Jacobian a rule of 2 n + 1 points saves nothing, and costs more where a is above 1 or the centre has a weight; products
+ * save in any case. Rules whose points move out with n, cubature among them, keep them nearer to the mean: of a
+ * range with a spread of 100 km cubature then sees less of the bend.
+ * Matchings by derivatives or by differences over the spread, random draws that are not standardised, and those over
+ * the whole input make no use of it. Source: Morelande and Moran 2007, <i>An unscented transformation for conditionally
+ * linear models</i>, ICASSP (from memory).
  *
  * <p><i>Immutable.</i> Start from {@link #UNKNOWN} and add what is known.
  */
@@ -51,9 +79,11 @@ public final class Structure {
   }
 
   /**
-   * This structure with the inputs in which the function is linear once the others are given.
+   * This structure with the inputs in which the function is linear once the others are given; formulas, cost and
+   * when to say so stand above.
    *
-   * @param indices distinct, of active inputs; none if there are none; copied
+   * @param indices distinct, of active inputs, dimensions of the tangent as for those; none if there are none;
+   *     copied
    * @return a structure that says so
    */
   public Structure withLinearInputs(int... indices) {

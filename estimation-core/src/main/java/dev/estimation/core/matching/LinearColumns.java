@@ -9,15 +9,22 @@ import java.util.Arrays;
 
 /**
  * What the inputs add in which a function is linear once the others are given: g(u) = A(u_a) u_b + c(u_a), with
- * u_b = its mean given u_a, plus S s, s ~ N(0, I). At each point the columns A S, with the mean weight of the
- * point; none where there are no such inputs. A is the part of the Jacobian that belongs to u_b, or comes from one
- * more evaluation for each of them, exactly since g is linear in it.
+ * u_b = its mean given u_a, plus S s, s ~ N(0, I). None where there are no such inputs. A is the part of the
+ * Jacobian that belongs to u_b, or comes from one more evaluation for each of them, exactly since g is linear in it.
+ *
+ * <p>Two ways of writing E[A S S' A']. With no centre weight below 0: at each point the columns A S, with the mean
+ * weight of the point. Else those would cancel, by 1e6 for a narrow spread, and might leave an indefinite sum. So E[A] S has
+ * columns of its own, of weight 1, and the covariance of each column of A S is written as {@link
+ * PointColumns} writes that of z, with the same weights: deviations from the centre, and their mean.
  */
 final class LinearColumns {
   private final BaseWorkspace owner;
+  private final UnitPoints points;
   private final int nonlinear;
   private final int count;
   private final boolean centreWeighed;
+  private final boolean aboutMean;
+  private final double shiftFraction;
   private final double[] weights;
   private final Jacobian jacobian;
   private final RootProduct root;
@@ -31,15 +38,14 @@ final class LinearColumns {
   private LinearColumns(
       BaseWorkspace owner, VectorFunction function, UnitPoints points, int count) {
     this.owner = owner;
+    this.points = points;
     this.count = count;
     this.nonlinear = owner.active.count() - count;
     this.jacobian = function.structure().jacobian().orElse(null);
     this.centreWeighed = points.centreMeanWeight() != 0;
-    int first = centreWeighed ? count : 0;
-    this.weights = new double[count == 0 ? 0 : first + points.size() * count];
-    for (int i = 0; i < weights.length; i++) {
-      weights[i] = i < first ? points.centreMeanWeight() : points.weight((i - first) / count);
-    }
+    this.aboutMean = points.centreMeanWeight() < 0;
+    this.shiftFraction = PointColumns.shiftFraction(points);
+    this.weights = weights(points, count, aboutMean ? PointColumns.deltaWeight(points) : 0);
     this.root = new RootProduct(owner.active, nonlinear);
     int n = owner.inputSpace.dimension();
     int m = owner.outputSpace.dimension();
@@ -48,6 +54,20 @@ final class LinearColumns {
     this.moved = new double[owner.inputSpace.storage()];
     this.image = new double[owner.outputSpace.storage()];
     this.deviation = new double[m];
+  }
+
+  /** In this order: the centre or E[A], the points, and the mean of their deviations if it has a weight. */
+  private static double[] weights(UnitPoints points, int count, double deltaWeight) {
+    double centre = points.centreMeanWeight();
+    int first = centre == 0 ? 0 : count;
+    int last = first + points.size() * count;
+    double[] weights = new double[last + (deltaWeight == 0 ? 0 : count)];
+    Arrays.fill(weights, last, weights.length, deltaWeight);
+    for (int i = 0; i < last; i++) {
+      double ofCentre = centre < 0 ? 1 : centre;
+      weights[i] = i < first ? ofCentre : points.weight((i - first) / count);
+    }
+    return weights;
   }
 
   static LinearColumns of(BaseWorkspace owner, VectorFunction function, UnitPoints points) {
@@ -123,11 +143,46 @@ final class LinearColumns {
     return true;
   }
 
+  /** Brings the columns about their mean if the centre's weight is below 0. */
+  void centre(double[] data, int stride) {
+    if (!aboutMean) {
+      return;
+    }
+    int first = stride - weights.length;
+    for (int c = 0; c < deviation.length; c++) {
+      for (int q = 0; q < count; q++) {
+        centreEntry(data, c * stride + first + q);
+      }
+    }
+  }
+
+  /** One component of one column of A S, whose value at the centre stands at an index. */
+  private void centreEntry(double[] data, int at) {
+    int last = points.size() * count;
+    double delta = 0;
+    for (int i = 0, j = at + count; i < points.size(); i++, j += count) {
+      data[j] -= data[at];
+      delta += points.weight(i) * data[j];
+    }
+    data[at] += delta;
+    for (int j = at + count; j <= at + last; j += count) {
+      data[j] -= shiftFraction * delta;
+    }
+    if (weights.length > count + last) {
+      data[at + count + last] = delta;
+    }
+  }
+
+  /** How many of the columns, the first, have a mean that W tells. */
+  int meanColumns() {
+    return aboutMean ? count : weights.length;
+  }
+
   /** The rows of W that belong to these inputs: the means of the columns. */
   void fillCross(double[] w, WeightedColumns columns) {
     int stride = columns.count();
     int m = deviation.length;
-    for (int i = 0; i < weights.length; i++) {
+    for (int i = 0; i < meanColumns(); i++) {
       int row = (nonlinear + i % count) * m;
       for (int c = 0; c < m; c++) {
         w[row + c] += weights[i] * columns.data()[c * stride + stride - weights.length + i];

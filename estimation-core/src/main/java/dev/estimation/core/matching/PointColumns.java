@@ -36,10 +36,8 @@ final class PointColumns {
     this.points = points;
     this.rows = rows;
     int size = points.size();
-    double sum = 1 - points.centreMeanWeight();
-    double aboutCentre = points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
-    this.shiftFraction = aboutCentre < 0 && sum > 0 ? 1 / sum : 0;
-    double deltaWeight = aboutCentre + shiftFraction;
+    this.shiftFraction = shiftFraction(points);
+    double deltaWeight = deltaWeight(points);
     this.meanWeights = new double[size];
     Arrays.setAll(meanWeights, points::weight);
     this.deltaColumn = deltaWeight == 0 ? -1 : size;
@@ -73,6 +71,21 @@ final class PointColumns {
       count++;
     }
     return count;
+  }
+
+  private static double aboutCentre(UnitPoints points) {
+    return points.centreCovarianceWeight() - points.centreMeanWeight() - 1;
+  }
+
+  /** The part of delta that is taken from the columns of points: 1 / V, or 0 if they stay about the centre. */
+  static double shiftFraction(UnitPoints points) {
+    double sum = 1 - points.centreMeanWeight();
+    return aboutCentre(points) < 0 && sum > 0 ? 1 / sum : 0;
+  }
+
+  /** The weight of the column of delta. */
+  static double deltaWeight(UnitPoints points) {
+    return aboutCentre(points) + shiftFraction(points);
   }
 
   WeightedColumns total() {
@@ -134,13 +147,12 @@ final class PointColumns {
   }
 
   /**
-   * What regression leaves: W' xi_i taken from the column of point i, and from each column of a linear input
-   * its mean, the row of W that belongs to it.
+   * What regression leaves: W' xi_i taken from the column of point i, and from the columns of linear inputs that
+   * have a mean that mean, the row of W that belongs to it.
    *
    * @param w W, k x m
-   * @param linearInputs how many of the k, the last
    */
-  WeightedColumns residuals(double[] w, int linearInputs) {
+  WeightedColumns residuals(double[] w, LinearColumns linear) {
     double[] data = total.data();
     double[] rest = left.data();
     int stride = weights.length;
@@ -157,14 +169,14 @@ final class PointColumns {
         }
         rest[at + i] = sum;
       }
-      for (int i = meanWeights.length; i < linearColumn; i++) {
+      for (int i = meanWeights.length; i < stride; i++) {
         rest[at + i] = data[at + i];
       }
     }
-    for (int i = linearColumn; i < stride; i++) {
-      int row = (points.dimension() + (i - linearColumn) % linearInputs) * rows;
-      for (int c = 0, at = i; c < rows; c++, at += stride) {
-        rest[at] = data[at] - w[row + c];
+    for (int i = 0; i < linear.meanColumns(); i++) {
+      int row = (points.dimension() + i % linear.count()) * rows;
+      for (int c = 0, at = linearColumn + i; c < rows; c++, at += stride) {
+        rest[at] -= w[row + c];
       }
     }
     return left;

@@ -24,6 +24,11 @@ import dev.estimation.core.space.Space;
  * function if {@code UnitPoints.covarianceWeightsPositive()}. The rounding of g itself is multiplied by
  * {@code UnitPoints.weightAmplification()}.
  *
+ * <p>Where g is linear in some inputs given the others, points are drawn for the others alone and the rest is
+ * summed beforehand; {@link Structure} has the formulas. With A S the columns by which u_b acts, E[A S S' A'] is summed with
+ * mean weights. Where that of the centre is below 0 it is E[A] S S' E[A]' and the covariance of A S, written as
+ * that of z above, so that weights of 1e6 do not cancel and P_zz stays positive semi-definite where it was.
+ *
  * <p>Samples ({@code UnitPoints.isSample()}) have a mean and covariance of their own: for them P_zz and W
  * are taken about both sample means. Where they come in independent replicates, the workspace is a {@link
  * SampledWorkspace}: its moments are free of bias and have standard errors.

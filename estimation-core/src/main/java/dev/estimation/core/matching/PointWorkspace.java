@@ -69,6 +69,7 @@ class PointWorkspace extends BaseWorkspace {
       refinement.run(centre, columns, shift, outputMean);
     }
     columns.centre(shift);
+    linear.centre(data, stride);
     return MatchingStatus.MATCHED;
   }
 
@@ -97,7 +98,7 @@ class PointWorkspace extends BaseWorkspace {
 
   @Override
   WeightedColumns residuals() {
-    return columns.residuals(unitCrossCovariance().data, linear.count());
+    return columns.residuals(unitCrossCovariance().data, linear);
   }
 
   @Override

@@ -43,6 +43,19 @@
  *     <td>error shrinks nearly as 1 / N for few inputs; standard errors from random shifts</td></tr>
  * </table>
  *
+ * <p>Where a function says in what it is linear ({@code Structure.withLinearInputs}), n counts the other active
+ * inputs alone for all rules but random draws that are not standardised, and each point takes a Jacobian besides, or one
+ * more evaluation for each linear input. Of a coordinated turn over five states with a Jacobian:
+ *
+ * <table>
+ *   <caption>Evaluations, and Jacobians</caption>
+ *   <tr><th>rule</th><th>over all five</th><th>over the rate</th></tr>
+ *   <tr><td>unscented, alpha = 1, kappa = 0; cubature, degree 3</td><td>11</td><td>3, 2</td></tr>
+ *   <tr><td>unscented, alpha = 0.001</td><td>11</td><td>3, 3</td></tr>
+ *   <tr><td>Gauss-Hermite, 3 nodes</td><td>243</td><td>3, 3</td></tr>
+ *   <tr><td>Gauss-Hermite, 5 nodes</td><td>3125</td><td>5, 5</td></tr>
+ * </table>
+ *
  * <p>The page of {@code core.points} weighs the rules against each other.
  */
 package dev.estimation.core.matching;

@@ -57,6 +57,25 @@ class StructureTest {
   }
 
   @Test
+  void linearInputsAreKeptBesideTheOthers() {
+    Structure first = Structure.UNKNOWN.withActiveInputs(4, 1, 0).withLinearInputs(0, 4);
+    Structure second =
+        Structure.UNKNOWN.withLinearInputs(0, 4).withJacobian(JACOBIAN).withActiveInputs(4, 1, 0);
+    for (Structure structure : new Structure[] {first, second.withHessian(HESSIAN)}) {
+      assertArrayEquals(new int[] {0, 4}, structure.linearInputs());
+      assertArrayEquals(new int[] {1}, structure.nonlinearInputs(5));
+      assertArrayEquals(new int[0], structure.withAllInputsActive().linearInputs());
+      assertArrayEquals(new int[] {4, 1, 0}, structure.withLinearInputs().nonlinearInputs(5));
+    }
+    assertArrayEquals(new int[] {0, 1}, Structure.UNKNOWN.nonlinearInputs(2));
+    int[] indices = {0};
+    Structure copied = Structure.UNKNOWN.withLinearInputs(indices);
+    indices[0] = 1;
+    copied.linearInputs()[0] = 1;
+    assertArrayEquals(new int[] {0}, copied.linearInputs());
+  }
+
+  @Test
   void aFunctionMustReadSomething() {
     assertThrows(IllegalArgumentException.class, () -> Structure.UNKNOWN.withActiveInputs());
   }

@@ -82,6 +82,44 @@ class UglySetUpTest {
     }
   }
 
+  private static VectorFunction linearIn(Structure structure) {
+    return new VectorFunction() {
+      @Override
+      public void evaluate(double[] input, double[] given, double[] output) {
+        output[0] = input[0];
+      }
+
+      @Override
+      public Structure structure() {
+        return structure;
+      }
+    };
+  }
+
+  @Test
+  void linearInputsThatAreNotActiveOrNotThere() {
+    MomentMatching matching = PointMatching.of(UnscentedRule.scaled(1, 2, 0));
+    Structure part = Structure.UNKNOWN.withActiveInputs(2, 0);
+    assertRefused(
+        matching,
+        3,
+        linearIn(part.withLinearInputs(1)),
+        "linear inputs",
+        "[1]",
+        "active",
+        "[2, 0]");
+    assertRefused(
+        matching, 3, linearIn(part.withLinearInputs(0, 0)), "linear inputs", "distinct", "[0, 0]");
+    assertRefused(matching, 3, linearIn(part.withLinearInputs(3)), "linear inputs", "0..2", "[3]");
+    assertRefused(
+        matching, 3, linearIn(part.withLinearInputs(-1)), "linear inputs", "0..2", "[-1]");
+    matching.workspace(Space.reals(3), Space.reals(1), linearIn(part.withLinearInputs(0, 2)));
+    // Over the whole input nothing of it is used.
+    matching
+        .overWholeInput()
+        .workspace(Space.reals(3), Space.reals(1), linearIn(part.withLinearInputs(1)));
+  }
+
   @Test
   void aRuleThatDoesNotExistThere() {
     MomentMatching rule = PointMatching.of(UnscentedRule.scaled(1, 0, -3));

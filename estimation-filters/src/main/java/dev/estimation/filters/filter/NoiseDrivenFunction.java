@@ -64,7 +64,7 @@ final class NoiseDrivenFunction implements VectorFunction {
     split(joint);
     Arrays.fill(byState, 0);
     Arrays.fill(byNoise, 0);
-    differentiable.moveJacobians(state, control, time, dt, byState, byNoise);
+    differentiable.moveJacobians(state, noise, control, time, dt, byState, byNoise);
     int q = noise.length;
     int d = byNoise.length / q;
     for (int r = 0; r < d; r++) {

@@ -19,7 +19,7 @@ public sealed interface Motion permits MotionModel, NoiseDrivenMotion {
     return 0;
   }
 
-  /** {@return the inputs that the motion reads; all unless said otherwise} */
+  /** {@return the inputs that the motion reads, and is linear in; all and none unless said otherwise} */
   default Structure structure() {
     return Structure.UNKNOWN;
   }

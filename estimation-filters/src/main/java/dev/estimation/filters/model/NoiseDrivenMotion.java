@@ -5,7 +5,7 @@ package dev.estimation.filters.model;
  *
  * <p>Wheel slip, a gust on a commanded speed: noise that is turned and bent with the state. Points are
  * drawn in state and noise together. A model that also has its Jacobians is a {@link
- * DifferentiableNoiseDrivenMotion}. The active inputs of its structure are components of the state,
+ * DifferentiableNoiseDrivenMotion}. The active and linear inputs of its structure are components of the state,
  * and components of the noise counted on from the dimension of the state.
  */
 public non-sealed interface NoiseDrivenMotion extends Motion {

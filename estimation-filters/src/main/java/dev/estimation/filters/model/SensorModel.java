@@ -39,7 +39,10 @@ public interface SensorModel {
    */
   void measurementNoise(double[] state, double[] given, double[] covariance);
 
-  /** {@return the components of the state that {@link #measure} reads; all unless said otherwise} */
+  /**
+   * {@return the components of the state that {@link #measure} reads, and is linear in; all and none unless said
+   * otherwise}
+   */
   default Structure structure() {
     return Structure.UNKNOWN;
   }

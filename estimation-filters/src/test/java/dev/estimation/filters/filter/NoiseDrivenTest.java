@@ -158,11 +158,13 @@ class NoiseDrivenTest {
     @Override
     public void moveJacobians(
         double[] state,
+        double[] noise,
         double[] control,
         double time,
         double dt,
         double[] byState,
         double[] byNoise) {
+      byState[1] = noise[0];
       byState[4] = 1;
       byState[7] = 1;
       byNoise[0] = state[1];

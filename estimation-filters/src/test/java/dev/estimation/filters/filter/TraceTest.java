@@ -86,6 +86,34 @@ class TraceTest {
   }
 
   /**
+   * The motion is linear in the second component: points along the first alone are those of the product, with
+   * what the second adds summed beforehand. So the outside values of products hold here too.
+   */
+  @ParameterizedTest
+  @MethodSource
+  void pendulumLinearInItsRate(String rule, MomentMatching matching, double expected) {
+    Gaussian prior = Gaussian.of(new double[] {1.6, 0}, new double[][] {{0.1, 0}, {0, 0.1}});
+    double logLikelihood = follow(
+        "pendulum",
+        rule,
+        matching,
+        new Pendulum(),
+        new Pendulum.SideView(),
+        prior,
+        0.01,
+        TOLERANCE);
+    assertRelative("log-likelihood", expected, logLikelihood, TOLERANCE);
+  }
+
+  static List<Arguments> pendulumLinearInItsRate() {
+    MomentMatching fourthMoment = PointMatching.of(UnscentedRule.scaled(1, 0, (int n) -> 3 - n));
+    return List.of(
+        Arguments.of("GHKF3", hermite(3), -29.630874982910235),
+        Arguments.of("GHKF3", fourthMoment, -29.630874982910235),
+        Arguments.of("GHKF5", hermite(5), -29.625514842472445));
+  }
+
+  /**
    * Hessians by differences of Jacobians, good to 1e-10, and by differences of values, good to 1e-7 of
    * the angle: ten to a hundred times that after 150 steps.
    */

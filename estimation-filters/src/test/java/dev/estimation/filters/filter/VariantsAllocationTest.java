@@ -137,6 +137,7 @@ class VariantsAllocationTest {
     @Override
     public void moveJacobians(
         double[] state,
+        double[] noise,
         double[] control,
         double time,
         double dt,
@@ -144,10 +145,11 @@ class VariantsAllocationTest {
         double[] byNoise) {
       double cos = Math.cos(state[2]);
       double sin = Math.sin(state[2]);
+      double way = (control[0] + noise[0]) * dt;
       byState[0] = 1;
-      byState[2] = -control[0] * dt * sin;
+      byState[2] = -way * sin;
       byState[4] = 1;
-      byState[5] = control[0] * dt * cos;
+      byState[5] = way * cos;
       byState[8] = 1;
       byNoise[0] = dt * cos;
       byNoise[2] = dt * sin;

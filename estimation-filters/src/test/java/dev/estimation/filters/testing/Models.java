@@ -63,6 +63,7 @@ public final class Models {
     @Override
     public void moveJacobians(
         double[] state,
+        double[] noise,
         double[] control,
         double time,
         double dt,

@@ -19,6 +19,12 @@ public final class Pendulum implements TwiceDifferentiableMotion {
     return Space.reals(2);
   }
 
+  /** Linear in the rate. */
+  @Override
+  public Structure structure() {
+    return Structure.UNKNOWN.withLinearInputs(1);
+  }
+
   @Override
   public void move(double[] state, double[] control, double time, double dt, double[] next) {
     next[0] = state[0] + state[1] * dt;

@@ -177,6 +177,7 @@ class NoiseKeepingModelTest {
     @Override
     public void moveJacobians(
         double[] state,
+        double[] noise,
         double[] control,
         double time,
         double dt,
@@ -184,6 +185,7 @@ class NoiseKeepingModelTest {
         double[] byNoise) {
       kept.spoil();
       byState[0] = 1;
+      byState[1] = -noise[0] * Math.sin(state[1]);
       byState[3] = 1;
       byNoise[0] = Math.cos(state[1]);
       byNoise[3] = 1;

@@ -12,7 +12,10 @@ import dev.estimation.filters.model.DifferentiableSensor;
  */
 final class Pseudorange implements DifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1);
-  private static final Structure PLACE_AND_CLOCK = Structure.UNKNOWN.withActiveInputs(0, 1, 2, 3);
+
+  /** Linear in the clock. */
+  private static final Structure PLACE_AND_CLOCK =
+      Structure.UNKNOWN.withActiveInputs(0, 1, 2, 3).withLinearInputs(3);
 
   private final double deviation;
   private final double lowDeviation;

@@ -1,5 +1,6 @@
 package dev.estimation.benchmarks.cases.gnss;
 
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
@@ -14,6 +15,7 @@ final class ReceiverAtRest implements DifferentiableMotion {
   private static final int CLOCK = 3;
   private static final int DRIFT = 4;
   private static final FlatSpace SPACE = Space.reals(DIMENSION);
+  private static final Structure LINEAR = Structure.UNKNOWN.withLinearInputs(0, 1, 2, 3, 4);
 
   private final double positionDensity;
   private final double clockDensity;
@@ -35,6 +37,11 @@ final class ReceiverAtRest implements DifferentiableMotion {
   @Override
   public FlatSpace stateSpace() {
     return SPACE;
+  }
+
+  @Override
+  public Structure structure() {
+    return LINEAR;
   }
 
   @Override

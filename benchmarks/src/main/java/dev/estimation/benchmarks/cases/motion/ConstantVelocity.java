@@ -1,5 +1,6 @@
 package dev.estimation.benchmarks.cases.motion;
 
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
@@ -11,6 +12,7 @@ import dev.estimation.filters.model.DifferentiableMotion;
 public final class ConstantVelocity implements DifferentiableMotion {
   private final double[] spectralDensities;
   private final FlatSpace space;
+  private final Structure structure;
 
   /**
    * The model.
@@ -20,11 +22,19 @@ public final class ConstantVelocity implements DifferentiableMotion {
   public ConstantVelocity(double... spectralDensities) {
     this.spectralDensities = spectralDensities.clone();
     this.space = Space.reals(2 * spectralDensities.length);
+    int[] all = Structure.UNKNOWN.activeInputs(space.dimension());
+    this.structure = Structure.UNKNOWN.withLinearInputs(all);
   }
 
   @Override
   public FlatSpace stateSpace() {
     return space;
+  }
+
+  /** Linear in all. */
+  @Override
+  public Structure structure() {
+    return structure;
   }
 
   @Override

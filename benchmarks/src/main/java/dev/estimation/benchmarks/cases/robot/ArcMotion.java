@@ -1,6 +1,7 @@
 package dev.estimation.benchmarks.cases.robot;
 
 import dev.estimation.benchmarks.cases.motion.TurnArc;
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
@@ -13,6 +14,9 @@ import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
  */
 final class ArcMotion implements DifferentiableNoiseDrivenMotion {
   private static final FlatSpace SPACE = Space.reals(2).and(Space.angles(1));
+
+  /** Place and noise of the speed; bent by heading and noise of the turn rate. */
+  private static final Structure LINEAR = Structure.UNKNOWN.withLinearInputs(0, 1, 3);
 
   private final double speedDensity;
   private final double turnDensity;
@@ -44,6 +48,11 @@ final class ArcMotion implements DifferentiableNoiseDrivenMotion {
   }
 
   @Override
+  public Structure structure() {
+    return LINEAR;
+  }
+
+  @Override
   public void move(
       double[] state, double[] noise, double[] control, double time, double dt, double[] next) {
     double speed = control[0] + noise[0];
@@ -57,18 +66,20 @@ final class ArcMotion implements DifferentiableNoiseDrivenMotion {
   @Override
   public void moveJacobians(
       double[] state,
+      double[] noise,
       double[] control,
       double time,
       double dt,
       double[] byState,
       double[] byNoise) {
-    double u = control[1] * dt / 2;
+    double speed = control[0] + noise[0];
+    double u = (control[1] + noise[1]) * dt / 2;
     double cos = Math.cos(state[2] + u);
     double sin = Math.sin(state[2] + u);
     double along = TurnArc.along(u);
     double alongRate = TurnArc.alongDerivative(u);
-    double chord = control[0] * dt * along;
-    double byTurn = control[0] * dt * dt / 2;
+    double chord = speed * dt * along;
+    double byTurn = speed * dt * dt / 2;
     byState[0] = 1;
     byState[2] = -chord * sin;
     byState[4] = 1;

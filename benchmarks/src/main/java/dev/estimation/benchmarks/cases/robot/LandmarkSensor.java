@@ -1,5 +1,6 @@
 package dev.estimation.benchmarks.cases.robot;
 
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
@@ -11,6 +12,9 @@ import dev.estimation.filters.model.DifferentiableSensor;
  */
 final class LandmarkSensor implements DifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1).and(Space.angles(1));
+
+  /** The heading is subtracted from the bearing. */
+  private static final Structure LINEAR_IN_HEADING = Structure.UNKNOWN.withLinearInputs(2);
 
   private final double rangeDeviation;
   private final double bearingDeviation;
@@ -29,6 +33,11 @@ final class LandmarkSensor implements DifferentiableSensor {
   @Override
   public FlatSpace measurementSpace() {
     return SPACE;
+  }
+
+  @Override
+  public Structure structure() {
+    return LINEAR_IN_HEADING;
   }
 
   @Override

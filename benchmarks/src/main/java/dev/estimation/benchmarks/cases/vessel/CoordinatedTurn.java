@@ -2,6 +2,7 @@ package dev.estimation.benchmarks.cases.vessel;
 
 import dev.estimation.benchmarks.cases.motion.TurnArc;
 import dev.estimation.benchmarks.cases.motion.WhiteAcceleration;
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
@@ -15,6 +16,8 @@ import dev.estimation.filters.model.DifferentiableMotion;
 final class CoordinatedTurn implements DifferentiableMotion {
   private static final int DIMENSION = 5;
   private static final FlatSpace SPACE = Space.reals(DIMENSION);
+  private static final Structure LINEAR_BUT_FOR_RATE =
+      Structure.UNKNOWN.withLinearInputs(0, 1, 2, 3);
 
   private final double accelerationDensity;
   private final double turnDensity;
@@ -33,6 +36,11 @@ final class CoordinatedTurn implements DifferentiableMotion {
   @Override
   public FlatSpace stateSpace() {
     return SPACE;
+  }
+
+  @Override
+  public Structure structure() {
+    return LINEAR_BUT_FOR_RATE;
   }
 
   @Override

@@ -36,10 +36,10 @@ class RobotModelsTest {
   void jacobiansAreThoseOfTheMove(double turnRate) {
     double[] state = {2.5, -1.5, 3.1};
     double[] control = {0.086, turnRate};
-    double[] scales = {1, 1, 1};
     for (double dt : new double[] {1, 0.01}) {
-      double[] noiseScales = {1 / dt, 1 / dt};
-      ModelJacobians.noiseDriven(motion, state, control, dt, scales, noiseScales);
+      for (double[] noise : new double[][] {NO_NOISE, {0.3, -0.1}}) {
+        ModelJacobians.noiseDriven(motion, state, noise, control, dt, 1, 1, 1, 1 / dt, 1 / dt);
+      }
     }
   }
 

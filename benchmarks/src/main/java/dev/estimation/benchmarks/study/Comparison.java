@@ -18,20 +18,27 @@ final class Comparison {
   private final List<LoadedVariant> variants;
   private final List<Method> methods;
   private final boolean wholeState;
+  private final boolean squareRoot;
   private final boolean smooth;
 
   /**
    * A comparison, not yet run.
    *
    * @param wholeState whether points are drawn over the whole state
+   * @param squareRoot whether filters work in square-root form
    * @param smooth whether each run is followed by one of its smoothed track
    * @throws BadInputException if a method cannot serve a variant
    */
   Comparison(
-      List<LoadedVariant> variants, List<Method> methods, boolean wholeState, boolean smooth) {
+      List<LoadedVariant> variants,
+      List<Method> methods,
+      boolean wholeState,
+      boolean squareRoot,
+      boolean smooth) {
     this.variants = variants;
     this.methods = methods;
     this.wholeState = wholeState;
+    this.squareRoot = squareRoot;
     this.smooth = smooth;
     for (LoadedVariant variant : variants) {
       for (Method method : methods) {
@@ -52,7 +59,8 @@ final class Comparison {
   }
 
   private Optional<Replayer> replayer(LoadedVariant variant, Method method) {
-    FilterKind kind = wholeState ? method.kind().overWholeState() : method.kind();
+    FilterKind points = wholeState ? method.kind().overWholeState() : method.kind();
+    FilterKind kind = squareRoot ? points.inSquareRootForm() : points;
     return variant.scenario().map(scenario -> new Replayer(scenario, kind));
   }
 
@@ -83,6 +91,6 @@ final class Comparison {
 
   private LabelledRun labelled(
       LoadedVariant variant, Method method, boolean smoothed, Optional<RunResult> result) {
-    return new LabelledRun(variant, method.typed(), wholeState, smoothed, result);
+    return new LabelledRun(variant, method.typed(), wholeState, squareRoot, smoothed, result);
   }
 }

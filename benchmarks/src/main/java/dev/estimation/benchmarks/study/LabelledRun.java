@@ -10,6 +10,7 @@ import java.util.Optional;
  * @param variant of which log
  * @param method as typed
  * @param wholeState whether points were drawn over the whole state
+ * @param squareRoot whether the filter worked in square-root form
  * @param smoothed whether the track was smoothed
  * @param result empty if the log does not have the variant
  */
@@ -17,8 +18,10 @@ record LabelledRun(
     LoadedVariant variant,
     String method,
     boolean wholeState,
+    boolean squareRoot,
     boolean smoothed,
     Optional<RunResult> result) {
+  private static final String SQUARE_ROOT = " square-root";
   private static final String SMOOTHED = " smoothed";
 
   /** {@return how the run ended, in one line} */
@@ -27,17 +30,17 @@ record LabelledRun(
     return status.replaceAll("\\s+", " ");
   }
 
-  /** {@return the method, and that it was smoothed if it was} */
+  /** {@return the method, and that it was in square-root form or smoothed if it was} */
   String name() {
-    return smoothed ? method + SMOOTHED : method;
+    return method + (squareRoot ? SQUARE_ROOT : "") + (smoothed ? SMOOTHED : "");
   }
 
   /** {@return the longest name that a run of these methods can have} */
-  static int longestName(Iterable<Method> methods) {
+  static int longestName(Iterable<Method> methods, boolean squareRoot) {
     int longest = 0;
     for (Method method : methods) {
       longest = Math.max(longest, method.typed().length());
     }
-    return longest + SMOOTHED.length();
+    return longest + (squareRoot ? SQUARE_ROOT.length() : 0) + SMOOTHED.length();
   }
 }

@@ -42,6 +42,11 @@ final class ReplayCommand implements Callable<Integer> {
       description = "draw points over the whole state, not over active inputs alone")
   private boolean wholeState;
 
+  @Option(
+      names = "--square-root",
+      description = "carry factors of covariances, which keeps more digits")
+  private boolean squareRoot;
+
   @Option(names = "--smooth", description = "also smooth each run and report that")
   private boolean smooth;
 
@@ -63,9 +68,10 @@ final class ReplayCommand implements Callable<Integer> {
     ReplayCase replayed = new CaseOpener(caseName, log, uwb).open();
     List<LoadedVariant> loaded = load(replayed);
     ResultsFolder folder = ResultsFolder.prepare(out);
-    Comparison comparison = new Comparison(loaded, chosenMethods, wholeState, smooth);
+    Comparison comparison = new Comparison(loaded, chosenMethods, wholeState, squareRoot, smooth);
     PrintWriter console = spec.commandLine().getOut();
-    ResultTable table = new ResultTable(console, LabelledRun.longestName(chosenMethods));
+    ResultTable table =
+        new ResultTable(console, LabelledRun.longestName(chosenMethods, squareRoot));
     ResultsDocument document = new ResultsDocument(caseName, log);
     comparison.run(run -> {
       table.print(run);

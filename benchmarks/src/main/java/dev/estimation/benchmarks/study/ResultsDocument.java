@@ -40,6 +40,7 @@ final class ResultsDocument {
     node.put("variant", run.variant().name());
     node.put("method", run.method());
     node.put("wholeState", run.wholeState());
+    node.put("squareRoot", run.squareRoot());
     node.put("smoothed", run.smoothed());
     node.put("status", run.status());
     run.result()

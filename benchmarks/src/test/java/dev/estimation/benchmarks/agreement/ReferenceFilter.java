@@ -80,6 +80,11 @@ record ReferenceFilter(String name, FilterKind kind, boolean smoothed, Limits li
         .orElseThrow(() -> new AssertionError("no filter here for the expected " + name));
   }
 
+  /** {@return the same filter with factors of covariances in place of covariances} */
+  ReferenceFilter inSquareRootForm() {
+    return new ReferenceFilter(name, kind.inSquareRootForm(), smoothed, limits);
+  }
+
   private static FilterKind points(PointRule rule) {
     return FilterKind.of(PointMatching.of(rule));
   }

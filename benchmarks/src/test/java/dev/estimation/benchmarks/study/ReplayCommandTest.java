@@ -19,6 +19,7 @@ class ReplayCommandTest {
       "variant",
       "method",
       "wholeState",
+      "squareRoot",
       "smoothed",
       "status",
       "steps",
@@ -153,6 +154,7 @@ class ReplayCommandTest {
     StudyRun run = StudyRun.of("replay", "--help");
     assertEquals(0, run.code());
     assertTrue(run.out().contains("--whole-state"));
+    assertTrue(run.out().contains("--square-root"));
     assertFalse(Files.exists(folder.resolve("results")));
   }
 

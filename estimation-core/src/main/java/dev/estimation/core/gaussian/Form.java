@@ -3,8 +3,9 @@ package dev.estimation.core.gaussian;
 /** How covariances are carried from step to step. */
 public enum Form {
   /**
-   * The covariance itself: sums of squares, then a Cholesky factor. The cheaper form; directions whose
-   * standard deviations differ by more than 1e7 or so are lost to rounding, which is told by a status.
+   * The covariance itself: sums of squares, then a Cholesky factor. The cheaper form; where standard deviations of
+   * some directions are below 1e-8 of others, rounding decides: the smaller pass for zero, or a status says that
+   * the covariance is not positive semi-definite.
    */
   COVARIANCE,
   /**

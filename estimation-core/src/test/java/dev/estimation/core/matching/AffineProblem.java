@@ -76,7 +76,7 @@ final class AffineProblem {
     Space from = input.space();
     Space to = Space.reals(matrix.numRows);
     MatchingWorkspace work =
-        subject.matching(scales).workspace(from, to, subject.offered(function()));
+        subject.formed(scales).workspace(from, to, subject.offered(function()));
     Outcome outcome = Outcome.of(work, input, new double[0], noise);
     assertVector("mean", mean(), outcome.mean, subject.meanRounding(n, magnitude()), 1);
     double rounding = subject.covarianceRounding(n, magnitude(), deviation());

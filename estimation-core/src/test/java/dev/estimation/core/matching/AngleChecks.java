@@ -46,8 +46,8 @@ interface AngleChecks extends MatchingUnderTest {
       BentFunction bent = new BentFunction(3, 2, 22);
       double[] scales = MatchingUnderTest.unitScales(3);
       MatchingWorkspace straight =
-          matching(scales).workspace(Space.reals(3), Space.reals(2), offered(bent));
-      MatchingWorkspace turned = matching(scales)
+          formed(scales).workspace(Space.reals(3), Space.reals(2), offered(bent));
+      MatchingWorkspace turned = formed(scales)
           .workspace(Space.reals(3), Space.angles(2), offered(new TurnedFunction(bent, turn)));
       compare(Outcome.of(straight, input), Outcome.of(turned, input), turn);
     }
@@ -77,12 +77,12 @@ interface AngleChecks extends MatchingUnderTest {
       FlatSpace seam = Space.reals(1).and(Space.angles(1));
       double[] scales = {1, 1};
       Outcome wanted = Outcome.of(
-          matching(scales).workspace(Space.reals(2), Space.reals(2), offered(function)),
+          formed(scales).workspace(Space.reals(2), Space.reals(2), offered(function)),
           RandomGaussians.momentsOf(polar));
       Moments input = new Moments(seam);
       input.set(polar);
       Outcome got =
-          Outcome.of(matching(scales).workspace(seam, Space.reals(2), offered(function)), input);
+          Outcome.of(formed(scales).workspace(seam, Space.reals(2), offered(function)), input);
       assertVector("mean", wanted.mean, got.mean, meanRounding(2, MAGNITUDE), 1);
       double rounding = bentCovarianceRounding(2, MAGNITUDE, wanted.smallestDeviation());
       assertCovariance("covariance", wanted.covariance, got.covariance, rounding);
@@ -93,7 +93,7 @@ interface AngleChecks extends MatchingUnderTest {
   default void theFunctionSeesAnglesInRange() {
     FlatSpace seam = Space.reals(1).and(Space.angles(1));
     PolarToCartesian polar = new PolarToCartesian();
-    MomentMatching matching = matching(1, 1);
+    MomentMatching matching = formed(1, 1);
     Moments input = new Moments(seam);
     input.set(Gaussian.independent(new double[] {2, Math.PI - 0.01}, new double[] {0.1, 0.5}));
     PlainFunction watched = new PlainFunction((u, given, z) -> {
@@ -122,7 +122,7 @@ interface AngleChecks extends MatchingUnderTest {
   default void theMeanOfAnAngleIsInRange() {
     for (double raw : new double[] {Math.PI, -Math.PI, 7, -7, 100, Math.nextDown(Math.PI)}) {
       MatchingWorkspace work =
-          matching(1).workspace(Space.reals(1), Space.angles(1), offered(new TurnedBy(raw)));
+          formed(1).workspace(Space.reals(1), Space.angles(1), offered(new TurnedBy(raw)));
       Outcome outcome = Outcome.of(work, new Moments(Space.reals(1)));
       assertInRange(outcome.mean[0]);
       // 100 rad is 16 turns, each rounded by 2.4e-16.

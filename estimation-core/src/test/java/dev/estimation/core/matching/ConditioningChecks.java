@@ -28,7 +28,7 @@ interface ConditioningChecks extends MatchingUnderTest {
       AffineFunction function =
           new AffineFunction(DMatrixRMaj.wrap(2, 2, new double[] {1, 1, 1, -1}), 0, 0);
       MatchingWorkspace work =
-          matching(1, 1).workspace(Space.reals(2), Space.reals(2), offered(function));
+          formed(1, 1).workspace(Space.reals(2), Space.reals(2), offered(function));
       Outcome outcome = Outcome.of(work, RandomGaussians.momentsOf(value));
       double rounding = covarianceRounding(2, 1, 1);
       DMatrixRMaj got = outcome.covariance;
@@ -56,7 +56,7 @@ interface ConditioningChecks extends MatchingUnderTest {
       }
     }
     Moments input = RandomGaussians.momentsOf(Gaussian.of(mean, covariance));
-    MatchingWorkspace work = matching(deviation)
+    MatchingWorkspace work = formed(deviation)
         .workspace(
             Space.reals(n), Space.reals(n), offered(new AffineFunction(matrix, new double[n])));
     Outcome outcome = Outcome.of(work, input);

@@ -15,7 +15,7 @@ import org.junit.jupiter.api.Test;
 /** What a call costs, what it leaves alone, and that nothing of one call is felt in the next. */
 interface ConductChecks extends MatchingUnderTest {
   private MatchingWorkspace work(int n) {
-    return matching(MatchingUnderTest.unitScales(n))
+    return formed(MatchingUnderTest.unitScales(n))
         .workspace(Space.reals(n), Space.reals(2), offered(new BentFunction(n, 2, 41)));
   }
 
@@ -35,8 +35,8 @@ interface ConductChecks extends MatchingUnderTest {
   default void evaluationsFollowTheInputsCarried() {
     EmbeddedFunction function =
         new EmbeddedFunction(offered(new BentFunction(2, 2, 1)), 2, 4, 3, 0);
-    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(4))
-        .workspace(Space.reals(4), Space.reals(2), function);
+    MatchingWorkspace work =
+        formed(MatchingUnderTest.unitScales(4)).workspace(Space.reals(4), Space.reals(2), function);
     Outcome outcome = Outcome.of(work, new RandomGaussians(4).moments(4));
     assertEquals(evaluations(carried(2, 4)), work.evaluations());
     assertEquals(carried(2, 4), outcome.unitCross.numRows);

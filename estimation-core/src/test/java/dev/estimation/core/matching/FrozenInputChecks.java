@@ -37,8 +37,8 @@ interface FrozenInputChecks extends MatchingUnderTest {
 
   private Outcome carry(Gaussian input, VectorFunction function) {
     int n = input.dimension();
-    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(n))
-        .workspace(Space.reals(n), Space.reals(3), function);
+    MatchingWorkspace work =
+        formed(MatchingUnderTest.unitScales(n)).workspace(Space.reals(n), Space.reals(3), function);
     return Outcome.of(work, RandomGaussians.momentsOf(input));
   }
 

@@ -1,7 +1,13 @@
 package dev.estimation.core.matching;
 
+import static dev.estimation.testing.Agreement.assertMatrix;
+import static dev.estimation.testing.Agreement.assertSameBits;
+
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Form;
 import java.util.Arrays;
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
 
 /**
  * What a contract test has to know of a matching, and how far rounding may take its results.
@@ -17,6 +23,15 @@ interface MatchingUnderTest {
 
   /** The matching, with a scale for each input in case it takes differences. */
   MomentMatching matching(double... inputScales);
+
+  /** The form under test. */
+  Form form();
+
+  /** The matching, whose workspaces have the form under test. */
+  default MomentMatching formed(double... inputScales) {
+    MomentMatching matching = matching(inputScales);
+    return (input, output, function, other) -> matching.workspace(input, output, function, form());
+  }
 
   /** The function as this matching is to see it, e.g. without its Jacobian. */
   default VectorFunction offered(VectorFunction function) {
@@ -77,6 +92,19 @@ interface MatchingUnderTest {
   default double bentCovarianceRounding(int carried, double magnitude, double deviation) {
     double mean = ROUNDINGS * amplification(carried) * magnitude / deviation;
     return covarianceRounding(carried, magnitude, deviation) + 6 * mean;
+  }
+
+  /**
+   * Matrices of entries of order 1 that follow from the same numbers in another order of inputs: the same bits
+   * in covariance form; a factor that is reduced anew for that order has roundings of its own.
+   */
+  default void assertSame(String what, DMatrixRMaj expected, DMatrixRMaj actual, double rounding) {
+    if (form() == Form.COVARIANCE) {
+      assertSameBits(what, expected, actual);
+    } else {
+      double scale = Math.max(1, CommonOps_DDRM.elementMaxAbs(expected));
+      assertMatrix(what, expected, actual, rounding, scale);
+    }
   }
 
   /** Scales of 1 for every input. */

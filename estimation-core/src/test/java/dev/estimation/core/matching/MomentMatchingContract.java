@@ -1,6 +1,13 @@
 package dev.estimation.core.matching;
 
-/** What every matching owes. A new one gets all of it by a subclass of a few lines. */
+import dev.estimation.core.gaussian.Form;
+import org.junit.jupiter.params.Parameter;
+import org.junit.jupiter.params.ParameterizedClass;
+import org.junit.jupiter.params.provider.EnumSource;
+
+/** What every matching owes, in both forms. A new one gets all of it by a subclass of a few lines. */
+@ParameterizedClass
+@EnumSource(Form.class)
 abstract class MomentMatchingContract
     implements AffineChecks,
         ZeroVarianceChecks,
@@ -8,4 +15,12 @@ abstract class MomentMatchingContract
         ConductChecks,
         AngleChecks,
         RotationChecks,
-        ConditioningChecks {}
+        ConditioningChecks {
+  @Parameter
+  Form form;
+
+  @Override
+  public Form form() {
+    return form;
+  }
+}

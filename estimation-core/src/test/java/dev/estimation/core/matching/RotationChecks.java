@@ -42,7 +42,7 @@ interface RotationChecks extends MatchingUnderTest {
       double[] after = Rotations.random(random);
       Moments input = input(space, q, run);
       VectorFunction turned = offered(new Turned(before, after));
-      Outcome got = Outcome.of(matching(unitLengths(3)).workspace(space, space, turned), input);
+      Outcome got = Outcome.of(formed(unitLengths(3)).workspace(space, space, turned), input);
       double[] apart = new double[3];
       double[] wanted = Rotations.product(Rotations.product(before, q), after);
       space.difference(got.mean, wanted, apart);
@@ -82,7 +82,7 @@ interface RotationChecks extends MatchingUnderTest {
             .withHessian((u, given, h) -> {});
       }
     });
-    Outcome got = Outcome.of(matching(unitLengths(4)).workspace(space, rotation, second), input);
+    Outcome got = Outcome.of(formed(unitLengths(4)).workspace(space, rotation, second), input);
     DMatrixRMaj cross = CommonOps_DDRM.extract(input.covariance(), 0, 4, 1, 4);
     DMatrixRMaj wanted = CommonOps_DDRM.extract(input.covariance(), 1, 4, 1, 4);
     double rounding = covarianceRounding(carried(3, 4), LARGEST, got.smallestDeviation());

@@ -25,7 +25,7 @@ interface WholeInputChecks extends MatchingUnderTest {
     AffineFunction affine = new AffineFunction(random.matrix(2, 2), random.vector(2));
     EmbeddedFunction function = new EmbeddedFunction(offered(affine), 2, 5, 3, 1);
     Outcome part = carry(overActiveInputs(), input, function, 2);
-    Outcome whole = carry(matching(MatchingUnderTest.unitScales(5)), input, function, 5);
+    Outcome whole = carry(formed(MatchingUnderTest.unitScales(5)), input, function, 5);
     assertVector("mean", part.mean, whole.mean, meanRounding(5, 10), 1);
     double rounding = covarianceRounding(5, 10, part.smallestDeviation());
     assertCovariance("covariance", part.covariance, whole.covariance, rounding);

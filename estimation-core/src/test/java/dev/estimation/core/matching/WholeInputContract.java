@@ -1,8 +1,14 @@
 package dev.estimation.core.matching;
 
 import dev.estimation.core.function.VectorFunction;
+import dev.estimation.core.gaussian.Form;
+import org.junit.jupiter.params.Parameter;
+import org.junit.jupiter.params.ParameterizedClass;
+import org.junit.jupiter.params.provider.EnumSource;
 
-/** The contract for matchings over the whole input, whatever a function reads. */
+/** The contract for matchings over the whole input, whatever a function reads, in both forms. */
+@ParameterizedClass
+@EnumSource(Form.class)
 abstract class WholeInputContract
     implements AffineChecks,
         ZeroVarianceChecks,
@@ -10,6 +16,14 @@ abstract class WholeInputContract
         AngleChecks,
         ConditioningChecks,
         WholeInputChecks {
+  @Parameter
+  Form form;
+
+  @Override
+  public Form form() {
+    return form;
+  }
+
   /** The same matching, over the inputs that are read. */
   abstract MatchingUnderTest narrow();
 

@@ -47,13 +47,14 @@ interface ZeroVarianceChecks extends MatchingUnderTest {
     Moments input = RandomGaussians.momentsOf(frozen(random.gaussian(n), (1 << n) - 1));
     BentFunction function = new BentFunction(n, 3, 6);
     DMatrixRMaj noise = random.covariance(3);
-    MatchingWorkspace work = matching(MatchingUnderTest.unitScales(n))
+    MatchingWorkspace work = formed(MatchingUnderTest.unitScales(n))
         .workspace(Space.reals(n), Space.reals(3), offered(function));
     Outcome outcome = Outcome.of(work, input, given, noise);
     double[] image = new double[3];
     function.evaluate(input.mean(), given, image);
     assertSameBits("mean", image, outcome.mean);
-    assertSameBits("covariance", noise, outcome.covariance);
+    // In square-root form the factor of the noise, squared: 1e-14, a few roundings.
+    assertSame("covariance", noise, outcome.covariance, 1e-14);
     DMatrixRMaj cross = outcome.cross();
     for (int i = 0; i < cross.getNumElements(); i++) {
       assertEquals(0, Math.abs(cross.data[i]), "cross-covariance entry " + i);

@@ -69,6 +69,15 @@ public final class Estimate {
     return moments.toGaussian();
   }
 
+  /**
+   * Copies mean and covariance, with the factor if there is one; allocates nothing.
+   *
+   * @param target of the same space, filled
+   */
+  public void copyInto(Moments target) {
+    target.set(moments);
+  }
+
   Moments moments() {
     return moments;
   }

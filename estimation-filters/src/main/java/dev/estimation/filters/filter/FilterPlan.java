@@ -137,8 +137,9 @@ public final class FilterPlan {
 
   /**
    * This plan in square-root form: estimates carry a lower factor instead of the covariance, which keeps
-   * twice the digits. Take it where standard deviations differ by many powers of ten or measurements are far
-   * more accurate than the estimate; a step costs somewhat more.
+   * twice the digits, in a smoother too. Take it where standard deviations of directions differ by more than 1e6 or
+   * so, e.g. after measurements far more accurate than the estimate in a motion of little noise: there the
+   * covariance form may be wrong without a word. A step costs somewhat more.
    *
    * @return the plan in square-root form
    */

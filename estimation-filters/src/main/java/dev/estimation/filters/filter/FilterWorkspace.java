@@ -1,8 +1,10 @@
 package dev.estimation.filters.filter;
 
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
 import dev.estimation.filters.model.SensorModel;
+import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -132,6 +134,26 @@ public final class FilterWorkspace {
       throw new IllegalArgumentException(
           "cross must be " + d + " x " + d + ", got " + cross.numRows + " x " + cross.numCols);
     }
+    requireMoved(estimate);
+    transition.crossCovariance(cross);
+    return transition.output();
+  }
+
+  /**
+   * A root of the joint covariance of the state after and before the last prediction that moved an estimate in
+   * time: [W' L 0; B 0 E] with as many rows again as the state has components. P' = W'W + L L', C = B W, P = B B'
+   * + E E'. Allocates.
+   *
+   * @param estimate that was moved, and has not been moved since
+   * @return the root; none in covariance form, or where negative weights leave none
+   * @throws IllegalStateException as for {@link #prediction}
+   */
+  public Optional<DMatrixRMaj> jointRoot(Estimate estimate) {
+    requireMoved(estimate);
+    return plan.form() == Form.SQUARE_ROOT ? transition.jointRoot() : Optional.empty();
+  }
+
+  private void requireMoved(Estimate estimate) {
     if (moved != estimate || movedTo != estimate.time()) {
       throw new IllegalStateException("the last prediction of this workspace must have moved the"
           + " estimate to t = " + estimate.time() + " s, it "
@@ -139,8 +161,6 @@ public final class FilterWorkspace {
               ? "moved none"
               : "moved " + (moved == estimate ? "it" : "another") + " to t = " + movedTo + " s"));
     }
-    transition.crossCovariance(cross);
-    return transition.output();
   }
 
   /** {@return the time (s) from which the last prediction went that moved an estimate; NaN if none} */

@@ -4,7 +4,9 @@ import dev.estimation.core.gaussian.Covariance;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.matching.MatchingStatus;
 import dev.estimation.core.matching.MatchingWorkspace;
+import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
 
 /** One thread's way of carrying an estimate over a time, whichever way the noise enters. */
 abstract class Transition {
@@ -75,6 +77,29 @@ abstract class Transition {
         cross.data[r * d + c] = sum;
       }
     }
+  }
+
+  /** [W' L 0; B 0 E] over the rows of the state, L the factor of what the input does not explain; none if T has none. */
+  final Optional<DMatrixRMaj> jointRoot() {
+    Covariance rest = matching.unexplained();
+    if (!rest.factor()) {
+      return Optional.empty();
+    }
+    int d = rest.dimension();
+    int k = matching.activeInputs();
+    DMatrixRMaj w = matching.unitCrossCovariance();
+    DMatrixRMaj input = matching.inputFactor();
+    int n = input.numCols;
+    DMatrixRMaj root = new DMatrixRMaj(2 * d, n + d);
+    CommonOps_DDRM.extract(input, 0, d, 0, k, root, d, 0);
+    CommonOps_DDRM.extract(input, 0, d, k, n, root, d, k + d);
+    CommonOps_DDRM.insert(rest.lowerFactor(), root, 0, k);
+    for (int c = 0; c < d; c++) {
+      for (int a = 0; a < k; a++) {
+        root.set(c, a, w.get(a, c));
+      }
+    }
+    return Optional.of(root);
   }
 
   final String name() {

@@ -1,57 +1,69 @@
 package dev.estimation.filters.smoother;
 
+import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Checks;
+import dev.estimation.core.internal.Householder;
 import dev.estimation.core.internal.LowerFactor;
 import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.space.Space;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 
-/** One step of the smoother backwards, in place. Owns its scratch; confined to one thread. */
+/** Steps of the smoother backwards, from the last filtered estimate. Owns its scratch; confined to one thread. */
 final class BackwardStep {
   private final Space space;
   private final int d;
+  private final Moments smoothed;
   private final LowerFactor factor;
   private final DMatrixRMaj gain;
   private final DMatrixRMaj change;
   private final DMatrixRMaj product;
-  private final double[] difference;
-  private final double[] correction;
+  private final DMatrixRMaj difference;
+  private final DMatrixRMaj correction;
 
-  BackwardStep(Space space) {
-    this.space = space;
+  BackwardStep(Moments last) {
+    this.space = last.space();
     this.d = space.dimension();
+    this.smoothed = new Moments(space);
+    smoothed.set(last);
     this.factor = new LowerFactor(d);
     this.gain = new DMatrixRMaj(d, d);
     this.change = new DMatrixRMaj(d, d);
     this.product = new DMatrixRMaj(d, d);
-    this.difference = new double[d];
-    this.correction = new double[d];
+    this.difference = new DMatrixRMaj(d, 1);
+    this.correction = new DMatrixRMaj(d, 1);
   }
 
-  /** Smooths step k of the track, given that step k + 1 is smoothed. */
-  void smooth(SmoothedTrack track, int k, RecordedStep next) {
-    fillGain(next);
-    double[] mean = track.meanArray(k);
-    space.difference(track.meanArray(k + 1), next.predicted().mean(), difference);
-    for (int r = 0; r < d; r++) {
-      double sum = 0;
-      for (int c = 0; c < d; c++) {
-        sum += gain.data[r * d + c] * difference[c];
-      }
-      correction[r] = sum;
+  /** The estimate smoothed last. */
+  Moments smoothed() {
+    return smoothed;
+  }
+
+  /** Smooths a step, given that the next is smoothed. */
+  void smooth(RecordedStep step, RecordedStep next) {
+    Conditional conditional = next.conditional();
+    if (conditional == null) {
+      fillGain(next);
+    } else {
+      gain.setTo(conditional.gain());
     }
-    space.displace(mean, correction, mean);
-    addCovariance(track.covarianceMatrix(k), track.covarianceMatrix(k + 1), next);
-    if (!Checks.allFinite(mean) || SymmetricMatrix.firstNotFinite(track.covarianceMatrix(k)) >= 0) {
-      throw new ArithmeticException(
-          "smoothed estimate is not finite at t = " + track.time(k) + " s");
+    space.difference(smoothed.mean(), next.predictedMean(), difference.data);
+    CommonOps_DDRM.mult(gain, difference, correction);
+    if (conditional == null) {
+      addCovariance(step.filtered().covariance(), next.predicted());
+    } else {
+      spread(conditional.rest(), next);
+    }
+    space.displace(step.filtered().mean(), correction.data, smoothed.changeMean());
+    if (!Checks.allFinite(smoothed.mean())
+        || SymmetricMatrix.firstNotFinite(smoothed.covariance()) >= 0) {
+      throw new ArithmeticException("smoothed estimate is not finite at t = " + step.time() + " s");
     }
   }
 
   /** G = C P'^-1, row by row, by solving against the factor of P'. */
   private void fillGain(RecordedStep next) {
-    if (!factor.factorSemidefinite(next.predicted().covariance())) {
+    if (!factor.factorSemidefinite(next.predicted())) {
       throw new ArithmeticException("predicted covariance is not positive semi-definite: "
           + factor.failure() + " (at t = " + next.time() + " s)");
     }
@@ -61,10 +73,12 @@ final class BackwardStep {
     }
   }
 
-  /** P += G (P_s+ - P') G', symmetric by construction. */
-  private void addCovariance(DMatrixRMaj covariance, DMatrixRMaj smoothedNext, RecordedStep next) {
-    CommonOps_DDRM.subtract(smoothedNext, next.predicted().covariance(), change);
+  /** P + G (P_s+ - P') G', symmetric by construction. */
+  private void addCovariance(DMatrixRMaj filtered, DMatrixRMaj predicted) {
+    CommonOps_DDRM.subtract(smoothed.covariance(), predicted, change);
     CommonOps_DDRM.mult(gain, change, product);
+    DMatrixRMaj covariance = smoothed.changeCovariance();
+    covariance.setTo(filtered);
     for (int r = 0; r < d; r++) {
       for (int c = 0; c <= r; c++) {
         double sum = 0;
@@ -75,5 +89,17 @@ final class BackwardStep {
       }
     }
     SymmetricMatrix.mirrorLower(covariance);
+  }
+
+  /** F F' + G P_s+ G', by reduction of [F, G S_s+]. */
+  private void spread(DMatrixRMaj rest, RecordedStep next) {
+    if (!smoothed.factor()) {
+      throw new ArithmeticException("smoothed covariance is not positive semi-definite: "
+          + smoothed.factorFailure() + " (at t = " + next.time() + " s)");
+    }
+    CommonOps_DDRM.mult(gain, smoothed.lowerFactor(), product);
+    DMatrixRMaj lower = smoothed.changeFactor();
+    lower.setTo(rest);
+    Householder.reduceLower(lower.data, d, product.data, d, d);
   }
 }

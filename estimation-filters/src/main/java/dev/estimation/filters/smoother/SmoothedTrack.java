@@ -1,8 +1,8 @@
 package dev.estimation.filters.smoother;
 
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.space.Space;
-import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -15,18 +15,18 @@ public final class SmoothedTrack {
   private final double[][] means;
   private final DMatrixRMaj[] covariances;
 
-  SmoothedTrack(Space space, List<RecordedStep> steps) {
+  SmoothedTrack(Space space, int size) {
     this.space = space;
-    int count = steps.size();
-    this.times = new double[count];
-    this.means = new double[count][];
-    this.covariances = new DMatrixRMaj[count];
-    for (int k = 0; k < count; k++) {
-      RecordedStep step = steps.get(k);
-      times[k] = step.time();
-      means[k] = step.filtered().mean();
-      covariances[k] = step.filtered().covariance();
-    }
+    this.times = new double[size];
+    this.means = new double[size][];
+    this.covariances = new DMatrixRMaj[size];
+  }
+
+  /** Sets a step; copies the moments. */
+  void set(int step, double time, Moments smoothed) {
+    times[step] = time;
+    means[step] = smoothed.mean().clone();
+    covariances[step] = smoothed.covariance().copy();
   }
 
   /** {@return the number of steps} */
@@ -72,13 +72,5 @@ public final class SmoothedTrack {
    */
   public Gaussian gaussian(int step) {
     return Gaussian.of(space, means[step], covariances[step]);
-  }
-
-  double[] meanArray(int step) {
-    return means[step];
-  }
-
-  DMatrixRMaj covarianceMatrix(int step) {
-    return covariances[step];
   }
 }

@@ -16,6 +16,7 @@ import dev.estimation.filters.consistency.ChiSquareBounds;
 import dev.estimation.filters.consistency.NormalisedError;
 import dev.estimation.filters.testing.Attitude;
 import dev.estimation.filters.testing.AttitudeRun;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import java.util.List;
 import org.junit.jupiter.api.Named;
@@ -24,7 +25,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** A state of a unit quaternion and a bias: 7 numbers, 6 dimensions. */
-class AttitudeFilterTest {
+class AttitudeFilterTest extends BothForms {
   private static final double[] STATE = {0.5, -0.5, 0.5, 0.5, 0.01, -0.02, 0.03};
   private static final double[] SCALES = {1, 1, 1, 1, 1, 1};
 
@@ -78,7 +79,7 @@ class AttitudeFilterTest {
     NormalisedError error = NormalisedError.of(Attitude.SPACE, 0, 1, 2, 3, 4, 5);
     double[] sums = new double[AttitudeRun.STEPS + 1];
     for (int seed = 0; seed < runs; seed++) {
-      AttitudeRun run = new AttitudeRun(matching, 0.2, seed);
+      AttitudeRun run = new AttitudeRun(matching, form, 0.2, seed);
       for (int k = 1; k <= AttitudeRun.STEPS; k++) {
         run.step(k);
         sums[k] += error.squaredFrom(run.estimate().toGaussian(), run.truth());
@@ -94,8 +95,9 @@ class AttitudeFilterTest {
   /** The same measurements; for a spread of 0.01 rad, curvature moves the result by 1 % of it at most. */
   @Test
   void linearisedAndUnscentedAgreeForSmallSpreads() {
-    AttitudeRun linear = new AttitudeRun(Linearisation.firstOrder(), 0.01, 7);
-    AttitudeRun points = new AttitudeRun(PointMatching.of(UnscentedRule.scaled(1, 2, 0)), 0.01, 7);
+    AttitudeRun linear = new AttitudeRun(Linearisation.firstOrder(), form, 0.01, 7);
+    AttitudeRun points =
+        new AttitudeRun(PointMatching.of(UnscentedRule.scaled(1, 2, 0)), form, 0.01, 7);
     for (int k = 1; k <= AttitudeRun.STEPS; k++) {
       linear.step(k);
       points.step(k);
@@ -115,7 +117,7 @@ class AttitudeFilterTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void measuredAttitudesAreAveraged(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new Attitude.Gyroscopes(0.01, 0.001), matching);
+    FilterPlan plan = formed(FilterPlan.of(new Attitude.Gyroscopes(0.01, 0.001), matching));
     StackedPort cameras = plan.workspace().port(new Attitude.Camera(0.01), 2);
     double[] mean = {1, 0, 0, 0, 0, 0, 0};
     Estimate estimate = plan.start(

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.ChainMotion;
 import dev.estimation.filters.testing.ChainSight;
 import dev.estimation.filters.testing.Matchings;
@@ -17,7 +18,7 @@ import org.junit.jupiter.params.provider.Arguments;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** A step allocates nothing: prediction and update, every matching, several sizes. */
-class FilterAllocationTest {
+class FilterAllocationTest extends BothForms {
   static List<Arguments> cases() {
     return IntStream.of(2, 5, 6, 7, 8, 12, 20)
         .boxed()
@@ -36,7 +37,7 @@ class FilterAllocationTest {
   @MethodSource("cases")
   void stepsAllocateNothing(int n, MomentMatching matching) {
     ChainMotion motion = new ChainMotion(n);
-    FilterPlan plan = FilterPlan.of(motion, matching).withGate(0.999999);
+    FilterPlan plan = formed(FilterPlan.of(motion, matching)).withGate(0.999999);
     FilterWorkspace work = plan.workspace();
     SensorPort port = work.port(new ChainSight(n));
     double[] deviations = new double[n];

@@ -11,6 +11,7 @@ import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Models;
 import dev.estimation.filters.testing.RandomWalk;
 import java.util.List;
@@ -22,7 +23,7 @@ import org.junit.jupiter.params.provider.MethodSource;
  * Iterated updates against worked examples: the maximum of the posterior density, found at extended
  * precision with a gradient of 7e-33 by an independent program, and its Gauss-Newton covariance.
  */
-class IteratedUpdateTest {
+class IteratedUpdateTest extends BothForms {
   private static final Gaussian PLANE =
       Gaussian.of(new double[] {10, 5}, new double[][] {{4, 1}, {1, 9}});
   private static final double[] SIGHT = {12.3, 0.6};
@@ -34,14 +35,14 @@ class IteratedUpdateTest {
         IteratedUpdate.lineSearch().withTolerance(1e-14));
   }
 
-  private static SensorPort port(int dimension, IteratedUpdate iteration, DifferentiableSensor s) {
-    return FilterPlan.iteratedExtended(new RandomWalk(dimension, 1), iteration)
+  private SensorPort port(int dimension, IteratedUpdate iteration, DifferentiableSensor s) {
+    return formed(FilterPlan.iteratedExtended(new RandomWalk(dimension, 1), iteration))
         .workspace()
         .port(s);
   }
 
-  private static Estimate start(Gaussian prior) {
-    return FilterPlan.extended(new RandomWalk(prior.dimension(), 1)).start(0, prior);
+  private Estimate start(Gaussian prior) {
+    return formed(FilterPlan.extended(new RandomWalk(prior.dimension(), 1))).start(0, prior);
   }
 
   /** 1e-12 standard deviations (2 m, 3 m): the tolerance asked of the iteration is 1e-14. */
@@ -91,7 +92,7 @@ class IteratedUpdateTest {
   /** Gate, NIS and likelihood come from the first linearisation. */
   @Test
   void innovationIsThatOfThePrediction() {
-    SensorPort once = FilterPlan.extended(new RandomWalk(2, 1))
+    SensorPort once = formed(FilterPlan.extended(new RandomWalk(2, 1)))
         .workspace()
         .port(new Models.RangeBearing(0.01, 0.0004));
     SensorPort often = port(2, IteratedUpdate.undamped(), new Models.RangeBearing(0.01, 0.0004));

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Position;
 import dev.estimation.filters.testing.RandomWalk;
@@ -19,7 +20,7 @@ import org.junit.jupiter.params.provider.MethodSource;
  * update takes a variance of 1e7 down to 15076, which multiplies its few roundings by 663; the values
  * are printed to 17 digits.
  */
-class NileTest {
+class NileTest extends BothForms {
   private static final double TOLERANCE = 4e-12;
 
   static List<Named<MomentMatching>> matchings() {
@@ -53,11 +54,11 @@ class NileTest {
     assertRelative("log-likelihood", -632.5456251156737, logLikelihood, TOLERANCE);
   }
 
-  private static FilterPlan plan(MomentMatching matching) {
-    return FilterPlan.of(new RandomWalk(1, 1469.1), matching);
+  private FilterPlan plan(MomentMatching matching) {
+    return formed(FilterPlan.of(new RandomWalk(1, 1469.1), matching));
   }
 
-  private static double follow(
+  private double follow(
       MomentMatching matching, ReferenceTable table, double mean, double variance, String column) {
     FilterPlan plan = plan(matching);
     Gaussian prior = Gaussian.of(new double[] {mean}, new double[][] {{variance}});

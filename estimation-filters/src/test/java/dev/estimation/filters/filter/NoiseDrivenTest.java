@@ -12,6 +12,7 @@ import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
 import dev.estimation.testing.RandomGaussians;
@@ -25,7 +26,7 @@ import org.junit.jupiter.params.provider.Arguments;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Noise inside the motion. */
-class NoiseDrivenTest {
+class NoiseDrivenTest extends BothForms {
   static List<Named<MomentMatching>> matchings() {
     return Matchings.all();
   }
@@ -56,9 +57,9 @@ class NoiseDrivenTest {
     }
   }
 
-  private static Estimate predicted(
+  private Estimate predicted(
       dev.estimation.filters.model.Motion motion, MomentMatching matching, Gaussian prior) {
-    FilterPlan plan = FilterPlan.of(motion, matching);
+    FilterPlan plan = formed(FilterPlan.of(motion, matching));
     Estimate estimate = plan.start(0, prior);
     assertEquals(StepStatus.APPLIED, plan.workspace().predict(estimate, 1));
     return estimate;
@@ -76,8 +77,8 @@ class NoiseDrivenTest {
   void indefiniteNoiseIsRefused() {
     DMatrixRMaj q = new DMatrixRMaj(new double[][] {{1, 2}, {2, 1}});
     RandomGaussians random = new RandomGaussians(4);
-    FilterPlan plan = FilterPlan.cubature(
-        new Models.LinearNoiseDriven(random.matrix(3, 3), random.matrix(3, 2), q));
+    FilterPlan plan = formed(FilterPlan.cubature(
+        new Models.LinearNoiseDriven(random.matrix(3, 3), random.matrix(3, 2), q)));
     Estimate estimate = plan.start(0, random.gaussian(3));
     long[] before = Bits.of(estimate, 3);
     FilterWorkspace work = plan.workspace();
@@ -99,11 +100,11 @@ class NoiseDrivenTest {
     RandomGaussians random = new RandomGaussians(6);
     Gaussian prior = random.gaussian(3);
     Bent bent = new Bent(random.covariance(2));
-    FilterPlan plan = FilterPlan.of(bent, named.getPayload());
+    FilterPlan plan = formed(FilterPlan.of(bent, named.getPayload()));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, prior);
     assertEquals(StepStatus.APPLIED, work.predict(estimate, 1));
-    FilterPlan exact = FilterPlan.of(bent, Linearisation.firstOrder().overWholeInput());
+    FilterPlan exact = formed(FilterPlan.of(bent, Linearisation.firstOrder().overWholeInput()));
     boolean linear = Matchings.isLinear(named);
     assertEquals(Matchings.jacobians(named, 2, 5), work.jacobians());
     if (linear) {
@@ -123,8 +124,8 @@ class NoiseDrivenTest {
   @Test
   void evaluationsCountStateAndNoise() {
     RandomGaussians random = new RandomGaussians(5);
-    FilterPlan plan = FilterPlan.cubature(new Models.LinearNoiseDriven(
-        random.matrix(3, 3), random.matrix(3, 2), random.covariance(2)));
+    FilterPlan plan = formed(FilterPlan.cubature(new Models.LinearNoiseDriven(
+        random.matrix(3, 3), random.matrix(3, 2), random.covariance(2))));
     FilterWorkspace work = plan.workspace();
     assertEquals(StepStatus.APPLIED, work.predict(plan.start(0, random.gaussian(3)), 1));
     assertEquals(2 * 5 + 1, work.evaluations());

@@ -9,6 +9,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
 import dev.estimation.filters.testing.Position;
@@ -20,7 +21,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Several rows of one sensor as one update. */
-class StackedPortTest {
+class StackedPortTest extends BothForms {
   private static final double[] PLACES = {0, 0, 0.04, 40, 0, 0.09, 0, 30, 0.01};
   private static final double[] DISTANCES = {22.5, 29.1, 25.2};
 
@@ -36,7 +37,7 @@ class StackedPortTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void linearRowsMayBeStacked(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new RandomWalk(2, 1), matching);
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
     StackedPort stacked = plan.workspace().port(new Position(2, 0.5), 3);
     SensorPort single = plan.workspace().port(new Position(2, 0.5));
     Estimate together = plan.start(0, prior());
@@ -60,7 +61,7 @@ class StackedPortTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void rowsMayVary(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new RandomWalk(2, 1), matching);
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
     StackedPort port = plan.workspace().port(new Models.Distance(), 3);
     Estimate one = plan.start(0, prior());
     Estimate two = plan.start(0, prior());
@@ -80,7 +81,7 @@ class StackedPortTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void oneRowIsAPlainUpdate(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new RandomWalk(2, 1), matching);
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
     Estimate stacked = plan.start(0, prior());
     Estimate plain = plan.start(0, prior());
     double[] place = {40, 0, 0.09};
@@ -94,7 +95,7 @@ class StackedPortTest {
 
   @Test
   void badRowsAreToldApart() {
-    FilterPlan plan = FilterPlan.cubature(new RandomWalk(2, 1));
+    FilterPlan plan = formed(FilterPlan.cubature(new RandomWalk(2, 1)));
     StackedPort port = plan.workspace().port(new Models.Distance(), 3);
     Estimate estimate = plan.start(0, prior());
     long[] before = Bits.of(estimate, 2);

@@ -12,6 +12,7 @@ import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.RandomWalk;
 import java.util.List;
@@ -23,7 +24,7 @@ import org.junit.jupiter.params.provider.MethodSource;
 /**
  * Two rows of two components, one an angle, against the same four components written out by hand.
  */
-class StackedSightsTest {
+class StackedSightsTest extends BothForms {
   /** Place, variances of range and bearing, their covariance; both places lie east of the state. */
   private static final double[] SIGHTS = {
     40, 12.5, 0.04, 0.0009, 0.003, 60, 11, 0.25, 0.0001, -0.002
@@ -39,8 +40,8 @@ class StackedSightsTest {
     return Matchings.all();
   }
 
-  private static FilterPlan plan(MomentMatching matching) {
-    return FilterPlan.of(new RandomWalk(3, 1), matching);
+  private FilterPlan plan(MomentMatching matching) {
+    return formed(FilterPlan.of(new RandomWalk(3, 1), matching));
   }
 
   private static Gaussian prior() {

@@ -13,6 +13,7 @@ import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.model.SensorModel;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.ConstantVelocity;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Pendulum;
@@ -30,7 +31,7 @@ import org.junit.jupiter.params.provider.MethodSource;
  * Filtered means and covariances, step by step, on fixed measurement files. 1e-9 standard deviations
  * (products of them): what two programs of the same equations share after this many steps.
  */
-class TraceTest {
+class TraceTest extends BothForms {
   private static final double TOLERANCE = 1e-9;
 
   static List<Named<MomentMatching>> matchings() {
@@ -143,7 +144,7 @@ class TraceTest {
     return List.of(Arguments.of("values", 1e-5), Arguments.of("Jacobians", 1e-8));
   }
 
-  private static double follow(
+  private double follow(
       String trace,
       String rule,
       MomentMatching matching,
@@ -156,7 +157,7 @@ class TraceTest {
         ReferenceTable.read("trace_" + trace + "_data.csv").rows();
     List<ReferenceTable.Row> expected =
         ReferenceTable.read("trace_" + trace + "_results.csv").rowsWhere("rule", rule);
-    FilterPlan plan = FilterPlan.of(motion, matching);
+    FilterPlan plan = formed(FilterPlan.of(motion, matching));
     FilterWorkspace work = plan.workspace();
     SensorPort port = work.port(sensor);
     Estimate estimate = plan.start(0, prior);

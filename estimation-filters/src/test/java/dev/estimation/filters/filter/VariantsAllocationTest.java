@@ -7,6 +7,7 @@ import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
 import dev.estimation.filters.testing.Attitude;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.ChainMotion;
 import dev.estimation.filters.testing.ChainSight;
 import dev.estimation.filters.testing.Matchings;
@@ -20,7 +21,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** The less common steps allocate nothing either. */
-class VariantsAllocationTest {
+class VariantsAllocationTest extends BothForms {
   private static final double[] PLACES = {0, 0, 0.04, 40, 0, 0.09, 0, 30, 0.01};
   private static final double[] DISTANCES = {22.5, 29.1, 25.2};
 
@@ -37,7 +38,7 @@ class VariantsAllocationTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void stackedRowsOfVaryingNumber(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new RandomWalk(2, 1), matching);
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
     FilterWorkspace work = plan.workspace();
     StackedPort port = work.port(new Models.Distance(), 3);
     Estimate estimate =
@@ -53,7 +54,7 @@ class VariantsAllocationTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void noiseInside(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new Carriage(), matching);
+    FilterPlan plan = formed(FilterPlan.of(new Carriage(), matching));
     FilterWorkspace work = plan.workspace();
     Estimate estimate =
         plan.start(0, Gaussian.independent(new double[3], new double[] {1, 1, 0.1}));
@@ -68,7 +69,7 @@ class VariantsAllocationTest {
   @MethodSource("matchings")
   void quaternions(MomentMatching matching) {
     double[] state = {0.5, -0.5, 0.5, 0.5, 0.01, -0.02, 0.03};
-    FilterPlan plan = FilterPlan.of(new Attitude.Gyroscopes(0.01, 0.001), matching);
+    FilterPlan plan = formed(FilterPlan.of(new Attitude.Gyroscopes(0.01, 0.001), matching));
     FilterWorkspace work = plan.workspace();
     SensorPort direction = work.port(new Attitude.Direction(0.1));
     SensorPort camera = work.port(new Attitude.Camera(0.1));
@@ -93,7 +94,7 @@ class VariantsAllocationTest {
   void iteratedUpdates() {
     for (IteratedUpdate iteration :
         List.of(IteratedUpdate.undamped(), IteratedUpdate.lineSearch())) {
-      FilterPlan plan = FilterPlan.iteratedExtended(new ChainMotion(5), iteration);
+      FilterPlan plan = formed(FilterPlan.iteratedExtended(new ChainMotion(5), iteration));
       FilterWorkspace work = plan.workspace();
       SensorPort port = work.port(new ChainSight(5));
       Estimate estimate = plan.start(

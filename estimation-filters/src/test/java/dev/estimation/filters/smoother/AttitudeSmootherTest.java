@@ -9,6 +9,7 @@ import dev.estimation.filters.consistency.ChiSquareBounds;
 import dev.estimation.filters.consistency.NormalisedError;
 import dev.estimation.filters.testing.Attitude;
 import dev.estimation.filters.testing.AttitudeRun;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import java.util.ArrayList;
 import java.util.List;
@@ -17,7 +18,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** A quaternion and a bias through the fixed-interval smoother. */
-class AttitudeSmootherTest {
+class AttitudeSmootherTest extends BothForms {
   private static final int RUNS = 60;
 
   static List<Named<MomentMatching>> matchings() {
@@ -38,7 +39,7 @@ class AttitudeSmootherTest {
     double[] smoothed = new double[2];
     double nees = 0;
     for (int seed = 0; seed < RUNS; seed++) {
-      AttitudeRun run = new AttitudeRun(matching, 0.2, 100 + seed);
+      AttitudeRun run = new AttitudeRun(matching, form, 0.2, 100 + seed);
       FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(run.estimate());
       List<double[]> truths = new ArrayList<>(List.of(run.truth()));
       List<Gaussian> estimates = new ArrayList<>(List.of(run.estimate().toGaussian()));

@@ -12,6 +12,7 @@ import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.FilterWorkspace;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
 import dev.estimation.filters.testing.RandomWalk;
@@ -24,7 +25,7 @@ import org.junit.jupiter.api.Test;
  * On linear models the smoother is the solution of one large least-squares problem over all states,
  * solved here by EJML's normal equations: a second route to the same numbers.
  */
-class BatchLeastSquaresTest {
+class BatchLeastSquaresTest extends BothForms {
   private static final int STEPS = 6;
 
   /** 500 random models, seeds fixed; the matchings take turns. 1e-8: the normal equations square the condition. */
@@ -36,7 +37,7 @@ class BatchLeastSquaresTest {
     }
   }
 
-  private static void check(int seed, MomentMatching matching) {
+  private void check(int seed, MomentMatching matching) {
     RandomGaussians random = new RandomGaussians(seed);
     int d = 1 + seed % 4;
     int m = 1 + seed % 2;
@@ -46,7 +47,7 @@ class BatchLeastSquaresTest {
     DMatrixRMaj h = random.matrix(m, d);
     DMatrixRMaj r = random.covariance(m);
     Gaussian prior = random.gaussian(d);
-    FilterPlan plan = FilterPlan.of(new Models.LinearMotion(f, q), matching);
+    FilterPlan plan = formed(FilterPlan.of(new Models.LinearMotion(f, q), matching));
     FilterWorkspace work = plan.workspace();
     SensorPort port = work.port(new Models.LinearSensor(h, r));
     Estimate estimate = plan.start(0, prior);
@@ -134,7 +135,7 @@ class BatchLeastSquaresTest {
 
   @Test
   void everyPredictionMustBeRecorded() {
-    FilterPlan plan = FilterPlan.extended(new RandomWalk(1, 1));
+    FilterPlan plan = formed(FilterPlan.extended(new RandomWalk(1, 1)));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, Gaussian.of(new double[] {0}, new double[][] {{1}}));
     FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(estimate);
@@ -149,7 +150,7 @@ class BatchLeastSquaresTest {
   /** A step over no time replaces the last record: the update counts, the prediction stays. */
   @Test
   void stepsOverNoTimeJoinTheLast() {
-    FilterPlan plan = FilterPlan.extended(new RandomWalk(1, 1));
+    FilterPlan plan = formed(FilterPlan.extended(new RandomWalk(1, 1)));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, Gaussian.of(new double[] {0}, new double[][] {{1}}));
     FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(estimate);

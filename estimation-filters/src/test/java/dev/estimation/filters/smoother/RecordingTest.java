@@ -11,25 +11,35 @@ import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.FilterWorkspace;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.FaultyMotion;
 import dev.estimation.filters.testing.FaultySensor;
 import java.util.ArrayList;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
+import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.function.Executable;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
 /** A record is of the prediction that led to the estimate, or is refused. */
-class RecordingTest {
+class RecordingTest extends BothForms {
   private static final double[] CONTROL = {1, -1};
 
   private final FaultyMotion motion = new FaultyMotion();
-  private final FilterPlan plan = FilterPlan.cubature(motion);
-  private final FilterWorkspace work = plan.workspace();
-  private final Estimate track = start();
-  private final FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(track);
+  private FilterPlan plan;
+  private FilterWorkspace work;
+  private Estimate track;
+  private FixedIntervalSmoother smoother;
+
+  @BeforeEach
+  void begin() {
+    plan = formed(FilterPlan.cubature(motion));
+    work = plan.workspace();
+    track = start();
+    smoother = FixedIntervalSmoother.startingAt(track);
+  }
 
   private Estimate start() {
     return plan.start(0, Gaussian.of(new double[] {1, 2}, new double[][] {{1, 0.2}, {0.2, 2}}));

@@ -16,6 +16,7 @@ import dev.estimation.filters.model.DifferentiableMotion;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.model.Motion;
 import dev.estimation.filters.model.SensorModel;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
 import dev.estimation.filters.testing.Position;
@@ -29,16 +30,16 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Noise inside the motion, angles, and components known exactly. */
-class SmootherKindsTest {
+class SmootherKindsTest extends BothForms {
   private static final int STEPS = 8;
 
   static List<Named<MomentMatching>> matchings() {
     return Matchings.all();
   }
 
-  private static SmoothedTrack smoothed(
+  private SmoothedTrack smoothed(
       Motion motion, MomentMatching matching, Gaussian prior, SensorModel sensor, double[][] z) {
-    FilterPlan plan = FilterPlan.of(motion, matching);
+    FilterPlan plan = formed(FilterPlan.of(motion, matching));
     FilterWorkspace work = plan.workspace();
     SensorPort port = work.port(sensor);
     Estimate estimate = plan.start(0, prior);
@@ -136,7 +137,7 @@ class SmootherKindsTest {
     assertSameCovariances(away, seam, 2, 1e-12);
   }
 
-  private static SmoothedTrack heading(MomentMatching matching, double centre) {
+  private SmoothedTrack heading(MomentMatching matching, double centre) {
     double[] offsets = {0.25, 0.12, 0.2, -0.2, 0.1, -0.4, -0.35, -0.5};
     double[][] z = new double[STEPS][];
     for (int k = 0; k < STEPS; k++) {

@@ -18,6 +18,7 @@ import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.model.SensorModel;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.ConstantVelocity;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Pendulum;
@@ -31,7 +32,7 @@ import org.junit.jupiter.params.provider.Arguments;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Smoothed means and covariances against outside values, step by step. */
-class SmootherTruthTest {
+class SmootherTruthTest extends BothForms {
   static List<Named<MomentMatching>> matchings() {
     return Matchings.all();
   }
@@ -62,8 +63,8 @@ class SmootherTruthTest {
     checkNile(matching, "nile_kalman_missing_P1e7.csv", "y_used");
   }
 
-  private static void checkNile(MomentMatching matching, String file, String column) {
-    FilterPlan plan = FilterPlan.of(new RandomWalk(1, 1469.1), matching);
+  private void checkNile(MomentMatching matching, String file, String column) {
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(1, 1469.1), matching));
     FilterWorkspace work = plan.workspace();
     SensorPort gauge = work.port(new Position(1, 15099));
     Estimate level = plan.start(1871, Gaussian.of(new double[] {0}, new double[][] {{1e7}}));
@@ -109,7 +110,7 @@ class SmootherTruthTest {
   }
 
   /** 1e-9 standard deviations: what two programs of the same equations share. */
-  private static void check(
+  private void check(
       String trace,
       String rule,
       MomentMatching matching,
@@ -121,7 +122,7 @@ class SmootherTruthTest {
         ReferenceTable.read("trace_" + trace + "_data.csv").rows();
     List<ReferenceTable.Row> expected =
         ReferenceTable.read("trace_" + trace + "_results.csv").rowsWhere("rule", rule);
-    FilterPlan plan = FilterPlan.of(motion, matching);
+    FilterPlan plan = formed(FilterPlan.of(motion, matching));
     FilterWorkspace work = plan.workspace();
     SensorPort port = work.port(sensor);
     Estimate estimate = plan.start(0, prior);

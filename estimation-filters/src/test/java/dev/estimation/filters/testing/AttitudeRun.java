@@ -1,5 +1,6 @@
 package dev.estimation.filters.testing;
 
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.filters.filter.Estimate;
@@ -27,8 +28,8 @@ public final class AttitudeRun {
   private double[] truth = {0.5, -0.5, 0.5, 0.5, 0.01, -0.02, 0.03};
 
   /** A run whose first estimate is off by what it says of itself. */
-  public AttitudeRun(MomentMatching matching, double spread, long seed) {
-    plan = FilterPlan.of(motion, matching);
+  public AttitudeRun(MomentMatching matching, Form form, double spread, long seed) {
+    plan = BothForms.formed(FilterPlan.of(motion, matching), form);
     work = plan.workspace();
     port = work.port(sensor);
     random = new SplittableRandom(seed);

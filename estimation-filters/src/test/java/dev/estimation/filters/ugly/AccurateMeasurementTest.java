@@ -10,6 +10,7 @@ import dev.estimation.filters.filter.Estimate;
 import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
 import dev.estimation.filters.testing.Position;
@@ -22,7 +23,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Measurements far more accurate than the prior: an ordinary start, never a reason to refuse. */
-class AccurateMeasurementTest {
+class AccurateMeasurementTest extends BothForms {
   private static final int DRAWS = 200;
 
   static List<Named<MomentMatching>> matchings() {
@@ -50,7 +51,7 @@ class AccurateMeasurementTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void clonedStates(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new RandomWalk(2, 1), matching);
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
     SensorPort port = plan.workspace().port(new Position(2, 1));
     SensorPort whole = undeclared(plan);
     for (int seed = 0; seed < DRAWS; seed++) {
@@ -89,7 +90,7 @@ class AccurateMeasurementTest {
   @MethodSource("matchings")
   void scalar(MomentMatching matching) {
     double noise = 1e-8;
-    FilterPlan plan = FilterPlan.of(new RandomWalk(1, 1), matching);
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(1, 1), matching));
     SensorPort port = plan.workspace().port(new Position(1, noise));
     for (int seed = 0; seed < DRAWS; seed++) {
       RandomGaussians random = new RandomGaussians(seed);

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.Linearisation;
 import dev.estimation.core.matching.MomentMatching;
@@ -15,6 +16,7 @@ import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.FaultySensor;
 import dev.estimation.filters.testing.FaultySensor.Fault;
 import dev.estimation.filters.testing.Position;
@@ -25,6 +27,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.Parameter;
 import org.junit.jupiter.params.ParameterizedClass;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.Arguments;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.MethodSource;
 
@@ -32,21 +35,33 @@ import org.junit.jupiter.params.provider.MethodSource;
 @ParameterizedClass
 @MethodSource("matchings")
 class BadMeasurementTest {
-  @Parameter
+  @Parameter(0)
   MomentMatching matching;
+
+  @Parameter(1)
+  Form form;
 
   private final FaultySensor sensor = new FaultySensor();
   private FilterPlan plan;
   private SensorPort port;
   private Estimate estimate;
 
-  static List<MomentMatching> matchings() {
-    return List.of(Linearisation.firstOrder(), PointMatching.of(UnscentedRule.scaled(1, 2, 0)));
+  static List<Arguments> matchings() {
+    MomentMatching points = PointMatching.of(UnscentedRule.scaled(1, 2, 0));
+    return List.of(
+        Arguments.of(Linearisation.firstOrder(), Form.COVARIANCE),
+        Arguments.of(Linearisation.firstOrder(), Form.SQUARE_ROOT),
+        Arguments.of(points, Form.COVARIANCE),
+        Arguments.of(points, Form.SQUARE_ROOT));
+  }
+
+  private FilterPlan plan() {
+    return BothForms.formed(FilterPlan.of(new RandomWalk(3, 1), matching), form);
   }
 
   @BeforeEach
   void start() {
-    plan = FilterPlan.of(new RandomWalk(3, 1), matching).withGate(0.999);
+    plan = plan().withGate(0.999);
     port = plan.workspace().port(sensor);
     estimate = plan.start(10, Gaussian.independent(new double[] {1, 2, 3}, new double[] {1, 2, 3}));
   }
@@ -129,7 +144,7 @@ class BadMeasurementTest {
 
   @Test
   void absurdMeasurementWithoutGateOverflows() {
-    port = FilterPlan.of(new RandomWalk(3, 1), matching).workspace().port(sensor);
+    port = plan().workspace().port(sensor);
     long[] before = Bits.of(estimate, 3);
     assertEquals(
         StepStatus.RESULT_NOT_FINITE,

@@ -11,21 +11,29 @@ import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.FilterWorkspace;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.FaultyMotion;
 import dev.estimation.filters.testing.FaultyMotion.Fault;
+import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
 /** A bad time, control or motion model is told apart, and changes nothing at all. */
-class BadPredictionTest {
+class BadPredictionTest extends BothForms {
   private static final double[] CONTROL = {1, -1};
 
   private final FaultyMotion motion = new FaultyMotion();
-  private final FilterPlan plan = FilterPlan.unscented(motion, 1, 2, 0);
-  private final FilterWorkspace work = plan.workspace();
-  private final Estimate estimate =
-      plan.start(10, Gaussian.independent(new double[] {1, 2}, new double[] {1, 2}));
+  private FilterPlan plan;
+  private FilterWorkspace work;
+  private Estimate estimate;
+
+  @BeforeEach
+  void start() {
+    plan = formed(FilterPlan.unscented(motion, 1, 2, 0));
+    work = plan.workspace();
+    estimate = plan.start(10, Gaussian.independent(new double[] {1, 2}, new double[] {1, 2}));
+  }
 
   private void refused(StepStatus wanted, double time, double[] control, String... words) {
     long[] before = Bits.of(estimate, 2);

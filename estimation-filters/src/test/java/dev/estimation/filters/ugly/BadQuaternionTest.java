@@ -18,6 +18,7 @@ import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableMotion;
 import dev.estimation.filters.testing.Attitude;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import java.util.Arrays;
 import java.util.List;
@@ -28,7 +29,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Quaternions that are none: zero, NaN, of the wrong length, from outside and from models. */
-class BadQuaternionTest {
+class BadQuaternionTest extends BothForms {
   private static final Attitude.Gyroscopes MOTION = new Attitude.Gyroscopes(0.01, 0.001);
   private static final double[] MEAN = {1, 0, 0, 0, 0, 0, 0};
   private static final double[] DEVIATIONS = {0.1, 0.1, 0.1, 0.01, 0.01, 0.01};
@@ -44,7 +45,7 @@ class BadQuaternionTest {
 
   @Test
   void theFirstEstimateMustBeAPoint() {
-    FilterPlan plan = FilterPlan.unscented(MOTION, 1, 2, 0);
+    FilterPlan plan = formed(FilterPlan.unscented(MOTION, 1, 2, 0));
     Gaussian seven = Gaussian.independent(MEAN, new double[7]);
     assertRefused(() -> plan.start(0, seven), "dimension 6", "7");
     Gaussian six = Gaussian.independent(new double[6], new double[6]);
@@ -60,7 +61,7 @@ class BadQuaternionTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void aMeasuredQuaternionMustBeOne(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(MOTION, matching);
+    FilterPlan plan = formed(FilterPlan.of(MOTION, matching));
     SensorPort port = plan.workspace().port(new Attitude.Camera(0.01));
     Estimate estimate = plan.start(0, START);
     long[] before = Bits.of(estimate, 6);
@@ -77,7 +78,7 @@ class BadQuaternionTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void aModelThatMovesToZeroIsRefused(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new ToZero(), matching);
+    FilterPlan plan = formed(FilterPlan.of(new ToZero(), matching));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, START);
     long[] before = Bits.of(estimate, 6);
@@ -89,7 +90,7 @@ class BadQuaternionTest {
   @Test
   void whatTakesOnlyRealsAndAnglesSaysSo() {
     assertRefused(
-        () -> FilterPlan.iteratedExtended(MOTION, IteratedUpdate.undamped()),
+        () -> formed(FilterPlan.iteratedExtended(MOTION, IteratedUpdate.undamped())),
         "reals and angles",
         "unit quaternion",
         "Gyroscopes");

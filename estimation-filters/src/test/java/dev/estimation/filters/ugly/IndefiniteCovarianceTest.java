@@ -4,6 +4,7 @@ import static dev.estimation.testing.Agreement.assertNames;
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
+import dev.estimation.core.gaussian.Form;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
@@ -17,6 +18,7 @@ import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.model.SensorModel;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.RandomWalk;
 import org.junit.jupiter.api.Test;
 
@@ -25,7 +27,7 @@ import org.junit.jupiter.api.Test;
  * unscented rule with kappa = 3 - n, beta = 0 gives the variance 3 - n times n, below zero from n = 4
  * on (the true one is 2 n).
  */
-class IndefiniteCovarianceTest {
+class IndefiniteCovarianceTest extends BothForms {
   private static final int N = 5;
   private static final MomentMatching KURTOSIS =
       PointMatching.of(UnscentedRule.scaled(1, 0, n -> 3 - n));
@@ -36,13 +38,15 @@ class IndefiniteCovarianceTest {
 
   @Test
   void innovationCovariance() {
-    FilterPlan plan = FilterPlan.of(new RandomWalk(N, 1), KURTOSIS);
+    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(N, 1), KURTOSIS));
     SensorPort port = plan.workspace().port(new SquaredLength(0.5));
     Estimate estimate = plan.start(0, standard());
     long[] before = Bits.of(estimate, N);
     assertEquals(StepStatus.NOT_DEFINITE, port.update(estimate, new double[] {5}));
     assertArrayEquals(before, Bits.of(estimate, N));
-    assertNames(port.failure(), "innovation", "pivot 1 of 1 is -9.", "SquaredLength");
+    boolean root = form == Form.SQUARE_ROOT; // which has no value for what is no root
+    String pivot = root ? "pivot 1 of 1 is NaN" : "pivot 1 of 1 is -9.";
+    assertNames(port.failure(), "innovation", pivot, "SquaredLength");
     // With a measurement noise that outweighs the negative variance of -10, all is well.
     SensorPort coarse = plan.workspace().port(new SquaredLength(30));
     assertEquals(StepStatus.APPLIED, coarse.update(estimate, new double[] {5}));
@@ -50,14 +54,17 @@ class IndefiniteCovarianceTest {
 
   @Test
   void predictedCovariance() {
-    FilterPlan plan = FilterPlan.of(new LengthIntoState(), KURTOSIS);
+    FilterPlan plan = formed(FilterPlan.of(new LengthIntoState(), KURTOSIS));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, standard());
     long[] before = Bits.of(estimate, N);
     assertEquals(StepStatus.NOT_DEFINITE, work.predict(estimate, 1));
     assertArrayEquals(before, Bits.of(estimate, N));
-    assertNames(work.failure(), "predicted covariance", "pivot 1 of 5 is -9.", "LengthIntoState");
-    FilterPlan positive = FilterPlan.cubature(new LengthIntoState());
+    boolean root = form == Form.SQUARE_ROOT;
+    String covariance = root ? "negative weights outweigh" : "predicted covariance";
+    String pivot = root ? "not positive definite" : "pivot 1 of 5 is -9.";
+    assertNames(work.failure(), covariance, pivot, "LengthIntoState");
+    FilterPlan positive = formed(FilterPlan.cubature(new LengthIntoState()));
     assertEquals(StepStatus.APPLIED, positive.workspace().predict(estimate, 1));
   }
 

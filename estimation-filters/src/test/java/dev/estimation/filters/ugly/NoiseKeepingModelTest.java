@@ -19,6 +19,7 @@ import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.model.Motion;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import java.util.Arrays;
 import java.util.List;
@@ -28,7 +29,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Models that keep the noise array they filled, and write on it while moments are carried. */
-class NoiseKeepingModelTest {
+class NoiseKeepingModelTest extends BothForms {
   static List<Named<MomentMatching>> matchings() {
     return Matchings.all();
   }
@@ -52,28 +53,29 @@ class NoiseKeepingModelTest {
   @MethodSource("matchings")
   void addedNoise(MomentMatching matching) {
     assertArrayEquals(
-        follow(FilterPlan.of(new Drift(false), matching), false),
-        follow(FilterPlan.of(new Drift(true), matching), false));
+        follow(formed(FilterPlan.of(new Drift(false), matching)), false),
+        follow(formed(FilterPlan.of(new Drift(true), matching)), false));
   }
 
   @ParameterizedTest
   @MethodSource("matchings")
   void noiseInside(MomentMatching matching) {
     assertArrayEquals(
-        follow(FilterPlan.of(new Gust(false, 2), matching), false),
-        follow(FilterPlan.of(new Gust(true, 2), matching), false));
+        follow(formed(FilterPlan.of(new Gust(false, 2), matching)), false),
+        follow(formed(FilterPlan.of(new Gust(true, 2), matching)), false));
   }
 
   @ParameterizedTest
   @MethodSource("matchings")
   void measurementNoise(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new Drift(false), matching);
+    FilterPlan plan = formed(FilterPlan.of(new Drift(false), matching));
     assertArrayEquals(follow(plan, false), follow(plan, true));
   }
 
   @Test
   void measurementNoiseOfAnIteratedUpdate() {
-    FilterPlan plan = FilterPlan.iteratedExtended(new Drift(false), IteratedUpdate.lineSearch());
+    FilterPlan plan =
+        formed(FilterPlan.iteratedExtended(new Drift(false), IteratedUpdate.lineSearch()));
     assertArrayEquals(follow(plan, false), follow(plan, true));
   }
 
@@ -84,7 +86,7 @@ class NoiseKeepingModelTest {
     for (int dimension : new int[] {0, -1}) {
       Motion gust = new Gust(false, dimension);
       String message = assertThrows(
-              IllegalArgumentException.class, () -> FilterPlan.of(gust, matching))
+              IllegalArgumentException.class, () -> formed(FilterPlan.of(gust, matching)))
           .getMessage();
       assertNames(message, "noise dimension must be 1 or more, got " + dimension, "Gust");
     }

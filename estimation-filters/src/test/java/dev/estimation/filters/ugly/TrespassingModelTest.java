@@ -15,6 +15,7 @@ import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableMotion;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.testing.Bits;
+import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import java.util.Arrays;
 import java.util.List;
@@ -23,7 +24,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Models that write on the state they are given, against their contract, and fail or not. */
-class TrespassingModelTest {
+class TrespassingModelTest extends BothForms {
   private static final Gaussian START =
       Gaussian.of(new double[] {1, 2}, new double[][] {{1, 0.2}, {0.2, 2}});
 
@@ -34,7 +35,7 @@ class TrespassingModelTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void motion(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new Scribbler(), matching);
+    FilterPlan plan = formed(FilterPlan.of(new Scribbler(), matching));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, START);
     long[] before = Bits.of(estimate, 2);
@@ -45,7 +46,7 @@ class TrespassingModelTest {
   @ParameterizedTest
   @MethodSource("matchings")
   void sensor(MomentMatching matching) {
-    FilterPlan plan = FilterPlan.of(new Scribbler(), matching);
+    FilterPlan plan = formed(FilterPlan.of(new Scribbler(), matching));
     SensorPort port = plan.workspace().port(new Defacer());
     Estimate estimate = plan.start(0, START);
     long[] before = Bits.of(estimate, 2);

@@ -45,7 +45,15 @@ public class StepBenchmark {
   @State(Scope.Thread)
   public static class Filter {
     /** The method; {@code whole} marks points over the whole state, as in the textbook. */
-    @Param({"linear", "unscented", "unscented-whole", "cubature", "hermite3-whole"})
+    @Param({
+      "linear",
+      "unscented",
+      "unscented-square-root",
+      "unscented-whole",
+      "cubature",
+      "hermite3",
+      "hermite3-whole"
+    })
     String method = "linear";
 
     private FilterPlan plan;
@@ -55,7 +63,9 @@ public class StepBenchmark {
     /** Makes plan and workspaces. */
     @Setup
     public void make() {
-      plan = FilterPlan.of(TurnProblem.motion(), matching());
+      FilterPlan inCovarianceForm = FilterPlan.of(TurnProblem.motion(), matching());
+      plan =
+          method.endsWith("square-root") ? inCovarianceForm.inSquareRootForm() : inCovarianceForm;
       workspace = plan.workspace();
       port = workspace.port(TurnProblem.sensor());
     }
@@ -64,9 +74,10 @@ public class StepBenchmark {
       MomentMatching unscented = PointMatching.of(UnscentedRule.scaled(1, 2, 0));
       return switch (method) {
         case "linear" -> Linearisation.firstOrder();
-        case "unscented" -> unscented;
+        case "unscented", "unscented-square-root" -> unscented;
         case "unscented-whole" -> unscented.overWholeInput();
         case "cubature" -> PointMatching.of(CubatureRule.degreeThree());
+        case "hermite3" -> PointMatching.of(GaussHermiteRule.product(3));
         case "hermite3-whole" -> PointMatching.of(GaussHermiteRule.product(3)).overWholeInput();
         default -> throw new IllegalArgumentException("no method " + method);
       };

@@ -73,7 +73,16 @@ class StepBenchmarkTest {
 
   /** Every method follows the target: position within 5 standard deviations of the simulation. */
   @ParameterizedTest
-  @ValueSource(strings = {"linear", "unscented", "unscented-whole", "cubature", "hermite3-whole"})
+  @ValueSource(
+      strings = {
+        "linear",
+        "unscented",
+        "unscented-square-root",
+        "unscented-whole",
+        "cubature",
+        "hermite3",
+        "hermite3-whole"
+      })
   void everyMethodFollowsTheTarget(String method) {
     Estimate estimate = filter(method).follow(track);
     Estimate reference = filter("unscented-whole").follow(track);

@@ -55,6 +55,7 @@ class HouseRulesTest {
       core.function       -> core.internal core.space
       core.points         -> core.internal
       core.matching       -> core.internal core.space core.gaussian core.function core.points
+      core.accuracy       -> core.internal core.space core.gaussian core.function core.points core.matching
       filters.model       -> core.*
       filters.consistency -> core.*
       filters.filter      -> core.* filters.model filters.consistency

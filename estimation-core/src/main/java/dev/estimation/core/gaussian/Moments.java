@@ -128,12 +128,15 @@ public final class Moments {
   }
 
   /**
-   * These moments as an immutable value.
+   * These moments as an immutable value. The square of a lower factor whose deviations differ by 1e7 and more may round
+   * to a matrix that is not positive semi-definite; its variances are then raised by as few roundings as it takes.
    *
    * @return the value
    * @throws IllegalArgumentException if they are not those of a Gaussian
    */
   public Gaussian toGaussian() {
-    return Gaussian.of(space, mean, covariance());
+    return factor()
+        ? RoundedGaussian.of(space, mean, covariance())
+        : Gaussian.of(space, mean, covariance());
   }
 }

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Form;
+import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.gaussian.Moments;
 import dev.estimation.core.internal.Householder;
 import dev.estimation.core.space.Space;
@@ -49,6 +50,21 @@ class HardFactorsTest {
     DMatrixRMaj lower = new DMatrixRMaj(N, N);
     Householder.reduceLower(lower.data, N, turned.data, N, N);
     return lower;
+  }
+
+  /** What a filter holds can be read: its square is rounded, and must not be refused for that. */
+  @Test
+  void momentsWithAHardFactorCanBeReadAsAValue() {
+    for (int seed = 0; seed < 200; seed++) {
+      Moments moments = new Moments(Space.reals(N));
+      moments.changeFactor().setTo(factor(seed));
+      assertTrue(moments.factor());
+      Gaussian value = moments.toGaussian();
+      for (int i = 0; i < N; i++) {
+        double variance = moments.covariance().get(i, i);
+        assertEquals(variance, value.covariance(i, i), 2e-11 * variance, "seed " + seed);
+      }
+    }
   }
 
   /** Small whole numbers, of determinant 1. */

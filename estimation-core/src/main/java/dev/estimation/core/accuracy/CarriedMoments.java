@@ -1,6 +1,7 @@
 package dev.estimation.core.accuracy;
 
 import dev.estimation.core.gaussian.Moments;
+import dev.estimation.core.internal.Whitening;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.space.Space;
 import org.ejml.data.DMatrixRMaj;

@@ -1,5 +1,6 @@
 package dev.estimation.core.accuracy;
 
+import dev.estimation.core.internal.Whitening;
 import org.apache.commons.math3.distribution.ChiSquaredDistribution;
 import org.apache.commons.math3.distribution.NormalDistribution;
 import org.ejml.data.DMatrixRMaj;

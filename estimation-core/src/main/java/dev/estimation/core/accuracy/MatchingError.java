@@ -1,5 +1,6 @@
 package dev.estimation.core.accuracy;
 
+import dev.estimation.core.internal.Whitening;
 import dev.estimation.core.matching.Use;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;

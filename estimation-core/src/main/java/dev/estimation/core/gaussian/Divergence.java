@@ -1,10 +1,9 @@
 package dev.estimation.core.gaussian;
 
+import dev.estimation.core.internal.Whitening;
 import dev.estimation.core.space.Space;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
-import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
-import org.ejml.interfaces.decomposition.EigenDecomposition_F64;
 
 /**
  * How far two Gaussians p = N(a, A) and q = N(b, B) of one space are apart, by factors and without inverse.
@@ -54,15 +53,18 @@ public final class Divergence {
   public double kullbackLeibler(Gaussian p, Gaussian q) {
     Moments of = moments(p);
     Moments by = moments(q);
-    Covariance scale = requireDefinite("covariance of q", by.factoredCovariance());
+    Whitening scale = definite("covariance of q", by.covariance());
     if (!of.factoredCovariance().isDefinite()) {
       return Double.POSITIVE_INFINITY;
     }
     int d = space.dimension();
-    double sum = squaredMeanError(of, by, scale);
-    DMatrixRMaj ratio = solved(scale, of.lowerFactor());
+    double distance = meanError(of, by, scale);
+    double sum = distance * distance;
+    DMatrixRMaj turned = of.lowerFactor().copy();
+    CommonOps_DDRM.transpose(turned);
+    DMatrixRMaj ratio = scale.rows(turned); // (L^-1 L_A)'
     for (int r = 0; r < d; r++) {
-      for (int c = 0; c < r; c++) {
+      for (int c = r + 1; c < d; c++) {
         sum += ratio.get(r, c) * ratio.get(r, c);
       }
       double excess = (ratio.get(r, r) - 1) * (ratio.get(r, r) + 1);
@@ -81,7 +83,7 @@ public final class Divergence {
    * @throws IllegalArgumentException if one is not of the space, or the scale is not symmetric or not definite
    */
   public double meanError(Gaussian p, Gaussian q, DMatrixRMaj scale) {
-    return Math.sqrt(squaredMeanError(moments(p), moments(q), scale(scale)));
+    return meanError(moments(p), moments(q), scale(scale));
   }
 
   /**
@@ -96,52 +98,13 @@ public final class Divergence {
   public double covarianceError(Gaussian p, Gaussian q, DMatrixRMaj scale) {
     DMatrixRMaj difference = moments(p).covariance().copy();
     CommonOps_DDRM.subtractEquals(difference, moments(q).covariance());
-    Covariance by = scale(scale);
-    DMatrixRMaj half = solved(by, difference);
-    CommonOps_DDRM.transpose(half);
-    DMatrixRMaj ratio = solved(by, half);
-    return largestEigenvalue(ratio);
+    return Whitening.largest(scale(scale).eigenvalues(difference));
   }
 
-  private double largestEigenvalue(DMatrixRMaj symmetric) {
-    EigenDecomposition_F64<DMatrixRMaj> eigen =
-        DecompositionFactory_DDRM.eig(space.dimension(), false, true);
-    if (!eigen.decompose(symmetric)) {
-      return Double.NaN;
-    }
-    double largest = 0;
-    for (int i = 0; i < space.dimension(); i++) {
-      largest = Math.max(largest, Math.abs(eigen.getEigenvalue(i).getReal()));
-    }
-    return largest;
-  }
-
-  private double squaredMeanError(Moments p, Moments q, Covariance scale) {
+  private double meanError(Moments p, Moments q, Whitening scale) {
     double[] difference = new double[space.dimension()];
     space.difference(p.mean(), q.mean(), difference);
-    scale.solveLower(difference);
-    double sum = 0;
-    for (double value : difference) {
-      sum += value * value;
-    }
-    return sum;
-  }
-
-  /** L^-1 X, column by column. */
-  private DMatrixRMaj solved(Covariance scale, DMatrixRMaj right) {
-    int d = space.dimension();
-    DMatrixRMaj result = new DMatrixRMaj(d, d);
-    double[] column = new double[d];
-    for (int c = 0; c < d; c++) {
-      for (int r = 0; r < d; r++) {
-        column[r] = right.get(r, c);
-      }
-      scale.solveLower(column);
-      for (int r = 0; r < d; r++) {
-        result.set(r, c, column[r]);
-      }
-    }
-    return result;
+    return scale.length(difference);
   }
 
   private Moments moments(Gaussian value) {
@@ -150,17 +113,15 @@ public final class Divergence {
     return moments;
   }
 
-  private Covariance scale(DMatrixRMaj matrix) {
-    Covariance result = new Covariance(space.dimension());
-    result.changeMatrix().setTo(CovarianceInput.of(space.dimension(), matrix, "the space"));
-    return requireDefinite("scale", result);
+  private Whitening scale(DMatrixRMaj matrix) {
+    return definite("scale", CovarianceInput.of(space.dimension(), matrix, "the space"));
   }
 
-  private static Covariance requireDefinite(String what, Covariance covariance) {
-    if (!covariance.isDefinite()) {
-      throw new IllegalArgumentException(
-          what + " must be positive definite: " + covariance.failure());
+  private static Whitening definite(String what, DMatrixRMaj covariance) {
+    Whitening scale = new Whitening(covariance);
+    if (!scale.isDefinite()) {
+      throw new IllegalArgumentException(what + " must be positive definite: " + scale.failure());
     }
-    return covariance;
+    return scale;
   }
 }

@@ -1,37 +1,53 @@
-package dev.estimation.core.accuracy;
+package dev.estimation.core.internal;
 
-import dev.estimation.core.gaussian.Covariance;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
 import org.ejml.interfaces.decomposition.EigenDecomposition_F64;
 
-/** Lengths in standard deviations of a covariance S; its root S^1/2 is the lower Cholesky factor. */
-final class Whitening {
-  private final Covariance scale;
+/**
+ * Lengths in standard deviations of a covariance S; its root S^1/2 is the lower Cholesky factor. For analysis off
+ * the step path: allocates.
+ */
+public final class Whitening {
+  private final LowerFactor scale;
   private final boolean definite;
 
-  Whitening(DMatrixRMaj covariance) {
-    this.scale = new Covariance(covariance.numRows);
-    scale.changeMatrix().setTo(covariance);
-    this.definite = scale.isDefinite();
+  /**
+   * Whitening by a covariance.
+   *
+   * @param covariance S, m x m, read
+   */
+  public Whitening(DMatrixRMaj covariance) {
+    this.scale = new LowerFactor(covariance.numRows);
+    this.definite = scale.factorDefinite(covariance);
   }
 
-  boolean isDefinite() {
+  /** {@return whether S is positive definite; only then does the rest mean anything} */
+  public boolean isDefinite() {
     return definite;
   }
 
-  String failure() {
+  /** {@return which pivot of S is not positive, and its value} */
+  public String failure() {
     return scale.failure();
   }
 
-  /** Overwrites v with S^-1/2 v. */
-  void solve(double[] v) {
+  /**
+   * Overwrites v with S^-1/2 v.
+   *
+   * @param v m numbers, updated
+   */
+  public void solve(double[] v) {
     scale.solveLower(v);
   }
 
-  /** |S^-1/2 v|. */
-  double length(double[] v) {
+  /**
+   * {@return |S^-1/2 v|}
+   *
+   * @param v m numbers, read
+   */
+  public double length(double[] v) {
     double[] unit = v.clone();
     solve(unit);
     double squares = 0;
@@ -41,8 +57,12 @@ final class Whitening {
     return Math.sqrt(squares);
   }
 
-  /** W S^-T/2: S^-1/2 of each row. */
-  DMatrixRMaj rows(DMatrixRMaj w) {
+  /**
+   * {@return W S^-T/2: S^-1/2 of each row}
+   *
+   * @param w k x m, read
+   */
+  public DMatrixRMaj rows(DMatrixRMaj w) {
     DMatrixRMaj result = w.copy();
     double[] row = new double[w.numCols];
     for (int r = 0; r < w.numRows; r++) {
@@ -53,23 +73,35 @@ final class Whitening {
     return result;
   }
 
-  /** Eigenvalues of S^-1/2 D S^-T/2, D symmetric. */
-  double[] eigenvalues(DMatrixRMaj d) {
+  /**
+   * {@return the eigenvalues of S^-1/2 D S^-T/2}
+   *
+   * @param d D, m x m, symmetric, read
+   */
+  public double[] eigenvalues(DMatrixRMaj d) {
     DMatrixRMaj half = rows(d);
     CommonOps_DDRM.transpose(half);
     return symmetricEigenvalues(rows(half));
   }
 
-  /** The largest singular value of W S^-T/2. */
-  double norm(DMatrixRMaj w) {
+  /**
+   * {@return the largest singular value of W S^-T/2}
+   *
+   * @param w k x m, read
+   */
+  public double norm(DMatrixRMaj w) {
     DMatrixRMaj unit = rows(w);
     DMatrixRMaj square = new DMatrixRMaj(w.numCols, w.numCols);
     CommonOps_DDRM.multInner(unit, square);
     return Math.sqrt(largest(symmetricEigenvalues(square)));
   }
 
-  /** Largest absolute value; NaN if there is one. */
-  static double largest(double[] values) {
+  /**
+   * {@return the largest absolute value; NaN if there is one}
+   *
+   * @param values read
+   */
+  public static double largest(double[] values) {
     double result = 0;
     for (double value : values) {
       result = Math.max(result, Math.abs(value));

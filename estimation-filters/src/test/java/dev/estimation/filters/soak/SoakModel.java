@@ -36,7 +36,7 @@ final class SoakModel {
     this.read = Arrays.copyOf(random.permutation(n), 1 + (int) random.uniform(0, n));
     this.h = random.matrix(m, read.length);
     this.bend = mayBend && random.uniform(0, 1) < 0.7 ? 0.1 : 0;
-    this.priorDeviations = powers(random, n, -2, 3);
+    this.priorDeviations = powers(random, n, -2, 2);
     double[] driven = powers(random, n, -4, 0);
     this.processNoise = scaled(random.covariance(n), driven);
     this.scale = Math.max(3 * largest(priorDeviations), 30 * largest(driven));

@@ -63,7 +63,7 @@ final class FilterRun {
     StepStatus status = workspace.predict(estimate, step.time(), step.sharedControl());
     evaluations += workspace.evaluations();
     jacobians += workspace.jacobians();
-    if (status != StepStatus.APPLIED) {
+    if (!status.isApplied()) {
       failure = workspace.failure();
       return false;
     }
@@ -87,7 +87,7 @@ final class FilterRun {
     evaluations += told.evaluations();
     jacobians += told.jacobians();
     switch (status) {
-      case APPLIED -> innovations.accept(told);
+      case APPLIED, APPLIED_BELOW_TOLERANCE -> innovations.accept(told);
       case GATED -> innovations.reject();
       case NOT_CONVERGED -> {
         innovations.skip();

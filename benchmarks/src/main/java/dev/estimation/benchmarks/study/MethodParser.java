@@ -7,6 +7,7 @@ import dev.estimation.core.matching.Linearisation;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.matching.SpreadLinearisation;
+import dev.estimation.core.matching.ToleranceMatching;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.LatinHypercubeRule;
@@ -23,7 +24,7 @@ import java.util.function.IntToDoubleFunction;
 /**
  * Reads methods: {@code linear}, {@code linear-iterated}, {@code linear-iterated:line-search},
  * {@code linear-spread}, {@code linear2-spread}, {@code linear2-axes} (linearisation of first and second
- * order by differences over the spread), {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
+ * order by differences over the spread), {@code tolerance:EPS}, {@code unscented:ALPHA,BETA,KAPPA} (KAPPA a number, or a number less the dimension, as in {@code
  * 3-n}), {@code unscented:KAPPA}, {@code deviations:S}, {@code simplex} or {@code simplex:WEIGHT} (of the
  * centre), {@code cubature}, {@code cubature5}, {@code mcnamee-stenger}, {@code hermite:NODES}, {@code
  * sparse:LEVEL}, {@code sparse-degree:DEGREE}, {@code random:COUNT,SEED}, {@code antithetic:PAIRS,SEED},
@@ -32,7 +33,7 @@ import java.util.function.IntToDoubleFunction;
  */
 final class MethodParser {
   static final String FORMS = "linear, linear-iterated, linear-iterated:line-search,"
-      + " linear-spread, linear2-spread, linear2-axes,"
+      + " linear-spread, linear2-spread, linear2-axes, tolerance:EPS,"
       + " unscented:ALPHA,BETA,KAPPA, unscented:KAPPA, deviations:S, simplex, simplex:WEIGHT,"
       + " cubature, cubature5, mcnamee-stenger, hermite:NODES, sparse:LEVEL, sparse-degree:DEGREE,"
       + " random:COUNT,SEED, antithetic:PAIRS,SEED, latin:COUNT,SEED, sobol:COUNT, halton:COUNT";
@@ -71,6 +72,10 @@ final class MethodParser {
       case "linear-spread", "linear2-spread", "linear2-axes" -> {
         requireCount(typed, settings, 0);
         yield FilterKind.of(overSpread(name));
+      }
+      case "tolerance" -> {
+        requireCount(typed, settings, 1);
+        yield FilterKind.of(ToleranceMatching.within(number(typed, "EPS", settings[0])));
       }
       case "linear-iterated" -> FilterKind.iterated(iteration(typed, settings));
       default -> FilterKind.of(PointMatching.of(rule(name, typed, settings)));

@@ -86,15 +86,15 @@ abstract class BaseWorkspace implements MatchingWorkspace {
       failedValue = handed[failedIndex];
       return MatchingStatus.FUNCTION_CHANGED_INPUT;
     }
-    MatchingStatus matched = match(mean, given, output.changeMean());
-    if (matched != MatchingStatus.MATCHED) {
+    noise = additiveNoise;
+    MatchingStatus matched = match(mean, given, use, output.changeMean());
+    if (!matched.hasResult()) {
       return matched;
     }
-    noise = additiveNoise;
     outputKnown = false;
     MatchingStatus ended = use == Use.PREDICTION ? fillCovariance() : MatchingStatus.MATCHED;
     if (Checks.allFinite(output.mean()) && ended != MatchingStatus.OUTPUT_NOT_FINITE) {
-      return ended;
+      return ended == MatchingStatus.MATCHED ? matched : ended;
     }
     return additiveNoise != null
         ? faultOf(additiveNoise, MatchingStatus.OUTPUT_NOT_FINITE)
@@ -127,9 +127,15 @@ abstract class BaseWorkspace implements MatchingWorkspace {
    * Finds the mean of the output and fills {@link #columns()}, given the image of the mean in {@link
    * #centre}.
    *
+   * @param use what the result is for
    * @param outputMean filled
    */
-  abstract MatchingStatus match(double[] mean, double[] given, double[] outputMean);
+  abstract MatchingStatus match(double[] mean, double[] given, Use use, double[] outputMean);
+
+  /** The noise of this call, or null. */
+  final Covariance noise() {
+    return noise;
+  }
 
   /** The covariance of the output, without noise. */
   abstract WeightedColumns columns();
@@ -229,6 +235,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
             + outputSpace;
       case OUTPUT_NOT_DEFINITE ->
         "covariance of the output is not positive definite: negative weights outweigh the others";
+      case BELOW_TOLERANCE -> toleranceFailure();
     };
   }
 
@@ -239,6 +246,10 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   }
 
   String jacobianFailure() {
+    return "";
+  }
+
+  String toleranceFailure() {
     return "";
   }
 }

@@ -1,16 +1,13 @@
 package dev.estimation.core.matching;
 
-import dev.estimation.core.function.Jacobian;
 import dev.estimation.core.function.VectorFunction;
-import dev.estimation.core.internal.Checks;
 import dev.estimation.core.points.UnitPoints;
 import dev.estimation.core.space.Space;
 import java.util.Arrays;
 
 /**
- * What the inputs add in which a function is linear once the others are given: g(u) = A(u_a) u_b + c(u_a), with
- * u_b = its mean given u_a, plus S s, s ~ N(0, I). None where there are no such inputs. A is the part of the
- * Jacobian that belongs to u_b, or comes from one more evaluation for each of them, exactly since g is linear in it.
+ * What the inputs add in which a function is linear once the others are given, by the columns A S of {@link LinearSlopes}
+ * at every point. None where there are no such inputs.
  *
  * <p>Two ways of writing E[A S S' A']. With no centre weight below 0: at each point the columns A S, with the mean
  * weight of the point. Else those would cancel, by 1e6 for a narrow spread, and might leave an indefinite sum. So E[A] S has
@@ -18,7 +15,6 @@ import java.util.Arrays;
  * PointColumns} writes that of z, with the same weights: deviations from the centre, and their mean.
  */
 final class LinearColumns {
-  private final BaseWorkspace owner;
   private final UnitPoints points;
   private final int nonlinear;
   private final int count;
@@ -26,34 +22,20 @@ final class LinearColumns {
   private final boolean aboutMean;
   private final double shiftFraction;
   private final double[] weights;
-  private final Jacobian jacobian;
-  private final RootProduct root;
-  private final double[] derivatives;
-  private final double[] displacement;
-  private final double[] moved;
-  private final double[] image;
-  private final double[] deviation;
-  private boolean jacobianFault;
+  private final int rows;
+  private final LinearSlopes slopes;
 
   private LinearColumns(
       BaseWorkspace owner, VectorFunction function, UnitPoints points, int count) {
-    this.owner = owner;
     this.points = points;
     this.count = count;
     this.nonlinear = owner.active.count() - count;
-    this.jacobian = function.structure().jacobian().orElse(null);
     this.centreWeighed = points.centreMeanWeight() != 0;
     this.aboutMean = points.centreMeanWeight() < 0;
     this.shiftFraction = PointColumns.shiftFraction(points);
     this.weights = weights(points, count, aboutMean ? PointColumns.deltaWeight(points) : 0);
-    this.root = new RootProduct(owner.active, nonlinear);
-    int n = owner.inputSpace.dimension();
-    int m = owner.outputSpace.dimension();
-    this.derivatives = new double[m * n];
-    this.displacement = new double[n];
-    this.moved = new double[owner.inputSpace.storage()];
-    this.image = new double[owner.outputSpace.storage()];
-    this.deviation = new double[m];
+    this.rows = owner.outputSpace.dimension();
+    this.slopes = new LinearSlopes(owner, function, nonlinear);
   }
 
   /** In this order: the centre or E[A], the points, and the mean of their deviations if it has a weight. */
@@ -96,7 +78,7 @@ final class LinearColumns {
   boolean fillCentre(double[] mean, double[] given, double[] centre, double[] data, int stride) {
     return count == 0
         || !centreWeighed
-        || fill(stride - weights.length, mean, given, centre, data, stride);
+        || slopes.fill(stride - weights.length, mean, given, centre, data, stride);
   }
 
   /** The columns of a point; false if a value is not finite. */
@@ -106,41 +88,8 @@ final class LinearColumns {
       return true;
     }
     int before = i + (centreWeighed ? 1 : 0);
-    return fill(stride - weights.length + before * count, point, given, output, data, stride);
-  }
-
-  private boolean fill(
-      int first, double[] point, double[] given, double[] output, double[] data, int stride) {
-    jacobianFault = false;
-    return jacobian == null
-        ? fillByDifferences(first, point, given, output, data, stride)
-        : fillByJacobian(first, point, given, data, stride);
-  }
-
-  private boolean fillByJacobian(
-      int first, double[] point, double[] given, double[] data, int stride) {
-    Arrays.fill(derivatives, 0);
-    jacobian.evaluate(owner.copied(point), given, derivatives);
-    owner.jacobians++;
-    double zero = root.fill(derivatives, deviation.length, data, first, stride);
-    jacobianFault = zero != 0;
-    return !jacobianFault;
-  }
-
-  private boolean fillByDifferences(
-      int first, double[] point, double[] given, double[] output, double[] data, int stride) {
-    for (int q = 0; q < count; q++) {
-      root.fillColumn(q, displacement);
-      owner.inputSpace.displace(point, displacement, moved);
-      if (!owner.function.evaluate(moved, given, image)) {
-        return false;
-      }
-      owner.outputSpace.difference(image, output, deviation);
-      for (int c = 0; c < deviation.length; c++) {
-        data[c * stride + first + q] = deviation[c];
-      }
-    }
-    return true;
+    return slopes.fill(
+        stride - weights.length + before * count, point, given, output, data, stride);
   }
 
   /** Brings the columns about their mean if the centre's weight is below 0. */
@@ -149,7 +98,7 @@ final class LinearColumns {
       return;
     }
     int first = stride - weights.length;
-    for (int c = 0; c < deviation.length; c++) {
+    for (int c = 0; c < rows; c++) {
       for (int q = 0; q < count; q++) {
         centreEntry(data, c * stride + first + q);
       }
@@ -181,7 +130,7 @@ final class LinearColumns {
   /** The rows of W that belong to these inputs: the means of the columns. */
   void fillCross(double[] w, WeightedColumns columns) {
     int stride = columns.count();
-    int m = deviation.length;
+    int m = rows;
     for (int i = 0; i < meanColumns(); i++) {
       int row = (nonlinear + i % count) * m;
       for (int c = 0; c < m; c++) {
@@ -192,13 +141,11 @@ final class LinearColumns {
 
   /** Why a fill was false. */
   MatchingStatus fault() {
-    return jacobianFault ? MatchingStatus.JACOBIAN_NOT_FINITE : MatchingStatus.FUNCTION_NOT_FINITE;
+    return slopes.fault();
   }
 
   /** The entry of the Jacobian that is not finite. */
   String failure() {
-    int n = displacement.length;
-    int bad = Checks.firstNotFinite(derivatives);
-    return "Jacobian[" + bad / n + "][" + bad % n + "] must be finite, got " + derivatives[bad];
+    return slopes.failure();
   }
 }

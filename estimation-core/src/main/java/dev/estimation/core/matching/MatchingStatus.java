@@ -27,5 +27,16 @@ public enum MatchingStatus {
   /** The moments of the output overflow. Usual cause: a variance far outside the model's units. */
   OUTPUT_NOT_FINITE,
   /** The output has no factor: negative weights left nothing to take a root of. Square-root form only. */
-  OUTPUT_NOT_DEFINITE
+  OUTPUT_NOT_DEFINITE,
+  /**
+   * The moments are there, but their estimated error is above the tolerance: the budget of evaluations has ended, an angle
+   * would pass half a turn, or values further out are not finite. {@link MatchingWorkspace#estimatedError()} tells the
+   * error. Only {@link ToleranceMatching} ends so.
+   */
+  BELOW_TOLERANCE;
+
+  /** {@return whether there are moments of the output} */
+  public boolean hasResult() {
+    return this == MATCHED || this == BELOW_TOLERANCE;
+  }
 }

@@ -22,8 +22,8 @@ public interface MatchingWorkspace {
    * @param additiveNoise covariance added to the output's, m x m, kept until the next call and not to be
    *     changed before; or null
    * @param use what the result is for
-   * @return {@link MatchingStatus#MATCHED} if the results below are valid; otherwise they are not, and
-   *     {@link #failure()} says what was wrong
+   * @return {@link MatchingStatus#MATCHED} if the results below are valid, {@link MatchingStatus#BELOW_TOLERANCE} if they
+   *     are but not as accurate as asked for; otherwise they are not. {@link #failure()} says what was wrong
    * @throws IllegalArgumentException if a shape is wrong
    */
   MatchingStatus carry(Moments input, double[] given, Covariance additiveNoise, Use use);
@@ -87,6 +87,16 @@ public interface MatchingWorkspace {
    * for a Hessian take included}
    */
   int jacobians();
+
+  /**
+   * The estimated error of the last call's moments where they are used, the largest of mean, covariance and cross-covariance
+   * in the sense of {@code MatchingError} in {@code core.accuracy}.
+   *
+   * @return the estimate, infinite if there is nothing to go by; NaN from all matchings but {@link ToleranceMatching}
+   */
+  default double estimatedError() {
+    return Double.NaN;
+  }
 
   /** {@return what was wrong in the last call, in words; empty if nothing was} */
   String failure();

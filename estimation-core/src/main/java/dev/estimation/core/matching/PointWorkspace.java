@@ -42,7 +42,7 @@ class PointWorkspace extends BaseWorkspace {
   }
 
   @Override
-  MatchingStatus match(double[] mean, double[] given, double[] outputMean) {
+  MatchingStatus match(double[] mean, double[] given, Use use, double[] outputMean) {
     double[] data = columns.total().data();
     int stride = columns.total().count();
     if (!linear.fillCentre(mean, given, centre, data, stride)) {

@@ -34,8 +34,8 @@ final class ReplicatedWorkspace extends SampleWorkspace implements SampledWorksp
 
   /** Adds columns that give P_zz back what the pooled mean, by its own scatter, has taken from it. */
   @Override
-  MatchingStatus match(double[] mean, double[] given, double[] outputMean) {
-    MatchingStatus matched = super.match(mean, given, outputMean);
+  MatchingStatus match(double[] mean, double[] given, Use use, double[] outputMean) {
+    MatchingStatus matched = super.match(mean, given, use, outputMean);
     if (matched == MatchingStatus.MATCHED && size > 1) {
       int count = columns().count();
       for (int c = 0; c < shift.length; c++) {

@@ -58,7 +58,7 @@ abstract class TaylorWorkspace extends BaseWorkspace {
   abstract MatchingStatus expand(double[] mean, double[] given);
 
   @Override
-  final MatchingStatus match(double[] mean, double[] given, double[] outputMean) {
+  final MatchingStatus match(double[] mean, double[] given, Use use, double[] outputMean) {
     MatchingStatus expanded = expand(mean, given);
     if (expanded != MatchingStatus.MATCHED) {
       return expanded;

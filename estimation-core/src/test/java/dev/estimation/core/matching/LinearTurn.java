@@ -31,7 +31,6 @@ final class LinearTurn implements VectorFunction {
     z[4] = u[4];
   }
 
-  /** The columns of linear inputs alone: no other is asked for. */
   private static void derive(double[] u, double[] given, double[] jacobian) {
     double t = given[0];
     double angle = u[4] * t;
@@ -45,6 +44,19 @@ final class LinearTurn implements VectorFunction {
     jacobian[13] = -Math.sin(angle);
     jacobian[17] = Math.sin(angle);
     jacobian[18] = Math.cos(angle);
+    jacobian[4] = t * t * (alongSlope(angle) * u[2] - acrossSlope(angle) * u[3]);
+    jacobian[9] = t * t * (acrossSlope(angle) * u[2] + alongSlope(angle) * u[3]);
+    jacobian[14] = -t * (Math.sin(angle) * u[2] + Math.cos(angle) * u[3]);
+    jacobian[19] = t * (Math.cos(angle) * u[2] - Math.sin(angle) * u[3]);
+    jacobian[24] = 1;
+  }
+
+  private static double alongSlope(double u) {
+    return Math.abs(u) < 1e-4 ? -u / 3 : (Math.cos(u) - along(u)) / u;
+  }
+
+  private static double acrossSlope(double u) {
+    return Math.abs(u) < 1e-4 ? 0.5 : (Math.sin(u) - across(u)) / u;
   }
 
   @Override

@@ -35,19 +35,22 @@ public final class FilterPlan {
   private final double gateProbability;
   private final IteratedUpdate iteration;
   private final Form form;
+  private final boolean refusing;
 
   private FilterPlan(
       Motion motion,
       MomentMatching matching,
       double gateProbability,
       IteratedUpdate iteration,
-      Form form) {
+      Form form,
+      boolean refusing) {
     this.motion = motion;
     this.stateSpace = motion.stateSpace();
     this.matching = matching;
     this.gateProbability = gateProbability;
     this.iteration = iteration;
     this.form = form;
+    this.refusing = refusing;
   }
 
   /**
@@ -59,7 +62,7 @@ public final class FilterPlan {
    * @throws IllegalArgumentException if the matching cannot serve the model
    */
   public static FilterPlan of(Motion motion, MomentMatching matching) {
-    FilterPlan plan = new FilterPlan(motion, matching, Double.NaN, null, Form.COVARIANCE);
+    FilterPlan plan = new FilterPlan(motion, matching, Double.NaN, null, Form.COVARIANCE, false);
     plan.transition(); // refuses a model that the matching cannot serve now, not at the first step
     return plan;
   }
@@ -89,7 +92,7 @@ public final class FilterPlan {
           + space + " (motion model " + nameOf(motion) + ")");
     }
     return new FilterPlan(
-        motion, extended(motion).matching, Double.NaN, iteration, Form.COVARIANCE);
+        motion, extended(motion).matching, Double.NaN, iteration, Form.COVARIANCE, false);
   }
 
   /**
@@ -132,7 +135,7 @@ public final class FilterPlan {
    */
   public FilterPlan withGate(double probability) {
     ChiSquareBounds.upperLimit(probability, 1);
-    return new FilterPlan(motion, matching, probability, iteration, form);
+    return new FilterPlan(motion, matching, probability, iteration, form, refusing);
   }
 
   /**
@@ -144,7 +147,25 @@ public final class FilterPlan {
    * @return the plan in square-root form
    */
   public FilterPlan inSquareRootForm() {
-    return new FilterPlan(motion, matching, gateProbability, iteration, Form.SQUARE_ROOT);
+    return new FilterPlan(motion, matching, gateProbability, iteration, Form.SQUARE_ROOT, refusing);
+  }
+
+  /**
+   * This plan, refusing steps whose moments are not within the tolerance of a {@code ToleranceMatching}: the estimate then
+   * stays as it is, and the status is {@code BELOW_TOLERANCE}. Unless this is said, such steps are applied, and the
+   * status is {@code APPLIED_BELOW_TOLERANCE}.
+   *
+   * @return the plan
+   */
+  public FilterPlan refusingBelowTolerance() {
+    return new FilterPlan(motion, matching, gateProbability, iteration, form, true);
+  }
+
+  /** A status as this plan takes it. */
+  StepStatus judge(StepStatus status) {
+    return refusing && status == StepStatus.APPLIED_BELOW_TOLERANCE
+        ? StepStatus.BELOW_TOLERANCE
+        : status;
   }
 
   /** {@return scratch for one thread} */

@@ -20,6 +20,7 @@ public final class FilterWorkspace {
   private final Transition transition;
   private final InputCheck input = new InputCheck();
   private StepStatus status = StepStatus.APPLIED;
+  private double estimatedError = Double.NaN;
   private int evaluations;
   private int jacobians;
   private boolean interrupted;
@@ -60,7 +61,7 @@ public final class FilterWorkspace {
   /**
    * Predicts an estimate to a time, for a motion model without controls.
    *
-   * @param estimate updated if the status is {@code APPLIED}
+   * @param estimate updated if the status {@code isApplied()}
    * @param time to predict to (s); the estimate's own time is a prediction over no time, which
    *     changes nothing
    * @return how it ended
@@ -72,7 +73,7 @@ public final class FilterWorkspace {
   /**
    * Predicts an estimate to a time under a control that holds until then.
    *
-   * @param estimate updated if the status is {@code APPLIED}
+   * @param estimate updated if the status {@code isApplied()}
    * @param time to predict to (s)
    * @param control as many numbers as the motion model wants, read
    * @return how it ended
@@ -83,6 +84,7 @@ public final class FilterWorkspace {
     Checks.length("control", control, transition.controlDimension());
     evaluations = 0;
     jacobians = 0;
+    estimatedError = Double.NaN;
     stepTime = time;
     estimateTime = estimate.time();
     interrupted = true;
@@ -106,11 +108,12 @@ public final class FilterWorkspace {
     }
     moved = null;
     movedFrom = Double.NaN;
-    StepStatus carried =
-        transition.carry(estimate.moments(), control, estimateTime, time - estimateTime);
+    StepStatus carried = plan.judge(
+        transition.carry(estimate.moments(), control, estimateTime, time - estimateTime));
+    estimatedError = transition.estimatedError();
     evaluations = transition.evaluations();
     jacobians = transition.jacobians();
-    if (carried == StepStatus.APPLIED) {
+    if (carried.isApplied()) {
       estimate.replace(time, transition.output());
       moved = estimate;
       movedFrom = estimateTime;
@@ -178,7 +181,12 @@ public final class FilterWorkspace {
     return jacobians;
   }
 
-  /** {@return why the last prediction was not applied, in words; empty if it was} */
+  /** {@return the estimated error of the last prediction's moments, as {@code MatchingWorkspace.estimatedError()}} */
+  public double estimatedError() {
+    return estimatedError;
+  }
+
+  /** {@return why the last prediction was not applied, or not within its tolerance, in words; else empty} */
   public String failure() {
     if (status == StepStatus.APPLIED && !interrupted) {
       return "";

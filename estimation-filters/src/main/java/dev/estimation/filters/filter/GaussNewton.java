@@ -168,7 +168,7 @@ final class GaussNewton {
     MatchingStatus matched = matching.carry(iterate, given, noise.covariance(), Use.UPDATE);
     evaluations += matching.evaluations();
     jacobians += matching.jacobians();
-    if (matched != MatchingStatus.MATCHED) {
+    if (!matched.hasResult()) {
       return StepStatus.of(matched);
     }
     measured.difference(measurement, matching.mean(), residual);

@@ -21,6 +21,7 @@ import org.ejml.data.DMatrixRMaj;
 public final class SensorPort {
   private final double[] nothing = new double[0];
   private final String name;
+  private final FilterPlan plan;
   private final SensorModel sensor;
   private final Space stateSpace;
   private final Space space;
@@ -33,12 +34,14 @@ public final class SensorPort {
   private final double[] mean;
   private final InputCheck input = new InputCheck();
   private StepStatus status = StepStatus.APPLIED;
+  private double estimatedError = Double.NaN;
   private boolean interrupted;
   private double estimateTime;
   private int evaluations;
   private int jacobians;
 
   SensorPort(FilterPlan plan, SensorModel sensor, String name) {
+    this.plan = plan;
     this.name = name;
     this.sensor = sensor;
     this.stateSpace = plan.stateSpace();
@@ -63,7 +66,7 @@ public final class SensorPort {
   /**
    * Updates an estimate with a measurement, for a sensor to which nothing is given.
    *
-   * @param estimate updated if the status is {@code APPLIED}
+   * @param estimate updated if the status {@code isApplied()}
    * @param measurement read
    * @return how it ended
    * @throws IllegalArgumentException if the measurement or the estimate has the wrong size, or the
@@ -76,7 +79,7 @@ public final class SensorPort {
   /**
    * Updates an estimate with a measurement of its own time.
    *
-   * @param estimate updated if the status is {@code APPLIED}
+   * @param estimate updated if the status {@code isApplied()}
    * @param measurement in the sensor's measurement space, read
    * @param given as many numbers as the sensor model wants, read
    * @return how it ended
@@ -88,6 +91,7 @@ public final class SensorPort {
     Checks.length("given", given, sensor.givenDimension());
     evaluations = 0;
     jacobians = 0;
+    estimatedError = Double.NaN;
     innovation.clear();
     estimateTime = estimate.time();
     interrupted = true;
@@ -110,14 +114,15 @@ public final class SensorPort {
       return StepStatus.NOISE_NOT_VALID;
     }
     StepStatus weighed = weigh(prior, measurement, given);
-    if (weighed != StepStatus.APPLIED) {
+    if (!weighed.isApplied()) {
       return weighed;
     }
     StepStatus conditioned = condition(prior, measurement, given);
-    if (conditioned == StepStatus.APPLIED) {
-      estimate.replace(estimateTime, posterior.moments());
+    if (conditioned != StepStatus.APPLIED) {
+      return conditioned;
     }
-    return conditioned;
+    estimate.replace(estimateTime, posterior.moments());
+    return weighed;
   }
 
   /** Predicts the measurement and holds the innovation against the gate. */
@@ -125,8 +130,10 @@ public final class SensorPort {
     MatchingStatus matched = matching.carry(prior, given, noise.covariance(), Use.UPDATE);
     evaluations = matching.evaluations();
     jacobians = matching.jacobians();
-    if (matched != MatchingStatus.MATCHED) {
-      return StepStatus.of(matched);
+    estimatedError = matching.estimatedError();
+    StepStatus judged = plan.judge(StepStatus.of(matched));
+    if (!judged.isApplied()) {
+      return judged;
     }
     if (!innovation.weigh(measurement)) {
       return StepStatus.NOT_DEFINITE;
@@ -134,9 +141,7 @@ public final class SensorPort {
     if (innovation.squared() > gateLimit) {
       return StepStatus.GATED;
     }
-    return Double.isFinite(innovation.squared())
-        ? StepStatus.APPLIED
-        : StepStatus.RESULT_NOT_FINITE;
+    return Double.isFinite(innovation.squared()) ? judged : StepStatus.RESULT_NOT_FINITE;
   }
 
   private StepStatus condition(Moments prior, double[] measurement, double[] given) {
@@ -191,7 +196,12 @@ public final class SensorPort {
     return jacobians;
   }
 
-  /** {@return why the last update was not applied, in words; empty if it was} */
+  /** {@return the estimated error of the last update's moments, as {@code MatchingWorkspace.estimatedError()}} */
+  public double estimatedError() {
+    return estimatedError;
+  }
+
+  /** {@return why the last update was not applied, or not within its tolerance, in words; else empty} */
   public String failure() {
     if (status == StepStatus.APPLIED && !interrupted) {
       return "";

@@ -2,10 +2,20 @@ package dev.estimation.filters.filter;
 
 import dev.estimation.core.matching.MatchingStatus;
 
-/** How a step ended. Only {@link #APPLIED} changes the estimate. */
+/** How a step ended. Only {@link #APPLIED} and {@link #APPLIED_BELOW_TOLERANCE} change the estimate. */
 public enum StepStatus {
   /** The estimate has changed (or the prediction was over no time). */
   APPLIED,
+  /**
+   * The estimate has changed, but the moments behind the step are not within the tolerance that was asked for. Only with
+   * {@code ToleranceMatching}; a plan may refuse such steps.
+   */
+  APPLIED_BELOW_TOLERANCE,
+  /**
+   * The moments behind the step are not within the tolerance that was asked for, and the plan refuses such steps. Usual
+   * causes: a function that is not smooth at the scale of the spread, a budget too small for the number of inputs.
+   */
+  BELOW_TOLERANCE,
   /** The gate rejected the measurement. Usual causes: an outlier, an overconfident estimate. */
   GATED,
   /** The time of the step lies before the estimate. Usual cause: late data. */
@@ -36,9 +46,15 @@ public enum StepStatus {
   /** The result overflows. Usual causes: an innovation or a variance of absurd size. */
   RESULT_NOT_FINITE;
 
+  /** {@return whether the estimate has changed, or the prediction was over no time} */
+  public boolean isApplied() {
+    return this == APPLIED || this == APPLIED_BELOW_TOLERANCE;
+  }
+
   static StepStatus of(MatchingStatus matched) {
     return switch (matched) {
       case MATCHED -> APPLIED;
+      case BELOW_TOLERANCE -> APPLIED_BELOW_TOLERANCE;
       case FUNCTION_NOT_FINITE, JACOBIAN_NOT_FINITE -> MODEL_NOT_FINITE;
       case FUNCTION_CHANGED_INPUT -> MODEL_CHANGED_INPUT;
       case INPUT_NOT_DEFINITE, OUTPUT_NOT_DEFINITE -> NOT_DEFINITE;

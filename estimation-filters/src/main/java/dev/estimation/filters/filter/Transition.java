@@ -25,7 +25,7 @@ abstract class Transition {
     this.mean = new double[matching.output().mean().length];
   }
 
-  /** Carries the moments of the state; {@link #output()} is valid if the status is APPLIED. */
+  /** Carries the moments of the state; {@link #output()} is valid if the status is an applied one. */
   final StepStatus carry(Moments prior, double[] control, double time, double dt) {
     matched = false;
     // A copy, since a model may write on what it is given, against its contract.
@@ -36,10 +36,10 @@ abstract class Transition {
     }
     matched = true;
     MatchingStatus ended = match(prior, control, time, dt, noise.covariance(), matching);
-    if (ended != MatchingStatus.MATCHED) {
+    if (!ended.hasResult()) {
       return StepStatus.of(ended);
     }
-    return output().factor() ? StepStatus.APPLIED : StepStatus.NOT_DEFINITE;
+    return output().factor() ? StepStatus.of(ended) : StepStatus.NOT_DEFINITE;
   }
 
   abstract void fillNoise(
@@ -116,6 +116,10 @@ abstract class Transition {
 
   final int jacobians() {
     return matched ? matching.jacobians() : 0;
+  }
+
+  final double estimatedError() {
+    return matched ? matching.estimatedError() : Double.NaN;
   }
 
   /** Why the last carry ended with the given status. */

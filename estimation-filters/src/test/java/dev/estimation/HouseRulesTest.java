@@ -57,6 +57,7 @@ class HouseRulesTest {
       core.matching       -> core.internal core.space core.gaussian core.function core.points
       core.accuracy       -> core.internal core.space core.gaussian core.function core.points core.matching
       filters.model       -> core.*
+      filters.motion      -> core.* filters.model
       filters.consistency -> core.*
       filters.filter      -> core.* filters.model filters.consistency
       filters.smoother    -> core.* filters.filter

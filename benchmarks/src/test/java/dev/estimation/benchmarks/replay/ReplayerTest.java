@@ -4,11 +4,11 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import dev.estimation.benchmarks.cases.motion.ConstantVelocity;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.Linearisation;
 import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.UnscentedRule;
+import dev.estimation.filters.motion.ConstantVelocity;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;

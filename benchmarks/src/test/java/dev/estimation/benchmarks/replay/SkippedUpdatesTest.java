@@ -3,11 +3,11 @@ package dev.estimation.benchmarks.replay;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import dev.estimation.benchmarks.cases.motion.ConstantVelocity;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.filter.IteratedUpdate;
 import dev.estimation.filters.model.DifferentiableSensor;
+import dev.estimation.filters.motion.ConstantVelocity;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;

@@ -4,10 +4,10 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import dev.estimation.benchmarks.cases.motion.ConstantVelocity;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.Linearisation;
 import dev.estimation.filters.model.MotionModel;
+import dev.estimation.filters.motion.ConstantVelocity;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;

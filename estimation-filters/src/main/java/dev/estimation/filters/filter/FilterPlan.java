@@ -205,9 +205,10 @@ public final class FilterPlan {
   }
 
   Transition transition() {
-    return motion instanceof MotionModel additive
+    Motion own = motion.forOneThread();
+    return own instanceof MotionModel additive
         ? new AdditiveTransition(additive, this)
-        : new NoiseDrivenTransition((NoiseDrivenMotion) motion, this);
+        : new NoiseDrivenTransition((NoiseDrivenMotion) own, this);
   }
 
   Form form() {

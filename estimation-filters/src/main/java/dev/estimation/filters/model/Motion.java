@@ -23,4 +23,14 @@ public sealed interface Motion permits MotionModel, NoiseDrivenMotion {
   default Structure structure() {
     return Structure.UNKNOWN;
   }
+
+  /**
+   * This model for the use of one thread, so that it may keep scratch and need not allocate at each call; the same
+   * motion and the same interfaces. A workspace asks for it when it is made. Itself unless said otherwise.
+   *
+   * @return the model for one thread
+   */
+  default Motion forOneThread() {
+    return this;
+  }
 }

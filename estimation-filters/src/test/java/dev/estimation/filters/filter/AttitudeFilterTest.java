@@ -14,6 +14,7 @@ import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.consistency.ChiSquareBounds;
 import dev.estimation.filters.consistency.NormalisedError;
+import dev.estimation.filters.motion.GyroscopeAttitude;
 import dev.estimation.filters.testing.Attitude;
 import dev.estimation.filters.testing.AttitudeRun;
 import dev.estimation.filters.testing.BothForms;
@@ -43,7 +44,7 @@ class AttitudeFilterTest extends BothForms {
   /** 1e-9: central differences are right to about 1e-10, times columns of size 1. */
   @Test
   void jacobiansAreThoseOfTheModels() {
-    Attitude.Gyroscopes motion = new Attitude.Gyroscopes(1, 1);
+    GyroscopeAttitude motion = new GyroscopeAttitude(1, 1);
     for (double rate : new double[] {1e-5, 0.4, 5}) {
       double[] rates = {rate, -2 * rate, 1.5 * rate};
       double[] got = new double[36];
@@ -117,7 +118,7 @@ class AttitudeFilterTest extends BothForms {
   @ParameterizedTest
   @MethodSource("matchings")
   void measuredAttitudesAreAveraged(MomentMatching matching) {
-    FilterPlan plan = formed(FilterPlan.of(new Attitude.Gyroscopes(0.01, 0.001), matching));
+    FilterPlan plan = formed(FilterPlan.of(new GyroscopeAttitude(1e-4, 1e-6), matching));
     StackedPort cameras = plan.workspace().port(new Attitude.Camera(0.01), 2);
     double[] mean = {1, 0, 0, 0, 0, 0, 0};
     Estimate estimate = plan.start(

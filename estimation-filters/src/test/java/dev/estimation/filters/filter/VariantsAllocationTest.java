@@ -6,6 +6,7 @@ import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
+import dev.estimation.filters.motion.GyroscopeAttitude;
 import dev.estimation.filters.testing.Attitude;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.ChainMotion;
@@ -69,7 +70,7 @@ class VariantsAllocationTest extends BothForms {
   @MethodSource("matchings")
   void quaternions(MomentMatching matching) {
     double[] state = {0.5, -0.5, 0.5, 0.5, 0.01, -0.02, 0.03};
-    FilterPlan plan = formed(FilterPlan.of(new Attitude.Gyroscopes(0.01, 0.001), matching));
+    FilterPlan plan = formed(FilterPlan.of(new GyroscopeAttitude(1e-4, 1e-6), matching));
     FilterWorkspace work = plan.workspace();
     SensorPort direction = work.port(new Attitude.Direction(0.1));
     SensorPort camera = work.port(new Attitude.Camera(0.1));

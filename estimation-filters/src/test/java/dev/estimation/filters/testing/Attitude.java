@@ -2,7 +2,6 @@ package dev.estimation.filters.testing;
 
 import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableMotion;
 import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
@@ -16,71 +15,6 @@ public final class Attitude {
   private static final Space ROTATION = Space.unitQuaternion();
 
   private Attitude() {}
-
-  /** Turns by the measured rates, which are the control, less the bias. */
-  public record Gyroscopes(double rateDensity, double biasDensity) implements DifferentiableMotion {
-    @Override
-    public Space stateSpace() {
-      return SPACE;
-    }
-
-    @Override
-    public int controlDimension() {
-      return 3;
-    }
-
-    @Override
-    public void move(double[] state, double[] control, double time, double dt, double[] next) {
-      for (int i = 0; i < 3; i++) {
-        next[4 + i] = (control[i] - state[4 + i]) * dt;
-      }
-      ROTATION.displace(state, next, 4, next, 0);
-      System.arraycopy(state, 4, next, 4, 3);
-    }
-
-    /** [exp(-p), -dt J(p); 0, I] with p the turn and J the right Jacobian of exp. */
-    @Override
-    public void moveJacobian(
-        double[] state, double[] control, double time, double dt, double[] jacobian) {
-      double x = (control[0] - state[4]) * dt;
-      double y = (control[1] - state[5]) * dt;
-      double z = (control[2] - state[6]) * dt;
-      double t = Math.sqrt(x * x + y * y + z * z);
-      // Series below 1e-4: the next terms are t^2 / 20 of the last, and smaller.
-      double a = t < 1e-4 ? 1 : Math.sin(t) / t;
-      double b = t < 1e-4 ? 0.5 : (1 - Math.cos(t)) / (t * t);
-      double c = t < 1e-4 ? 1 / 6.0 : (t - Math.sin(t)) / (t * t * t);
-      fill(jacobian, 0, 1, -a, b, x, y, z);
-      fill(jacobian, 3, -dt, dt * b, -dt * c, x, y, z);
-      for (int i = 3; i < 6; i++) {
-        jacobian[i * 7] = 1;
-      }
-    }
-
-    /** The 3 x 3 block k I + l [p]x + m [p]x^2 at a column. */
-    private static void fill(
-        double[] jacobian, int column, double k, double l, double m, double x, double y, double z) {
-      double own = k - m * (x * x + y * y + z * z);
-      jacobian[column] = own + m * x * x;
-      jacobian[column + 1] = m * x * y - l * z;
-      jacobian[column + 2] = m * x * z + l * y;
-      jacobian[column + 6] = m * x * y + l * z;
-      jacobian[column + 7] = own + m * y * y;
-      jacobian[column + 8] = m * y * z - l * x;
-      jacobian[column + 12] = m * x * z - l * y;
-      jacobian[column + 13] = m * y * z + l * x;
-      jacobian[column + 14] = own + m * z * z;
-    }
-
-    @Override
-    public void processNoise(
-        double[] state, double[] control, double time, double dt, double[] covariance) {
-      for (int i = 0; i < 3; i++) {
-        covariance[i * 7] = rateDensity * rateDensity * dt;
-        covariance[(3 + i) * 7] = biasDensity * biasDensity * dt;
-      }
-    }
-  }
 
   /** The direction in the body of a vector of the world that is given: h = R(q)' u. */
   public record Direction(double deviation) implements DifferentiableSensor {

@@ -8,6 +8,7 @@ import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.FilterWorkspace;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
+import dev.estimation.filters.motion.GyroscopeAttitude;
 import java.util.SplittableRandom;
 
 /** A body that turns about changing axes, simulated by the very models that the filter has. */
@@ -18,7 +19,7 @@ public final class AttitudeRun {
   private static final double DT = 0.1;
   private static final double[][] WORLD = {{0, 0, 1}, {0.6, 0.8, 0}};
 
-  private final Attitude.Gyroscopes motion = new Attitude.Gyroscopes(0.01, 0.001);
+  private final GyroscopeAttitude motion = new GyroscopeAttitude(1e-4, 1e-6);
   private final Attitude.Direction sensor = new Attitude.Direction(0.02);
   private final FilterPlan plan;
   private final FilterWorkspace work;

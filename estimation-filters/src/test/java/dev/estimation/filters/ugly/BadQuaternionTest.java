@@ -16,6 +16,7 @@ import dev.estimation.filters.filter.IteratedUpdate;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableMotion;
+import dev.estimation.filters.motion.GyroscopeAttitude;
 import dev.estimation.filters.testing.Attitude;
 import dev.estimation.filters.testing.Bits;
 import dev.estimation.filters.testing.BothForms;
@@ -30,7 +31,7 @@ import org.junit.jupiter.params.provider.MethodSource;
 
 /** Quaternions that are none: zero, NaN, of the wrong length, from outside and from models. */
 class BadQuaternionTest extends BothForms {
-  private static final Attitude.Gyroscopes MOTION = new Attitude.Gyroscopes(0.01, 0.001);
+  private static final GyroscopeAttitude MOTION = new GyroscopeAttitude(1e-4, 1e-6);
   private static final double[] MEAN = {1, 0, 0, 0, 0, 0, 0};
   private static final double[] DEVIATIONS = {0.1, 0.1, 0.1, 0.01, 0.01, 0.01};
   private static final Gaussian START = Gaussian.independent(Attitude.SPACE, MEAN, DEVIATIONS);
@@ -93,7 +94,7 @@ class BadQuaternionTest extends BothForms {
         () -> formed(FilterPlan.iteratedExtended(MOTION, IteratedUpdate.undamped())),
         "reals and angles",
         "unit quaternion",
-        "Gyroscopes");
+        "GyroscopeAttitude");
     NormalisedError error = NormalisedError.of(Attitude.SPACE, 0, 1, 2);
     assertRefused(() -> error.squared(START, new double[3]), "unit quaternion", "squaredFrom");
     assertRefused(() -> error.squaredFrom(START, new double[6]), "7", "6");

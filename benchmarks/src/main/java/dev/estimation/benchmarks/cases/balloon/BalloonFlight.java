@@ -1,11 +1,11 @@
 package dev.estimation.benchmarks.cases.balloon;
 
-import dev.estimation.benchmarks.cases.motion.ConstantVelocity;
 import dev.estimation.benchmarks.replay.InterpolatedTruth;
 import dev.estimation.benchmarks.replay.Measurement;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.benchmarks.replay.Step;
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.filters.motion.ConstantVelocity;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;

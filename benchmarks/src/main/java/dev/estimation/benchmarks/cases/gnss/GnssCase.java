@@ -6,6 +6,10 @@ import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.filters.model.MotionModel;
+import dev.estimation.filters.motion.MotionBlocks;
+import dev.estimation.filters.motion.RandomWalk;
+import dev.estimation.filters.motion.ReceiverClock;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -26,8 +30,14 @@ public final class GnssCase implements ReplayCase {
   private static final double[] DIRECTION = {0.6, -0.48, 0.64};
   private static final double[] START_DEVIATIONS = {DISTANCE, DISTANCE, DISTANCE, 3e5, 10};
 
-  private final ReceiverAtRest motion =
-      new ReceiverAtRest(POSITION_DENSITY, CLOCK_DENSITY, DRIFT_DENSITY);
+  /**
+   * A place (m, Earth-fixed) that walks at random, a little, to keep its covariance honest when errors stay the same
+   * for minutes; and the clock (m, m/s).
+   */
+  private final MotionModel motion = MotionBlocks.of(
+      new RandomWalk(POSITION_DENSITY, POSITION_DENSITY, POSITION_DENSITY),
+      new ReceiverClock(CLOCK_DENSITY, DRIFT_DENSITY));
+
   private final String logName;
   private final GnssLog log;
 

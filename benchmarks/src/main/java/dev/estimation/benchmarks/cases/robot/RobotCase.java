@@ -5,6 +5,7 @@ import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.filters.motion.PlanarVehicle;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -21,7 +22,7 @@ public final class RobotCase implements ReplayCase {
   private static final double GATE = 0.999;
   private static final List<String> VARIANTS = List.of("near", "wide");
 
-  private final ArcMotion motion = new ArcMotion(SPEED_DENSITY, TURN_DENSITY);
+  private final PlanarVehicle motion = new PlanarVehicle(SPEED_DENSITY, TURN_DENSITY);
   private final LandmarkSensor sensor = new LandmarkSensor(RANGE_DEVIATION, BEARING_DEVIATION);
   private final String logName;
   private final RobotLog log;

@@ -1,11 +1,11 @@
 package dev.estimation.benchmarks.cases.uwb;
 
-import dev.estimation.benchmarks.cases.motion.ConstantVelocity;
 import dev.estimation.benchmarks.log.LogFolder;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.core.gaussian.Gaussian;
+import dev.estimation.filters.motion.ConstantVelocity;
 import java.util.List;
 import java.util.OptionalDouble;
 

@@ -1,6 +1,5 @@
 package dev.estimation.benchmarks.cases.vessel;
 
-import dev.estimation.benchmarks.cases.motion.ConstantVelocity;
 import dev.estimation.benchmarks.log.LogFolder;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.Measurement;
@@ -9,6 +8,8 @@ import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.benchmarks.replay.Step;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.model.MotionModel;
+import dev.estimation.filters.motion.ConstantVelocity;
+import dev.estimation.filters.motion.CoordinatedTurn;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;

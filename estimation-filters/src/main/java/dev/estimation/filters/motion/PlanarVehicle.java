@@ -1,35 +1,42 @@
-package dev.estimation.benchmarks.cases.robot;
+package dev.estimation.filters.motion;
 
-import dev.estimation.benchmarks.cases.motion.TurnArc;
 import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
 
 /**
- * A robot that holds its commanded speed and turn rate over each step, both disturbed by white
- * noise, and so drives an arc. State: x, y (m), heading (rad). Control: speed (m/s), turn rate
- * (rad/s). Noise is added to the two controls. With u half the angle turned, the chord is speed dt
- * sin(u)/u long and points to heading + u. <i>Immutable.</i>
+ * A vehicle in the plane that holds its commanded speed and yaw rate over each step, both disturbed by white noise, and
+ * so drives an arc. State: x, y (m), heading (rad, from x towards y). Control: speed (m/s), yaw rate (rad/s). Noise:
+ * n, added to the two controls. With v = speed + n_0 and u = (yaw rate + n_1) dt / 2, half the angle turned,
+ *
+ * <pre>
+ * x' = x + v dt sin(u)/u cos(heading + u)
+ * y' = y + v dt sin(u)/u sin(heading + u)        heading' = heading + 2 u
+ * </pre>
+ *
+ * <p>Noise held over the step has the variance density / dt. Linear in place and in the noise of the speed once heading
+ * and the noise of the yaw rate are given. <i>Immutable.</i> Allocates nothing. Source: Thrun, Burgard and Fox 2005,
+ * <i>Probabilistic Robotics</i>, section 5.3 (from memory), the arc written by its chord.
  */
-final class ArcMotion implements DifferentiableNoiseDrivenMotion {
+public final class PlanarVehicle implements DifferentiableNoiseDrivenMotion {
   private static final FlatSpace SPACE = Space.reals(2).and(Space.angles(1));
 
-  /** Place and noise of the speed; bent by heading and noise of the turn rate. */
+  /** Place and noise of the speed; bent by heading and noise of the yaw rate. */
   private static final Structure LINEAR = Structure.UNKNOWN.withLinearInputs(0, 1, 3);
 
   private final double speedDensity;
-  private final double turnDensity;
+  private final double yawDensity;
 
   /**
    * The model.
    *
-   * @param speedDensity spectral density of the noise of the speed (m^2/s)
-   * @param turnDensity spectral density of the noise of the turn rate (rad^2/s)
+   * @param speedDensity spectral density of the noise of the speed (m^2/s), finite and 0 or more
+   * @param yawDensity spectral density of the noise of the yaw rate (rad^2/s), finite and 0 or more
    */
-  ArcMotion(double speedDensity, double turnDensity) {
-    this.speedDensity = speedDensity;
-    this.turnDensity = turnDensity;
+  public PlanarVehicle(double speedDensity, double yawDensity) {
+    this.speedDensity = Parameters.notNegative("PlanarVehicle speedDensity", speedDensity);
+    this.yawDensity = Parameters.notNegative("PlanarVehicle yawDensity", yawDensity);
   }
 
   @Override
@@ -95,6 +102,6 @@ final class ArcMotion implements DifferentiableNoiseDrivenMotion {
   @Override
   public void noiseCovariance(double[] control, double time, double dt, double[] covariance) {
     covariance[0] = speedDensity / dt;
-    covariance[3] = turnDensity / dt;
+    covariance[3] = yawDensity / dt;
   }
 }

@@ -1,4 +1,4 @@
-package dev.estimation.benchmarks.cases.motion;
+package dev.estimation.filters.motion;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 

@@ -1,2 +1,0 @@
-/** Motion models that several cases share. */
-package dev.estimation.benchmarks.cases.motion;

@@ -61,6 +61,7 @@ class HouseRulesTest {
       filters.consistency -> core.*
       filters.filter      -> core.* filters.model filters.consistency
       filters.smoother    -> core.* filters.filter
+      filters.modelcheck  -> core.* filters.model
       """;
 
   /** Types of which a static field, though final, would still be shared state that changes. */

@@ -7,5 +7,7 @@
  * <p>Noise covariances, Jacobians and active inputs are those of differences in the space, with d numbers where
  * a point may have more: a rotation has noise in its three directions, and column j of a Jacobian is the
  * derivative by a displacement of the state along j.
+ *
+ * <p>{@link dev.estimation.filters.modelcheck.ModelCheck} examines a model of one's own in a unit test.
  */
 package dev.estimation.filters.model;

@@ -3,6 +3,7 @@ package dev.estimation.filters.modelcheck;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import dev.estimation.core.space.Space;
+import dev.estimation.filters.motion.GyroscopeAttitude;
 import dev.estimation.filters.testing.Attitude;
 import java.util.List;
 import org.junit.jupiter.api.Test;
@@ -73,7 +74,7 @@ class CleanModelsTest {
         with.over(satellite(1e5)).examine(new CleanModels.Pseudorange()),
         with.over(satellite(1)).examine(new CleanModels.Pseudorange()),
         with.over(cart()).examine(new CleanModels.Cart()),
-        with.over(attitude()).examine(new Attitude.Gyroscopes(1e-3, 1e-5)),
+        with.over(attitude()).examine(new GyroscopeAttitude(1e-6, 1e-10)),
         with.over(mooring()).examine(new CleanModels.Mooring()),
         with.over(masts()).examine(new CleanModels.DistanceDifference()),
         with.over(attitudeAlone().withGiven(new double[] {0.2, 0.2, 0.2}, new double[] {1, 1, 1}))

@@ -58,6 +58,8 @@ class HouseRulesTest {
       core.accuracy       -> core.internal core.space core.gaussian core.function core.points core.matching
       filters.model       -> core.*
       filters.motion      -> core.* filters.model
+      filters.sensor      -> core.* filters.model
+      filters.geodesy     -> core.internal
       filters.consistency -> core.*
       filters.filter      -> core.* filters.model filters.consistency
       filters.smoother    -> core.* filters.filter

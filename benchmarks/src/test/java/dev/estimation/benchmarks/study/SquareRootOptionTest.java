@@ -15,9 +15,11 @@ import org.junit.jupiter.api.io.TempDir;
 
 /** Both forms of every method run on every case give the same estimates, and say which form they were. */
 class SquareRootOptionTest {
+  private static final String ITERATED = "linear-iterated:line-search";
+
   private static final List<String> METHODS = List.of(
       "linear",
-      "linear-iterated:line-search",
+      ITERATED,
       "linear-spread",
       "linear2-axes",
       "unscented:1,2,0",
@@ -35,7 +37,18 @@ class SquareRootOptionTest {
   /** 1e-9 standard deviations: rounding over a flight of 60 steps and more. */
   @Test
   void theSimulatedFlight() throws IOException {
-    compare(METHODS, 1e-9, "replay");
+    List<String> others =
+        METHODS.stream().filter(method -> !method.equals(ITERATED)).toList();
+    compare(others, 1e-9, "replay");
+  }
+
+  /**
+   * An iteration ends when a step is below 1e-9 standard deviations of the prior, which rounding may decide a round sooner or later:
+   * in the first update these are 4 km and afterwards some metres, so a round counts up to 1e-5 standard deviations.
+   */
+  @Test
+  void theSimulatedFlightByIteration() throws IOException {
+    compare(List.of(ITERATED, "simplex"), 1e-5, "replay");
   }
 
   @Test

@@ -7,9 +7,11 @@ import dev.estimation.filters.model.SensorModel;
  * rows may change from update to update, up to a maximum; the noise of different rows is independent.
  *
  * <p>Compared with updates one after another, the rows are linearised (or sampled) about the same
- * estimate, and the gate judges them together. Scratch for every number of rows is made at set-up: some M^3
- * and M^2 d numbers for at most M rows of one component in a state of dimension d. <i>Confined to one
- * thread</i>; allocates only when built and in {@link SensorPort#failure()}.
+ * estimate, and the gate judges them together. What the sensor declares holds for the rows: points are drawn over its
+ * active inputs that are not linear, once for all rows, and its Jacobian and Hessian are there for matchings by derivatives.
+ *
+ * <p>Scratch for every number of rows is made at set-up: some M^3 and M^2 d numbers for at most M rows of one component in a
+ * state of dimension d. <i>Confined to one thread</i>; allocates only when built and in {@link SensorPort#failure()}.
  */
 public final class StackedPort {
   private final String name;

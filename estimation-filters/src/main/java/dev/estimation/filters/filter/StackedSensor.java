@@ -7,7 +7,11 @@ import dev.estimation.filters.model.SensorModel;
 import dev.estimation.filters.model.TwiceDifferentiableSensor;
 import java.util.Arrays;
 
-/** A number of rows of one sensor as one measurement, with independent noise. Owned by one port. */
+/**
+ * A number of rows of one sensor as one measurement, with independent noise. Its structure and derivatives are those of the
+ * sensor. It has scratch for a row, so it is no model to be shared: it is owned by one port, and users stack rows by a {@link
+ * StackedPort}.
+ */
 class StackedSensor implements SensorModel {
   final int rows;
   final int width;

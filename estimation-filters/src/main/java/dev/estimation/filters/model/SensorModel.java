@@ -9,7 +9,8 @@ import dev.estimation.core.space.Space;
  * <p>{@code given} is what is known with each measurement: the place of an anchor, of the own ship, of
  * a satellite. Units are SI and radians. Implementations are called by many threads at once and must
  * not keep state that changes. A model that also has a Jacobian is a {@link DifferentiableSensor},
- * one that has a Hessian too a {@link TwiceDifferentiableSensor}.
+ * one that has a Hessian too a {@link TwiceDifferentiableSensor}. A sensor for part of a state takes the places of
+ * its components when it is built; ready ones are in {@code filters.sensor}.
  */
 public interface SensorModel {
   /** {@return where measurements live: which components are angles} */

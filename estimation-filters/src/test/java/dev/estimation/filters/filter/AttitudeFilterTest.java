@@ -58,14 +58,6 @@ class AttitudeFilterTest extends BothForms {
           .evaluate(STATE, rates, wanted);
       assertVector("motion at " + rate, wanted, got, 1e-9, 1);
     }
-    Attitude.Direction sensor = new Attitude.Direction(1);
-    double[] direction = {0.6, 0, 0.8};
-    double[] got = new double[18];
-    double[] wanted = new double[18];
-    sensor.measureJacobian(STATE, direction, got);
-    new CentralDifferences(Attitude.SPACE, Space.reals(3), sensor::measure, SCALES)
-        .evaluate(STATE, direction, wanted);
-    assertVector("sensor", wanted, got, 1e-9, 1);
   }
 
   /**

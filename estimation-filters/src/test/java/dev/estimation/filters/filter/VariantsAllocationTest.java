@@ -72,7 +72,7 @@ class VariantsAllocationTest extends BothForms {
     double[] state = {0.5, -0.5, 0.5, 0.5, 0.01, -0.02, 0.03};
     FilterPlan plan = formed(FilterPlan.of(new GyroscopeAttitude(1e-4, 1e-6), matching));
     FilterWorkspace work = plan.workspace();
-    SensorPort direction = work.port(new Attitude.Direction(0.1));
+    SensorPort direction = work.port(Attitude.knownVector(0.1));
     SensorPort camera = work.port(new Attitude.Camera(0.1));
     StackedPort cameras = work.port(new Attitude.Camera(0.1), 2);
     Estimate estimate = plan.start(

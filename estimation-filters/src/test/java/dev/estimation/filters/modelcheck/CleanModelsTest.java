@@ -78,7 +78,7 @@ class CleanModelsTest {
         with.over(mooring()).examine(new CleanModels.Mooring()),
         with.over(masts()).examine(new CleanModels.DistanceDifference()),
         with.over(attitudeAlone().withGiven(new double[] {0.2, 0.2, 0.2}, new double[] {1, 1, 1}))
-            .examine(new Attitude.Direction(0.01)),
+            .examine(Attitude.knownVector(0.01)),
         with.over(attitudeAlone()).examine(new Attitude.Camera(0.01)));
   }
 

@@ -3,6 +3,8 @@ package dev.estimation.filters.testing;
 import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.KnownVector;
 
 /**
  * The attitude of a body with rate gyroscopes: a unit quaternion that turns vectors of the body into those
@@ -16,63 +18,9 @@ public final class Attitude {
 
   private Attitude() {}
 
-  /** The direction in the body of a vector of the world that is given: h = R(q)' u. */
-  public record Direction(double deviation) implements DifferentiableSensor {
-    @Override
-    public Space measurementSpace() {
-      return Space.reals(3);
-    }
-
-    @Override
-    public int givenDimension() {
-      return 3;
-    }
-
-    @Override
-    public void measure(double[] state, double[] given, double[] measurement) {
-      double w = state[0];
-      double x = state[1];
-      double y = state[2];
-      double z = state[3];
-      double a = given[0];
-      double b = given[1];
-      double c = given[2];
-      measurement[0] =
-          (w * w + x * x - y * y - z * z) * a + 2 * ((x * y + w * z) * b + (x * z - w * y) * c);
-      measurement[1] =
-          (w * w - x * x + y * y - z * z) * b + 2 * ((x * y - w * z) * a + (y * z + w * x) * c);
-      measurement[2] =
-          (w * w - x * x - y * y + z * z) * c + 2 * ((x * z + w * y) * a + (y * z - w * x) * b);
-    }
-
-    /** [h]x, formed with h in the first column's place. */
-    @Override
-    public void measureJacobian(double[] state, double[] given, double[] jacobian) {
-      measure(state, given, jacobian);
-      double a = jacobian[0];
-      double b = jacobian[1];
-      double c = jacobian[2];
-      int columns = jacobian.length / 3;
-      jacobian[0] = 0;
-      jacobian[1] = -c;
-      jacobian[2] = b;
-      jacobian[columns] = c;
-      jacobian[columns + 2] = -a;
-      jacobian[2 * columns] = -b;
-      jacobian[2 * columns + 1] = a;
-    }
-
-    @Override
-    public void measurementNoise(double[] state, double[] given, double[] covariance) {
-      for (int i = 0; i < 3; i++) {
-        covariance[i * 4] = deviation * deviation;
-      }
-    }
-
-    @Override
-    public Structure structure() {
-      return Structure.UNKNOWN.withActiveInputs(0, 1, 2);
-    }
+  /** {@return the sensor of a vector of the world that is given, as seen in the body} */
+  public static KnownVector knownVector(double deviation) {
+    return new KnownVector(Components.of(0, 1, 2, 3), deviation);
   }
 
   /** The attitude itself, as a star camera gives it; of any sign. */

@@ -9,6 +9,7 @@ import dev.estimation.filters.filter.FilterWorkspace;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.motion.GyroscopeAttitude;
+import dev.estimation.filters.sensor.KnownVector;
 import java.util.SplittableRandom;
 
 /** A body that turns about changing axes, simulated by the very models that the filter has. */
@@ -20,7 +21,7 @@ public final class AttitudeRun {
   private static final double[][] WORLD = {{0, 0, 1}, {0.6, 0.8, 0}};
 
   private final GyroscopeAttitude motion = new GyroscopeAttitude(1e-4, 1e-6);
-  private final Attitude.Direction sensor = new Attitude.Direction(0.02);
+  private final KnownVector sensor = Attitude.knownVector(0.02);
   private final FilterPlan plan;
   private final FilterWorkspace work;
   private final SensorPort port;

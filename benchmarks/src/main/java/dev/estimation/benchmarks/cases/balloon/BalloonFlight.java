@@ -6,6 +6,9 @@ import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.benchmarks.replay.Step;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.motion.ConstantVelocity;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.RangeAzimuthElevation;
+import dev.estimation.filters.sensor.Sight;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.OptionalDouble;
@@ -35,9 +38,13 @@ final class BalloonFlight {
 
   private final ConstantVelocity motion =
       new ConstantVelocity(WIND_DENSITY, WIND_DENSITY, ASCENT_DENSITY);
-  private final GroundStation station = new GroundStation(RANGE_DEVIATION, ANGLE_DEVIATION);
+  /** At the origin. The state begins with east, north and up; azimuths are from north to east. */
+  private final RangeAzimuthElevation station = new RangeAzimuthElevation(
+      Sight.fromGiven(Components.of(1, 0, 2)), RANGE_DEVIATION, ANGLE_DEVIATION, ANGLE_DEVIATION);
+
   private final Random random;
   private final double[] state = new double[2 * AXES];
+  private final double[] origin = new double[AXES];
 
   BalloonFlight(long seed) {
     this.random = new Random(seed);
@@ -80,10 +87,10 @@ final class BalloonFlight {
 
   private Measurement measure() {
     double[] value = new double[AXES];
-    station.measure(state, new double[0], value);
+    station.measure(state, origin, value);
     value[0] += RANGE_DEVIATION * random.nextGaussian();
     value[1] += ANGLE_DEVIATION * random.nextGaussian();
     value[2] += ANGLE_DEVIATION * random.nextGaussian();
-    return new Measurement(station, value);
+    return new Measurement(station, value, origin);
   }
 }

@@ -10,6 +10,9 @@ import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.motion.MotionBlocks;
 import dev.estimation.filters.motion.RandomWalk;
 import dev.estimation.filters.motion.ReceiverClock;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.Pseudorange;
+import dev.estimation.filters.sensor.Sight;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -24,8 +27,6 @@ public final class GnssCase implements ReplayCase {
   private static final double POSITION_DENSITY = 1e-3;
   private static final double CLOCK_DENSITY = 1e-3;
   private static final double DRIFT_DENSITY = 1e-8;
-  private static final double DEVIATION = 0.8;
-  private static final double LOW_DEVIATION = 0.8;
   private static final double DISTANCE = 1e5;
   private static final double[] DIRECTION = {0.6, -0.48, 0.64};
   private static final double[] START_DEVIATIONS = {DISTANCE, DISTANCE, DISTANCE, 3e5, 10};
@@ -44,7 +45,8 @@ public final class GnssCase implements ReplayCase {
   /** The case on a log, which is read here. */
   public GnssCase(LogFolder folder) {
     this.logName = folder.name();
-    this.log = new GnssLog(folder, new Pseudorange(DEVIATION, LOW_DEVIATION));
+    Sight satellite = Sight.fromGiven(Components.of(0, 1, 2));
+    this.log = new GnssLog(folder, Pseudorange.ofGivenDeviation(satellite, Components.of(3)));
   }
 
   @Override

@@ -12,6 +12,12 @@ import java.util.Optional;
 
 /** The pseudoranges of a log as steps: one for each run of rows of one time, stacked. */
 final class GnssLog {
+  /** Standard deviation of the error that is the same at every elevation (m). */
+  private static final double DEVIATION = 0.8;
+
+  /** That of the error that goes with 1 / sin(elevation) (m). */
+  private static final double LOW_DEVIATION = 0.8;
+
   private final List<Step> steps = new ArrayList<>();
   private final Optional<double[]> place;
 
@@ -57,9 +63,15 @@ final class GnssLog {
       satellites[i * width] = row.number("sat_x_m");
       satellites[i * width + 1] = row.number("sat_y_m");
       satellites[i * width + 2] = row.number("sat_z_m");
-      satellites[i * width + 3] = row.number("elevation_rad");
+      satellites[i * width + 3] = deviation(row.number("elevation_rad"));
     }
     return Measurement.stacked(sensor, ranges.length, ranges, satellites);
+  }
+
+  /** That of two independent errors: low satellites are heard with more noise. */
+  static double deviation(double elevation) {
+    double low = LOW_DEVIATION / Math.sin(elevation);
+    return Math.sqrt(DEVIATION * DEVIATION + low * low);
   }
 
   /** The pseudorange less what is known of its errors: all but noise and the receiver's clock. */

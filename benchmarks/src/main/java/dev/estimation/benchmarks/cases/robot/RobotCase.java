@@ -6,6 +6,9 @@ import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.motion.PlanarVehicle;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.RangeAndBearing;
+import dev.estimation.filters.sensor.Sight;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -23,7 +26,12 @@ public final class RobotCase implements ReplayCase {
   private static final List<String> VARIANTS = List.of("near", "wide");
 
   private final PlanarVehicle motion = new PlanarVehicle(SPEED_DENSITY, TURN_DENSITY);
-  private final LandmarkSensor sensor = new LandmarkSensor(RANGE_DEVIATION, BEARING_DEVIATION);
+  /** Of a given landmark, from the pose that is the state: x, y, heading. */
+  private final RangeAndBearing sensor = new RangeAndBearing(
+      Sight.toGiven(Components.of(0, 1)).relativeTo(Components.of(2)),
+      RANGE_DEVIATION,
+      BEARING_DEVIATION);
+
   private final String logName;
   private final RobotLog log;
 

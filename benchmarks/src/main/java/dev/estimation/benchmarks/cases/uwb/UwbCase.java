@@ -6,6 +6,9 @@ import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.motion.ConstantVelocity;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.Range;
+import dev.estimation.filters.sensor.Sight;
 import java.util.List;
 import java.util.OptionalDouble;
 
@@ -28,8 +31,8 @@ public final class UwbCase implements ReplayCase {
   public UwbCase(LogFolder folder, UwbSettings settings) {
     this.logName = folder.name();
     this.settings = settings;
-    AnchorRange sensor = new AnchorRange(settings.height(), settings.bias(), RANGE_DEVIATION);
-    this.log = new UwbLog(folder, sensor, settings.lag());
+    Sight anchor = Sight.fromGiven(Components.of(0, 1)).atHeight(settings.height());
+    this.log = new UwbLog(folder, new Range(anchor, RANGE_DEVIATION), settings);
   }
 
   @Override

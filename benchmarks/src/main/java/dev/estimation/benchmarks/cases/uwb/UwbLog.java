@@ -23,8 +23,8 @@ final class UwbLog {
   private final List<Step> steps = new ArrayList<>();
   private final Optional<Truth> truth;
 
-  UwbLog(LogFolder log, SensorModel sensor, double lag) {
-    readSteps(log, anchors(log), sensor, lag);
+  UwbLog(LogFolder log, SensorModel sensor, UwbSettings settings) {
+    readSteps(log, anchors(log), sensor, settings);
     this.truth = readTruth(log);
   }
 
@@ -42,19 +42,19 @@ final class UwbLog {
   }
 
   private void readSteps(
-      LogFolder log, Map<String, double[]> anchors, SensorModel sensor, double lag) {
+      LogFolder log, Map<String, double[]> anchors, SensorModel sensor, UwbSettings settings) {
     CsvTable table =
         CsvTable.read(log.file("ranges.csv"), "time_s", "anchor_id", "range_m").requireRows();
     List<Measurement> current = new ArrayList<>();
     double time = Double.NaN;
     for (CsvRow row : table.rows()) {
-      double rowTime = row.number("time_s") - lag;
+      double rowTime = row.number("time_s") - settings.lag();
       if (rowTime != time && !current.isEmpty()) {
         steps.add(new Step(time, current));
         current.clear();
       }
       time = rowTime;
-      double[] range = {row.number("range_m")};
+      double[] range = {row.number("range_m") - settings.bias()};
       current.add(new Measurement(sensor, range, anchor(row, anchors)));
     }
     steps.add(new Step(time, current));

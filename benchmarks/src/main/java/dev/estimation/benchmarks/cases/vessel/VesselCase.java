@@ -10,6 +10,9 @@ import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.motion.ConstantVelocity;
 import dev.estimation.filters.motion.CoordinatedTurn;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.RangeAndBearing;
+import dev.estimation.filters.sensor.Sight;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -29,7 +32,10 @@ public final class VesselCase implements ReplayCase {
   private static final List<String> VARIANTS =
       List.of("target1-cv", "target1-ct", "target2-cv", "target2-ct");
 
-  private final ShipRadar radar = new ShipRadar(4.0, 0.03);
+  /** From the own ship, whose north and east are given with each plot; the state begins with those of the target. */
+  private final RangeAndBearing radar =
+      new RangeAndBearing(Sight.fromGiven(Components.of(0, 1)), 4.0, 0.03);
+
   private final String logName;
   private final VesselLog log;
 

@@ -3,7 +3,6 @@ package dev.estimation.benchmarks.cases.balloon;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import dev.estimation.benchmarks.cases.ModelJacobians;
 import dev.estimation.benchmarks.replay.Accuracy;
 import dev.estimation.benchmarks.replay.Replayer;
 import dev.estimation.benchmarks.replay.RunResult;
@@ -12,7 +11,6 @@ import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.UnscentedRule;
-import dev.estimation.core.space.Space;
 import dev.estimation.filters.consistency.ChiSquareBounds;
 import java.util.stream.LongStream;
 import org.junit.jupiter.api.Test;
@@ -47,17 +45,6 @@ class BalloonTest {
   void theSameSeedGivesTheSameFlight() {
     assertEquals(nees(7, LINEAR), nees(7, LINEAR), 0);
     assertTrue(nees(7, LINEAR) != nees(8, LINEAR));
-  }
-
-  @Test
-  void stationJacobianIsThatOfTheMeasurement() {
-    GroundStation station = new GroundStation(3, 0.02);
-    double[] scales = {1000, 1000, 1000, 1, 1, 1};
-    double[] none = {};
-    double[] first = {18_000, 24_000, 8_000, 1, 2, 3};
-    ModelJacobians.sensor(station, Space.reals(6), first, none, scales);
-    double[] atTheSeamOfAzimuth = {1e-4, -9_000, 500, 1, 2, 3};
-    ModelJacobians.sensor(station, Space.reals(6), atTheSeamOfAzimuth, none, scales);
   }
 
   private static boolean isOutside(long seed, MomentMatching matching) {

@@ -44,7 +44,8 @@ class GnssLogTest {
     Measurement first = steps.get(0).measurements().get(0);
     assertEquals(2, first.rows());
     assertArrayEquals(new double[] {1089, 1878}, first.value(), 0);
-    assertArrayEquals(new double[] {1, 2, 3, 0.5, 4, 5, 6, 0.6}, first.given(), 0);
+    double[] given = {1, 2, 3, GnssLog.deviation(0.5), 4, 5, 6, GnssLog.deviation(0.6)};
+    assertArrayEquals(given, first.given(), 0);
     assertEquals(1, steps.get(1).measurements().get(0).rows());
   }
 

@@ -57,8 +57,6 @@ class ToleranceCountsTest {
         .moments();
     double error = MatchingError.of(reference, CarriedMoments.of(work, moments), Use.PREDICTION)
         .largest();
-    System.out.println(work.evaluations() + " of " + most + ", error " + error + ", estimated "
-        + work.estimatedError());
     assertTrue(work.evaluations() <= most, work.evaluations() + " evaluations, at most " + most);
     assertTrue(error <= 0.01, "true error " + error + ", estimated " + work.estimatedError());
   }

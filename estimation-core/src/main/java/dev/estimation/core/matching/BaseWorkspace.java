@@ -107,7 +107,7 @@ abstract class BaseWorkspace implements MatchingWorkspace {
   }
 
   /** The noise that is not finite, or another fault. */
-  private MatchingStatus faultOf(Covariance additiveNoise, MatchingStatus otherwise) {
+  final MatchingStatus faultOf(Covariance additiveNoise, MatchingStatus otherwise) {
     DMatrixRMaj matrix = additiveNoise.matrix();
     if (SymmetricMatrix.allFinite(matrix)) {
       return otherwise;

@@ -14,6 +14,8 @@ final class SlopeCheck {
   private final int rows;
   private final int columns;
   private final int stride;
+  private final ActiveFactor factor;
+  private final int[] inputs;
   private final double[] jacobian;
   private final double[] wanted;
   private final double[] values;
@@ -22,15 +24,17 @@ final class SlopeCheck {
   private final double[] unused;
   private boolean known;
 
-  /** A check of the axes, in blocks of rows x columns; of n inputs. */
-  SlopeCheck(NestedExpansion expansion, int axes, int rows, int columns, int inputs) {
+  /** A check of the axes, the first columns of a factor, in blocks of rows x columns. */
+  SlopeCheck(NestedExpansion expansion, int axes, int rows, int columns, ActiveFactor factor) {
     this.expansion = expansion;
     this.axes = axes;
     this.rows = rows;
     this.columns = columns;
+    this.factor = factor;
+    this.inputs = factor.inputs();
     NestedProjection projection = expansion.projection();
     this.stride = projection.degree(projection.levels() - 1) + 1;
-    this.jacobian = new double[rows * inputs];
+    this.jacobian = new double[rows * factor.factor().numCols];
     this.wanted = new double[axes * rows];
     this.values = new double[stride];
     this.slopes = new double[stride];
@@ -56,20 +60,20 @@ final class SlopeCheck {
   }
 
   /** Evaluates a Jacobian at the mean. */
-  void evaluate(Jacobian function, double[] mean, double[] given, ActiveFactor factor) {
+  void evaluate(Jacobian function, double[] mean, double[] given) {
     Arrays.fill(jacobian, 0);
     function.evaluate(mean, given, jacobian);
-    take(jacobian, factor);
+    take(jacobian);
   }
 
   /** Takes a Jacobian at the mean, over all inputs; one that is not finite is left aside. */
-  void take(double[] derivatives, ActiveFactor factor) {
+  void take(double[] derivatives) {
     known = Checks.allFinite(derivatives);
     int n = factor.factor().numCols;
     for (int axis = 0; axis < axes; axis++) {
       for (int row = 0; row < rows; row++) {
         double sum = 0;
-        for (int input : factor.inputs()) {
+        for (int input : inputs) {
           sum += derivatives[row * n + input] * factor.factor().data[input * n + axis];
         }
         wanted[axis * rows + row] = sum;

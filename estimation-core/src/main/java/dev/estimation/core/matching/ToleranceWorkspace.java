@@ -3,6 +3,7 @@ package dev.estimation.core.matching;
 import dev.estimation.core.function.Jacobian;
 import dev.estimation.core.function.VectorFunction;
 import dev.estimation.core.gaussian.Form;
+import dev.estimation.core.internal.SymmetricMatrix;
 import dev.estimation.core.space.Space;
 
 /** Carries moments to a tolerance; see {@link ToleranceMatching}. */
@@ -49,7 +50,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
     ExpansionNorms norms = new ExpansionNorms(expansion, axes, m, values.columns(), most);
     this.estimate = new ErrorEstimate(expansion, norms, probes, axes, width);
     this.refinement = new Refinement(expansion.set(), norms, axes);
-    this.slopes = new SlopeCheck(expansion, axes, m, values.columns(), n);
+    this.slopes = new SlopeCheck(expansion, axes, m, values.columns(), active);
     this.columns = new ExpansionColumns(expansion, axes, m, values.columns(), form);
     this.rounding = new double[m];
     this.shift = new double[m];
@@ -68,6 +69,9 @@ final class ToleranceWorkspace extends BaseWorkspace {
   MatchingStatus match(double[] mean, double[] given, Use use, double[] outputMean) {
     error = 0;
     reason = "";
+    if (noise() != null && !SymmetricMatrix.allFinite(noise().matrix())) {
+      return faultOf(noise(), MatchingStatus.NOISE_NOT_FINITE);
+    }
     values.begin(mean, given);
     int moving = moving();
     probes.begin(moving == 1 ? firstMoving() : -1);
@@ -129,9 +133,9 @@ final class ToleranceWorkspace extends BaseWorkspace {
   private void compareSlopes(double[] mean, double[] given) {
     slopes.forget();
     if (jacobian != null && values.columns() > 1) {
-      slopes.take(values.slopes().derivatives(), active);
+      slopes.take(values.slopes().derivatives());
     } else if (jacobian != null) {
-      slopes.evaluate(jacobian, copied(mean), given, active);
+      slopes.evaluate(jacobian, copied(mean), given);
       jacobians++;
     }
   }
@@ -150,7 +154,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
       int rest = (budget - evaluations()) / costOfNode;
       if (passes || (probes.size() == 0 && probes.hasNext())) {
         if (rest < 2) {
-          return below("the budget of " + budget + " evaluations has ended");
+          return below("the budget has ended");
         }
         probes.add();
         fresh = true;
@@ -158,7 +162,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
         expansion.add(refinement.member(), refinement.axis());
         fresh = false;
       } else {
-        return below("no more terms within the budget of " + budget + " evaluations");
+        return below("the budget has room for no further term");
       }
     }
     error = estimateError(use);
@@ -212,6 +216,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
 
   @Override
   String toleranceFailure() {
-    return "estimated error " + error + " is above the tolerance of " + tolerance + ": " + reason;
+    return "estimated error " + error + " is above the tolerance of " + tolerance + " after "
+        + evaluations() + " of at most " + budget + " evaluations: " + reason;
   }
 }

@@ -9,6 +9,9 @@
  * <table>
  *   <caption>Which matching for which need (n: number of active inputs)</caption>
  *   <tr><th>matching</th><th>evaluations</th><th>exact for</th><th>mind</th></tr>
+ *   <tr><td>{@code ToleranceMatching}</td><td>2 n + 3 (5 for n = 1) and what it takes</td><td>quadratic g without mixed
+ *     products at least</td><td>a tolerance instead of spread parameters; says how accurate it is; a call costs more arithmetic
+ *     than rules with as many points; never indefinite</td></tr>
  *   <tr><td>{@code Linearisation.firstOrder()}</td><td>1 and a Jacobian</td><td>affine g</td>
  *     <td>blind to curvature: bias and a covariance too small where g bends within the spread</td></tr>
  *   <tr><td>{@code Linearisation.secondOrder()}</td><td>1, a Jacobian and a Hessian</td>

@@ -7,6 +7,7 @@ import dev.estimation.core.matching.Linearisation;
 import dev.estimation.core.matching.MatchingWorkspace;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.core.matching.PointMatching;
+import dev.estimation.core.matching.ToleranceMatching;
 import dev.estimation.core.points.CubatureRule;
 import dev.estimation.core.points.GaussHermiteRule;
 import dev.estimation.core.points.UnscentedRule;
@@ -105,6 +106,16 @@ public final class FilterPlan {
    */
   public static FilterPlan unscented(Motion motion, double alpha, double beta, double kappa) {
     return of(motion, PointMatching.of(UnscentedRule.scaled(alpha, beta, kappa)));
+  }
+
+  /**
+   * {@return a filter whose moments are within a tolerance at every step; see {@link ToleranceMatching}}
+   *
+   * @param motion how the state moves
+   * @param tolerance of means in standard deviations, of variances relative: 0.01 is one per cent
+   */
+  public static FilterPlan withinTolerance(Motion motion, double tolerance) {
+    return of(motion, ToleranceMatching.within(tolerance));
   }
 
   /**

@@ -116,7 +116,7 @@ class ToleranceFilterTest extends BothForms {
   @Test
   void whatIsNearlyLinearIsCheap() {
     FilterPlan plan =
-        formed(FilterPlan.of(new ConstantVelocity(0.1, 0.1), ToleranceMatching.within(0.01)));
+        formed(FilterPlan.withinTolerance(new ConstantVelocity(0.1, 0.1), 0.01));
     Estimate estimate = plan.start(
         0, Gaussian.independent(new double[] {5000, 0, 3, 4}, new double[] {5, 5, 1, 1}));
     FilterWorkspace work = plan.workspace();

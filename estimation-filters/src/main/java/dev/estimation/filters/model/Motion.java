@@ -26,7 +26,8 @@ public sealed interface Motion permits MotionModel, NoiseDrivenMotion {
 
   /**
    * This model for the use of one thread, so that it may keep scratch and need not allocate at each call; the same
-   * motion and the same interfaces. A workspace asks for it when it is made. Itself unless said otherwise.
+   * motion and the same interfaces. A workspace asks for it when it is made and keeps it to itself; whoever else asks must not
+   * share it between threads. Itself unless said otherwise, which is right for a model without scratch.
    *
    * @return the model for one thread
    */

@@ -83,21 +83,11 @@ final class CallOrder {
 
   private void compare(
       Operation operation, Arguments here, Operation earlier, Attempt wanted, Attempt got) {
-    if (wanted.agrees(got)) {
-      return;
+    if (!wanted.agrees(got)) {
+      String reason = "as before " + earlier.method() + " was called at another place";
+      examination.ledger.addDifference(
+          FindingKind.EARLIER_CALL, operation, here, wanted, got, reason);
     }
-    int i = wanted.firstDifference(got);
-    String entry = i < 0 ? "call" : operation.entry(i);
-    double said = i < 0 ? Double.NaN : wanted.out()[i];
-    double now = i < 0 ? Double.NaN : got.out()[i];
-    report(
-        operation,
-        entry,
-        here,
-        said,
-        now,
-        entry + " must not depend on earlier calls, wanted " + said + ", got " + now + " after "
-            + earlier.method() + " at another place");
   }
 
   private void report(

@@ -87,19 +87,13 @@ final class Conduct {
     Attempt second = Attempt.of(operation, at).kept();
     Attempt third = Attempt.of(operation, at);
     if (!second.agrees(third)) {
-      int i = second.firstDifference(third);
-      String entry = i < 0 ? "call" : operation.entry(i);
-      double once = i < 0 ? Double.NaN : second.out()[i];
-      double again = i < 0 ? Double.NaN : third.out()[i];
-      ledger.add(
+      ledger.addDifference(
           FindingKind.NOT_DETERMINISTIC,
           operation,
-          entry,
           at,
-          once,
-          again,
-          Math.abs(again - once),
-          entry + " must be " + once + " as in the same call before, got " + again);
+          second,
+          third,
+          "as in the same call before");
     }
   }
 }

@@ -21,6 +21,8 @@ public enum FindingKind {
    * the arrays of an earlier one: the model keeps an array, or a value that it takes for current.
    */
   EARLIER_CALL(true),
+  /** The model that a motion gives for one thread is not the same motion, bit for bit. */
+  THREAD_COPY(true),
   /** A method allocates: 8 bytes a call or more in every one of several windows of calls. */
   ALLOCATION(true),
   /**

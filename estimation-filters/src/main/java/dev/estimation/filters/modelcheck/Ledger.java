@@ -51,6 +51,22 @@ final class Ledger {
     }
   }
 
+  /** Adds that two calls do not agree, in the first entry where they differ. */
+  void addDifference(
+      FindingKind kind,
+      Operation operation,
+      Arguments at,
+      Attempt wanted,
+      Attempt got,
+      String reason) {
+    int i = wanted.firstDifference(got);
+    String entry = i < 0 ? "call" : operation.entry(i);
+    double said = i < 0 ? Double.NaN : wanted.out()[i];
+    double now = i < 0 ? Double.NaN : got.out()[i];
+    String message = entry + " must be " + said + ", " + reason + ", got " + now;
+    add(kind, operation, entry, at, said, now, Math.abs(now - said), message);
+  }
+
   void note(String text) {
     notes.add(text);
   }

@@ -114,11 +114,13 @@ public final class ModelCheck {
    */
   public ModelReport examine(SensorModel model) {
     Subject subject = Subject.of(model, region.space());
-    return examine(subject, region.given(), model.givenDimension(), "given");
+    return examine(
+        examination(subject, region.given(), model.givenDimension(), "given", "withGiven"));
   }
 
   /**
-   * Examines a motion model, whichever way its noise enters.
+   * Examines a motion model, whichever way its noise enters. As in a filter, the model called is the one that it gives {@link
+   * Motion#forOneThread() for one thread}; it is also held against the model itself.
    *
    * @param model called, not kept
    * @return what was found
@@ -134,19 +136,28 @@ public final class ModelCheck {
       throw new IllegalArgumentException(
           "the region must have steps (withSteps), got none (" + subject.title() + ")");
     }
-    return examine(subject, region.control(), model.controlDimension(), "control");
+    Motion own = model.forOneThread();
+    ThreadCopy copy = new ThreadCopy(subject, own == model ? subject : Subject.of(own));
+    Examination examination = examination(
+        copy.examined(), region.control(), model.controlDimension(), "control", "withControl");
+    copy.look(examination);
+    return examine(examination);
   }
 
-  private ModelReport examine(Subject subject, Range given, int wanted, String name) {
+  private Examination examination(
+      Subject subject, Range given, int wanted, String name, String method) {
     if (given.size() != wanted) {
       throw new IllegalArgumentException("the region must have a range of " + wanted + " " + name
-          + " numbers, got " + given.size() + " (" + subject.title() + ")");
+          + " numbers (" + method + "), got " + given.size() + " (" + subject.title() + ")");
     }
     List<Arguments> at = new Places(subject, region, given).take(places, seed);
-    Examination examination = new Examination(subject, region, at, new Ledger(accepted));
+    return new Examination(subject, region, at, new Ledger(accepted));
+  }
+
+  private ModelReport examine(Examination examination) {
     lookAtConduct(examination);
     lookAtNumbers(examination);
-    return examination.ledger.report(subject.title(), at.size());
+    return examination.ledger.report(examination.subject.title(), examination.places.size());
   }
 
   private static void lookAtConduct(Examination examination) {

@@ -47,10 +47,14 @@ public record ModelReport(
   public String toString() {
     long faults = findings.stream().filter(ModelFinding::fault).count();
     List<String> lines = new ArrayList<>();
-    lines.add(model + ": " + faults + " faults, " + (findings.size() - faults) + " hints at "
-        + places + " places");
+    lines.add(model + ": " + counted(faults, "fault") + ", "
+        + counted(findings.size() - faults, "hint") + " at " + places + " places");
     findings.forEach(finding -> lines.add("  " + finding));
     notes.forEach(note -> lines.add("  note: " + note));
     return String.join("\n", lines);
+  }
+
+  private static String counted(long count, String what) {
+    return count + " " + what + (count == 1 ? "" : "s");
   }
 }

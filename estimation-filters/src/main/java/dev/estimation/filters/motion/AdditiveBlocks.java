@@ -19,10 +19,10 @@ class AdditiveBlocks implements MotionModel {
 
   static AdditiveBlocks of(List<? extends MotionModel> blocks, boolean forOneThread) {
     if (blocks.stream().allMatch(TwiceDifferentiableMotion.class::isInstance)) {
-      return new TwiceDifferentiable(blocks, forOneThread);
+      return new TwiceDifferentiableBlocks(blocks, forOneThread);
     }
     return blocks.stream().allMatch(DifferentiableMotion.class::isInstance)
-        ? new Differentiable(blocks, forOneThread)
+        ? new DifferentiableBlocks(blocks, forOneThread)
         : new AdditiveBlocks(blocks, forOneThread);
   }
 
@@ -68,8 +68,8 @@ class AdditiveBlocks implements MotionModel {
   }
 
   /** Blocks that all know their Jacobians. */
-  private static class Differentiable extends AdditiveBlocks implements DifferentiableMotion {
-    Differentiable(List<? extends MotionModel> blocks, boolean forOneThread) {
+  private static class DifferentiableBlocks extends AdditiveBlocks implements DifferentiableMotion {
+    DifferentiableBlocks(List<? extends MotionModel> blocks, boolean forOneThread) {
       super(blocks, forOneThread);
     }
 
@@ -87,9 +87,9 @@ class AdditiveBlocks implements MotionModel {
   }
 
   /** Blocks that all know their Hessians too. */
-  private static final class TwiceDifferentiable extends Differentiable
+  private static final class TwiceDifferentiableBlocks extends DifferentiableBlocks
       implements TwiceDifferentiableMotion {
-    TwiceDifferentiable(List<? extends MotionModel> blocks, boolean forOneThread) {
+    TwiceDifferentiableBlocks(List<? extends MotionModel> blocks, boolean forOneThread) {
       super(blocks, forOneThread);
     }
 

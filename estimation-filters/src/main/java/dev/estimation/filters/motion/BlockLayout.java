@@ -32,6 +32,7 @@ final class BlockLayout {
     this.own = forOneThread ? newScratch() : List.of();
   }
 
+  /** In the order of the whole, so that points do not depend on which block noise belongs to. */
   private int[] inputs(List<? extends Motion> blocks, boolean active) {
     IntStream.Builder joined = IntStream.builder();
     for (int k = 0; k < blocks.size(); k++) {
@@ -43,7 +44,7 @@ final class BlockLayout {
         joined.add(place.input(index, space.dimension()));
       }
     }
-    return joined.build().toArray();
+    return joined.build().sorted().toArray();
   }
 
   private List<BlockScratch> newScratch() {

@@ -17,7 +17,7 @@ import dev.estimation.filters.model.DifferentiableMotion;
  *
  * <p>Q: on each axis q [[dt^3/3, dt^2/2], [dt^2/2, dt]], r dt on the turn rate, and nothing between them: what the
  * noise of the turn rate does to place and velocity within the step, r dt^3/3 speed^2 of velocity across,
- * is left out (common practice); take steps short against a turn.
+ * is left out, as in the textbook. So Q(dt) composes over time only while that is little: {@link PolarTurn} has these terms.
  *
  * <p>Linear in place and velocity once the turn rate is given. <i>Immutable.</i> Allocates nothing. Source: Bar-Shalom,
  * Li and Kirubarajan 2001, section 11.7 (from memory).

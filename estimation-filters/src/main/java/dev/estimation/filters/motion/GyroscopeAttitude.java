@@ -14,12 +14,17 @@ import dev.estimation.filters.model.DifferentiableMotion;
  * </pre>
  *
  * <p>Differences, F and Q are those of {@link Space#unitQuaternion()}: a rotation vector in the body, 3 numbers, then
- * the bias. Q = diag(n dt, n dt, n dt, r dt, r dt, r dt). What the bias wanders within a step reaches the attitude
- * from the next step on; terms r dt^3/3 and -r dt^2/2 are left out, so at rates of 50 Hz and more this is exact enough, and a long
- * time without readings is better taken in several steps (common practice).
+ * the bias. Q is the integral of the noise along the turn, through what the bias wanders within the step too:
+ *
+ * <pre>
+ * Q = [n dt I + r dt^3 (I/3 + 2 c_5 [p]x^2)      C  ]     C = -r dt^2 (I/2 - c_3 [p]x + c_4 [p]x^2)
+ *     [C'                                      r dt I]     c_k = 1/k! - t^2/(k + 2)! + t^4/(k + 4)! - ...
+ * </pre>
+ *
+ * <p>So while the reading less the bias stays what it is, Q composes over time: F(h) Q(h) F(h)' + Q(h) = Q(2 h).
  *
  * <p>Nonlinear in all. Rotations of 1e155 rad and more in a step give NaN. <i>Immutable.</i> Allocates nothing. Source:
- * Sola 2017, <i>Quaternion kinematics for the error-state Kalman filter</i> (from memory).
+ * Sola 2017, <i>Quaternion kinematics for the error-state Kalman filter</i> (from memory); Q integrated here in closed form.
  */
 public final class GyroscopeAttitude implements DifferentiableMotion {
   private static final Space ROTATION = Space.unitQuaternion();
@@ -67,52 +72,49 @@ public final class GyroscopeAttitude implements DifferentiableMotion {
     double y = (control[1] - state[5]) * dt;
     double z = (control[2] - state[6]) * dt;
     double squared = x * x + y * y + z * z;
-    double t = Math.sqrt(squared);
-    double half = TurnArc.along(t / 2);
-    double sine = TurnArc.along(t);
-    double versine = half * half / 2;
-    double rest = squared > 1 ? (1 - sine) / squared : sineRest(squared);
-    block(jacobian, 0, 1, -sine, versine, x, y, z);
-    block(jacobian, 3, -dt, dt * versine, -dt * rest, x, y, z);
+    double versine = TurnSeries.sum(2, squared);
+    block(jacobian, 0, 1, -TurnSeries.sum(1, squared), versine, x, y, z);
+    block(jacobian, 3, -dt, dt * versine, -dt * TurnSeries.sum(3, squared), x, y, z);
     for (int i = 3; i < DIMENSION; i++) {
       jacobian[i * (DIMENSION + 1)] = 1;
     }
   }
 
-  /** (t - sin t) / t^3 by its series, up to t = 1. */
-  private static double sineRest(double squared) {
-    double sum = 0;
-    double term = 1.0 / 6;
-    for (int n = 4; n < 24; n += 2) {
-      sum += term;
-      term *= -squared / (n * (n + 1));
-    }
-    return sum;
-  }
-
   /** The 3 x 3 block k I + l [p]x + m [p]x^2 in the upper rows, from a column on. */
   private static void block(
-      double[] jacobian, int column, double k, double l, double m, double x, double y, double z) {
+      double[] matrix, int column, double k, double l, double m, double x, double y, double z) {
     double own = k - m * (x * x + y * y + z * z);
     int second = column + DIMENSION;
     int third = second + DIMENSION;
-    jacobian[column] = own + m * x * x;
-    jacobian[column + 1] = m * x * y - l * z;
-    jacobian[column + 2] = m * x * z + l * y;
-    jacobian[second] = m * x * y + l * z;
-    jacobian[second + 1] = own + m * y * y;
-    jacobian[second + 2] = m * y * z - l * x;
-    jacobian[third] = m * x * z - l * y;
-    jacobian[third + 1] = m * y * z + l * x;
-    jacobian[third + 2] = own + m * z * z;
+    matrix[column] = own + m * x * x;
+    matrix[column + 1] = m * x * y - l * z;
+    matrix[column + 2] = m * x * z + l * y;
+    matrix[second] = m * x * y + l * z;
+    matrix[second + 1] = own + m * y * y;
+    matrix[second + 2] = m * y * z - l * x;
+    matrix[third] = m * x * z - l * y;
+    matrix[third + 1] = m * y * z + l * x;
+    matrix[third + 2] = own + m * z * z;
   }
 
   @Override
   public void processNoise(
       double[] state, double[] control, double time, double dt, double[] covariance) {
-    for (int i = 0; i < 3; i++) {
-      covariance[i * (DIMENSION + 1)] = angleDensity * dt;
-      covariance[(3 + i) * (DIMENSION + 1)] = biasDensity * dt;
+    double x = (control[0] - state[4]) * dt;
+    double y = (control[1] - state[5]) * dt;
+    double z = (control[2] - state[6]) * dt;
+    double squared = x * x + y * y + z * z;
+    double mixed = -biasDensity * dt * dt;
+    double wandered = -mixed * dt;
+    double bent = 2 * wandered * TurnSeries.sum(5, squared);
+    block(covariance, 0, angleDensity * dt + wandered / 3, 0, bent, x, y, z);
+    double skew = -mixed * TurnSeries.sum(3, squared);
+    block(covariance, 3, mixed / 2, skew, mixed * TurnSeries.sum(4, squared), x, y, z);
+    for (int i = 3; i < DIMENSION; i++) {
+      for (int j = 0; j < 3; j++) {
+        covariance[i * DIMENSION + j] = covariance[j * DIMENSION + i];
+      }
+      covariance[i * (DIMENSION + 1)] = biasDensity * dt;
     }
   }
 }

@@ -18,7 +18,7 @@ class NoiseDrivenBlocks implements NoiseDrivenMotion {
 
   static NoiseDrivenBlocks of(List<? extends NoiseDrivenMotion> blocks, boolean forOneThread) {
     return blocks.stream().allMatch(DifferentiableNoiseDrivenMotion.class::isInstance)
-        ? new Differentiable(blocks, forOneThread)
+        ? new DifferentiableNoiseDrivenBlocks(blocks, forOneThread)
         : new NoiseDrivenBlocks(blocks, forOneThread);
   }
 
@@ -72,9 +72,10 @@ class NoiseDrivenBlocks implements NoiseDrivenMotion {
   }
 
   /** Blocks that all know their Jacobians. */
-  private static final class Differentiable extends NoiseDrivenBlocks
+  private static final class DifferentiableNoiseDrivenBlocks extends NoiseDrivenBlocks
       implements DifferentiableNoiseDrivenMotion {
-    Differentiable(List<? extends NoiseDrivenMotion> blocks, boolean forOneThread) {
+    DifferentiableNoiseDrivenBlocks(
+        List<? extends NoiseDrivenMotion> blocks, boolean forOneThread) {
       super(blocks, forOneThread);
     }
 

@@ -15,7 +15,9 @@ import dev.estimation.filters.model.DifferentiableNoiseDrivenMotion;
  * y' = y + v dt sin(u)/u sin(heading + u)        heading' = heading + 2 u
  * </pre>
  *
- * <p>Noise held over the step has the variance density / dt. Linear in place and in the noise of the speed once heading
+ * <p>Noise held over the step has the variance density / dt. So the variance of place across a straight course is (yaw rate
+ * density) v^2 dt^3 / 4, and would be that / 3 if the noise were white within the step: keep steps at those of the odometry, and
+ * the growth over many is right. Linear in place and in the noise of the speed once heading
  * and the noise of the yaw rate are given. <i>Immutable.</i> Allocates nothing. Source: Thrun, Burgard and Fox 2005,
  * <i>Probabilistic Robotics</i>, section 5.3 (from memory), the arc written by its chord.
  */

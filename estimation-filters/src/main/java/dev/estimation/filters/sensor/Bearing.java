@@ -1,6 +1,5 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.TwiceDifferentiableSensor;
@@ -14,13 +13,11 @@ import dev.estimation.filters.model.TwiceDifferentiableSensor;
  * state. At distance 0 there is no bearing: measurement and derivatives are NaN, and the update is refused with a status.
  * <i>Immutable.</i>
  */
-public final class Bearing implements TwiceDifferentiableSensor {
+public final class Bearing extends ReadySensor implements TwiceDifferentiableSensor {
   private static final FlatSpace SPACE = Space.angles(1);
   private static final String NAME = "Bearing";
 
   private final Sight sight;
-  private final double variance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -30,25 +27,12 @@ public final class Bearing implements TwiceDifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public Bearing(Sight sight, double deviation) {
-    this.sight = sight.requireWidth(2, NAME);
-    this.variance = SensorSetUp.variance(deviation, "bearing deviation (rad)", NAME);
-    this.structure =
-        SensorSetUp.structure(sight.position().columns(), sight.headingColumns(), NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return sight.givenDimension();
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
+    super(
+        SPACE,
+        sight.requireWidth(2, NAME).givenDimension(),
+        sight.structure(NAME),
+        SensorSetUp.variance(deviation, "bearing deviation (rad)", NAME));
+    this.sight = sight;
   }
 
   @Override
@@ -62,8 +46,8 @@ public final class Bearing implements TwiceDifferentiableSensor {
     double dx = sight.first(state, given, 0);
     double dy = sight.second(state, given, 0);
     double square = dx * dx + dy * dy;
-    sight.fillRow(jacobian, 0, -dy / square, dx / square, 0);
-    sight.fillHeading(jacobian, 0);
+    sight.columns().fillRow(jacobian, 0, -dy / square, dx / square, 0);
+    sight.columns().fillHeading(jacobian, 0);
   }
 
   @Override
@@ -79,11 +63,8 @@ public final class Bearing implements TwiceDifferentiableSensor {
     double square = dx * dx + dy * dy;
     double ux = dx / square;
     double uy = dy / square;
-    sight.fillPlane(hessians, start, columns, 2 * ux * uy, uy * uy - ux * ux, -2 * ux * uy);
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = variance;
+    sight
+        .columns()
+        .fillPlane(hessians, start, columns, 2 * ux * uy, uy * uy - ux * ux, -2 * ux * uy);
   }
 }

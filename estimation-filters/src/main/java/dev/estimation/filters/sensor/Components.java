@@ -62,6 +62,10 @@ public final class Components {
     return indices[axis];
   }
 
+  int[] indices() {
+    return indices.clone();
+  }
+
   /** The index among differences of states. */
   int column(int axis) {
     return indices[axis] - quaternions;

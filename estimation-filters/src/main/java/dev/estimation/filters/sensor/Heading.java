@@ -1,9 +1,7 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
  * An angle of the state as it is (rad): the heading by a compass. Zero and sense are those that the state has; differences
@@ -11,14 +9,12 @@ import dev.estimation.filters.model.DifferentiableSensor;
  *
  * <p>Nothing is given. Linear in the heading. <i>Immutable.</i>
  */
-public final class Heading implements DifferentiableSensor {
+public final class Heading extends ReadySensor {
   private static final FlatSpace SPACE = Space.angles(1);
   private static final String NAME = "Heading";
 
   private final int index;
   private final int column;
-  private final double variance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -28,21 +24,14 @@ public final class Heading implements DifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public Heading(Components heading, double deviation) {
+    super(
+        SPACE,
+        0,
+        SensorSetUp.structure(new int[0], heading.columns(), NAME),
+        SensorSetUp.variance(deviation, "heading deviation (rad)", NAME));
     heading.requireCount(1, "a heading", "sensor model " + NAME);
     this.index = heading.index(0);
     this.column = heading.column(0);
-    this.variance = SensorSetUp.variance(deviation, "heading deviation (rad)", NAME);
-    this.structure = SensorSetUp.structure(new int[0], heading.columns(), NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
   }
 
   @Override
@@ -53,10 +42,5 @@ public final class Heading implements DifferentiableSensor {
   @Override
   public void measureJacobian(double[] state, double[] given, double[] jacobian) {
     jacobian[column] = 1;
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = variance;
   }
 }

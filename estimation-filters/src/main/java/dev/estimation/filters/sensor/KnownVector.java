@@ -1,9 +1,8 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableSensor;
+import java.util.Arrays;
 
 /**
  * A known vector of the world as seen in the body: h = R(q)' u, with R(q) the rotation that turns vectors of the body into
@@ -17,14 +16,12 @@ import dev.estimation.filters.model.DifferentiableSensor;
  * <p>The derivative by a turn of the body is [h]x, the matrix of the cross product with h. Defined everywhere; a turn about u cannot be
  * seen. Source: Sola 2017, <i>Quaternion kinematics for the error-state Kalman filter</i>, section 4 (from memory). <i>Immutable.</i>
  */
-public final class KnownVector implements DifferentiableSensor {
+public final class KnownVector extends ReadySensor {
   private static final FlatSpace SPACE = Space.reals(3);
   private static final String NAME = "KnownVector";
 
   private final int start;
   private final int column;
-  private final double variance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -34,33 +31,30 @@ public final class KnownVector implements DifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public KnownVector(Components attitude, double deviation) {
-    attitude.requireCount(4, "an attitude", "sensor model " + NAME);
+    super(
+        SPACE,
+        3,
+        SensorSetUp.structure(columns(attitude), new int[0], NAME),
+        variances(SensorSetUp.variance(deviation, "deviation", NAME)));
     this.start = attitude.index(0);
     this.column = attitude.column(0);
+  }
+
+  private static double[] variances(double variance) {
+    return new double[] {variance, variance, variance};
+  }
+
+  /** The three columns of the attitude. */
+  private static int[] columns(Components attitude) {
+    attitude.requireCount(4, "an attitude", "sensor model " + NAME);
     for (int i = 1; i < 4; i++) {
-      if (attitude.index(i) != start + i) {
+      if (attitude.index(i) != attitude.index(0) + i) {
         throw new IllegalArgumentException(
             "an attitude must have 4 components one after the other, got " + attitude
                 + " (sensor model " + NAME + ")");
       }
     }
-    this.variance = SensorSetUp.variance(deviation, "deviation", NAME);
-    this.structure = Structure.UNKNOWN.withActiveInputs(column, column + 1, column + 2);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return 3;
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
+    return Arrays.copyOf(attitude.columns(), 3);
   }
 
   @Override
@@ -97,12 +91,5 @@ public final class KnownVector implements DifferentiableSensor {
     jacobian[columns + column + 2] = -a;
     jacobian[2 * columns + column] = -b;
     jacobian[2 * columns + column + 1] = a;
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = variance;
-    covariance[4] = variance;
-    covariance[8] = variance;
   }
 }

@@ -1,9 +1,6 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
-import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
  * Components of the state as they are, with independent errors: a position (m), a velocity (m/s), a depth. Angles are for
@@ -11,14 +8,11 @@ import dev.estimation.filters.model.DifferentiableSensor;
  *
  * <p>Nothing is given. Linear in all that it reads: no matching draws points for it. <i>Immutable.</i>
  */
-public final class Position implements DifferentiableSensor {
+public final class Position extends ReadySensor {
   private static final String NAME = "Position";
 
   private final int[] indices;
   private final int[] columns;
-  private final double[] variances;
-  private final FlatSpace space;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -28,29 +22,25 @@ public final class Position implements DifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public Position(Components position, double... deviations) {
+    super(
+        Space.reals(deviations.length),
+        0,
+        SensorSetUp.structure(new int[0], position.columns(), NAME),
+        variances(deviations));
     position.requireCount(
         deviations.length,
         "a position with " + deviations.length + " deviations",
         "sensor model " + NAME);
-    this.indices = new int[deviations.length];
-    this.variances = new double[deviations.length];
+    this.indices = position.indices();
+    this.columns = position.columns();
+  }
+
+  private static double[] variances(double[] deviations) {
+    double[] variances = new double[deviations.length];
     for (int i = 0; i < deviations.length; i++) {
-      indices[i] = position.index(i);
       variances[i] = SensorSetUp.variance(deviations[i], "deviations[" + i + "]", NAME);
     }
-    this.columns = position.columns();
-    this.space = Space.reals(deviations.length);
-    this.structure = SensorSetUp.structure(new int[0], columns, NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return space;
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
+    return variances;
   }
 
   @Override
@@ -65,13 +55,6 @@ public final class Position implements DifferentiableSensor {
     int width = jacobian.length / columns.length;
     for (int i = 0; i < columns.length; i++) {
       jacobian[i * width + columns[i]] = 1;
-    }
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    for (int i = 0; i < variances.length; i++) {
-      covariance[i * (variances.length + 1)] = variances[i];
     }
   }
 }

@@ -17,7 +17,7 @@ import dev.estimation.filters.model.TwiceDifferentiableSensor;
  * ranges bend by many times the noise that may cost honesty, since points lie nearer to the mean (see {@link Structure}); a
  * matching over the whole input makes no use of it. At distance 0 derivatives are NaN. <i>Immutable.</i>
  */
-public final class Pseudorange implements TwiceDifferentiableSensor {
+public final class Pseudorange extends ReadySensor implements TwiceDifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1);
   private static final String NAME = "Pseudorange";
 
@@ -26,7 +26,6 @@ public final class Pseudorange implements TwiceDifferentiableSensor {
   private final int clock;
   private final int clockColumn;
   private final boolean deviationGiven;
-  private final Structure structure;
 
   /**
    * The sensor with noise that is always the same.
@@ -41,13 +40,17 @@ public final class Pseudorange implements TwiceDifferentiableSensor {
   }
 
   private Pseudorange(Sight sight, Components clock, double deviation, boolean deviationGiven) {
+    super(
+        SPACE,
+        sight.requireNoHeading(NAME).width() + (deviationGiven ? 1 : 0),
+        SensorSetUp.structure(sight.position().columns(), clock.columns(), NAME),
+        SensorSetUp.variance(deviation, "range deviation (m)", NAME));
     clock.requireCount(1, "a clock", "sensor model " + NAME);
     this.range = new Range(sight, deviation);
     this.placeWidth = sight.width();
     this.clock = clock.index(0);
     this.clockColumn = clock.column(0);
     this.deviationGiven = deviationGiven;
-    this.structure = SensorSetUp.structure(sight.position().columns(), clock.columns(), NAME);
   }
 
   /**
@@ -61,21 +64,6 @@ public final class Pseudorange implements TwiceDifferentiableSensor {
    */
   public static Pseudorange ofGivenDeviation(Sight sight, Components clock) {
     return new Pseudorange(sight, clock, 1, true);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return deviationGiven ? placeWidth + 1 : placeWidth;
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
   }
 
   @Override
@@ -102,7 +90,7 @@ public final class Pseudorange implements TwiceDifferentiableSensor {
       double deviation = given[placeWidth];
       covariance[0] = deviation * Math.abs(deviation);
     } else {
-      range.measurementNoise(state, given, covariance);
+      super.measurementNoise(state, given, covariance);
     }
   }
 }

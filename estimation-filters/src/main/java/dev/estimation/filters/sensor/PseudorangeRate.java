@@ -1,9 +1,7 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
  * How fast a pseudorange grows (m/s): the range rate plus the drift of the receiver's clock, u'v + drift (see {@link
@@ -13,14 +11,13 @@ import dev.estimation.filters.model.DifferentiableSensor;
  * clock is taken off the measurement before. Linear in velocity and drift. At distance 0 measurement and derivatives are NaN, and
  * the update is refused with a status. <i>Immutable.</i>
  */
-public final class PseudorangeRate implements DifferentiableSensor {
+public final class PseudorangeRate extends ReadySensor {
   private static final FlatSpace SPACE = Space.reals(1);
   private static final String NAME = "PseudorangeRate";
 
   private final RangeRate rate;
   private final int drift;
   private final int driftColumn;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -32,27 +29,18 @@ public final class PseudorangeRate implements DifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public PseudorangeRate(Sight sight, Components velocity, Components drift, double deviation) {
+    super(
+        SPACE,
+        2 * sight.requireNoHeading(NAME).width(),
+        SensorSetUp.structure(
+            sight.position().columns(),
+            SensorSetUp.join(velocity.columns(), drift.columns()),
+            NAME),
+        SensorSetUp.variance(deviation, "range rate deviation (m/s)", NAME));
     drift.requireCount(1, "a drift", "sensor model " + NAME);
     this.rate = new RangeRate(sight, velocity, deviation);
     this.drift = drift.index(0);
     this.driftColumn = drift.column(0);
-    int[] linear = SensorSetUp.join(velocity.columns(), drift.columns());
-    this.structure = SensorSetUp.structure(sight.position().columns(), linear, NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return rate.givenDimension();
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
   }
 
   @Override
@@ -65,10 +53,5 @@ public final class PseudorangeRate implements DifferentiableSensor {
   public void measureJacobian(double[] state, double[] given, double[] jacobian) {
     rate.measureJacobian(state, given, jacobian);
     jacobian[driftColumn] = 1;
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    rate.measurementNoise(state, given, covariance);
   }
 }

@@ -1,6 +1,5 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.TwiceDifferentiableSensor;
@@ -11,13 +10,11 @@ import dev.estimation.filters.model.TwiceDifferentiableSensor;
  * <p>Given: the place, 2 or 3 numbers (m). Derivatives: u = d / |d| and (I - u u') / |d|. At distance 0 the measurement
  * is 0 and the derivatives are NaN, so that an update by linearisation is refused with a status. <i>Immutable.</i>
  */
-public final class Range implements TwiceDifferentiableSensor {
+public final class Range extends ReadySensor implements TwiceDifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1);
   private static final String NAME = "Range";
 
   private final Sight sight;
-  private final double variance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -27,24 +24,12 @@ public final class Range implements TwiceDifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public Range(Sight sight, double deviation) {
-    this.sight = sight.requireNoHeading(NAME);
-    this.variance = SensorSetUp.variance(deviation, "range deviation (m)", NAME);
-    this.structure = SensorSetUp.structure(sight.position().columns(), new int[0], NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return sight.width();
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
+    super(
+        SPACE,
+        sight.requireNoHeading(NAME).width(),
+        sight.structure(NAME),
+        SensorSetUp.variance(deviation, "range deviation (m)", NAME));
+    this.sight = sight;
   }
 
   @Override
@@ -58,7 +43,7 @@ public final class Range implements TwiceDifferentiableSensor {
     double dy = sight.second(state, given, 0);
     double dz = sight.third(state, given, 0);
     double range = Math.sqrt(dx * dx + dy * dy + dz * dz);
-    sight.fillRow(jacobian, 0, dx / range, dy / range, dz / range);
+    sight.columns().fillRow(jacobian, 0, dx / range, dy / range, dz / range);
   }
 
   @Override
@@ -76,19 +61,18 @@ public final class Range implements TwiceDifferentiableSensor {
     double ux = dx / range;
     double uy = dy / range;
     double uz = dz / range;
-    sight.fillPlane(
-        hessians,
-        0,
-        columns,
-        (uy * uy + uz * uz) / range,
-        -ux * uy / range,
-        (ux * ux + uz * uz) / range);
-    sight.fillThird(
-        hessians, 0, columns, -ux * uz / range, -uy * uz / range, (ux * ux + uy * uy) / range);
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = variance;
+    sight
+        .columns()
+        .fillPlane(
+            hessians,
+            0,
+            columns,
+            (uy * uy + uz * uz) / range,
+            -ux * uy / range,
+            (ux * ux + uz * uz) / range);
+    sight
+        .columns()
+        .fillThird(
+            hessians, 0, columns, -ux * uz / range, -uy * uz / range, (ux * ux + uy * uy) / range);
   }
 }

@@ -1,6 +1,5 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.TwiceDifferentiableSensor;
@@ -13,14 +12,11 @@ import dev.estimation.filters.model.TwiceDifferentiableSensor;
  * state. At distance 0 there is no bearing: measurement and derivatives are NaN, and the update is refused with a status.
  * <i>Immutable.</i>
  */
-public final class RangeAndBearing implements TwiceDifferentiableSensor {
+public final class RangeAndBearing extends ReadySensor implements TwiceDifferentiableSensor {
   private static final FlatSpace SPACE = Space.reals(1).and(Space.angles(1));
   private static final String NAME = "RangeAndBearing";
 
   private final Sight sight;
-  private final double rangeVariance;
-  private final double bearingVariance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -31,26 +27,13 @@ public final class RangeAndBearing implements TwiceDifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public RangeAndBearing(Sight sight, double rangeDeviation, double bearingDeviation) {
-    this.sight = sight.requireWidth(2, NAME);
-    this.rangeVariance = SensorSetUp.variance(rangeDeviation, "range deviation (m)", NAME);
-    this.bearingVariance = SensorSetUp.variance(bearingDeviation, "bearing deviation (rad)", NAME);
-    this.structure =
-        SensorSetUp.structure(sight.position().columns(), sight.headingColumns(), NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return sight.givenDimension();
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
+    super(
+        SPACE,
+        sight.requireWidth(2, NAME).givenDimension(),
+        sight.structure(NAME),
+        SensorSetUp.variance(rangeDeviation, "range deviation (m)", NAME),
+        SensorSetUp.variance(bearingDeviation, "bearing deviation (rad)", NAME));
+    this.sight = sight;
   }
 
   @Override
@@ -68,9 +51,9 @@ public final class RangeAndBearing implements TwiceDifferentiableSensor {
     double square = dx * dx + dy * dy;
     double range = Math.sqrt(square);
     int columns = jacobian.length / 2;
-    sight.fillRow(jacobian, 0, dx / range, dy / range, 0);
-    sight.fillRow(jacobian, columns, -dy / square, dx / square, 0);
-    sight.fillHeading(jacobian, columns);
+    sight.columns().fillRow(jacobian, 0, dx / range, dy / range, 0);
+    sight.columns().fillRow(jacobian, columns, -dy / square, dx / square, 0);
+    sight.columns().fillHeading(jacobian, columns);
   }
 
   @Override
@@ -78,11 +61,5 @@ public final class RangeAndBearing implements TwiceDifferentiableSensor {
     int columns = SensorSetUp.hessianColumns(hessians, 2);
     Range.fillHessian(sight, state, given, hessians, columns);
     Bearing.fillHessian(sight, state, given, hessians, columns * columns, columns);
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = rangeVariance;
-    covariance[3] = bearingVariance;
   }
 }

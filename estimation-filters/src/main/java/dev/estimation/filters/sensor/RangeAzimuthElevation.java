@@ -1,9 +1,7 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
  * A slant range (m), an azimuth (rad) and an elevation (rad), with independent errors: |d|, atan2(d_2, d_1) less the heading
@@ -18,15 +16,11 @@ import dev.estimation.filters.model.DifferentiableSensor;
  * state. Straight overhead or below there is no azimuth: it and the derivatives of both angles are NaN, and the update is
  * refused with a status. <i>Immutable.</i>
  */
-public final class RangeAzimuthElevation implements DifferentiableSensor {
+public final class RangeAzimuthElevation extends ReadySensor {
   private static final FlatSpace SPACE = Space.reals(1).and(Space.angles(2));
   private static final String NAME = "RangeAzimuthElevation";
 
   private final Sight sight;
-  private final double rangeVariance;
-  private final double azimuthVariance;
-  private final double elevationVariance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -39,28 +33,14 @@ public final class RangeAzimuthElevation implements DifferentiableSensor {
    */
   public RangeAzimuthElevation(
       Sight sight, double rangeDeviation, double azimuthDeviation, double elevationDeviation) {
-    this.sight = sight.requireWidth(3, NAME);
-    this.rangeVariance = SensorSetUp.variance(rangeDeviation, "range deviation (m)", NAME);
-    this.azimuthVariance = SensorSetUp.variance(azimuthDeviation, "azimuth deviation (rad)", NAME);
-    this.elevationVariance =
-        SensorSetUp.variance(elevationDeviation, "elevation deviation (rad)", NAME);
-    this.structure =
-        SensorSetUp.structure(sight.position().columns(), sight.headingColumns(), NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return sight.givenDimension();
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
+    super(
+        SPACE,
+        sight.requireWidth(3, NAME).givenDimension(),
+        sight.structure(NAME),
+        SensorSetUp.variance(rangeDeviation, "range deviation (m)", NAME),
+        SensorSetUp.variance(azimuthDeviation, "azimuth deviation (rad)", NAME),
+        SensorSetUp.variance(elevationDeviation, "elevation deviation (rad)", NAME));
+    this.sight = sight;
   }
 
   @Override
@@ -85,16 +65,9 @@ public final class RangeAzimuthElevation implements DifferentiableSensor {
     double range = Math.sqrt(square);
     double tilt = -dz / (square * ground);
     int columns = jacobian.length / 3;
-    sight.fillRow(jacobian, 0, dx / range, dy / range, dz / range);
-    sight.fillRow(jacobian, columns, -dy / groundSquare, dx / groundSquare, 0);
-    sight.fillHeading(jacobian, columns);
-    sight.fillRow(jacobian, 2 * columns, tilt * dx, tilt * dy, ground / square);
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = rangeVariance;
-    covariance[4] = azimuthVariance;
-    covariance[8] = elevationVariance;
+    sight.columns().fillRow(jacobian, 0, dx / range, dy / range, dz / range);
+    sight.columns().fillRow(jacobian, columns, -dy / groundSquare, dx / groundSquare, 0);
+    sight.columns().fillHeading(jacobian, columns);
+    sight.columns().fillRow(jacobian, 2 * columns, tilt * dx, tilt * dy, ground / square);
   }
 }

@@ -1,9 +1,7 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
  * How much further it is to one place than to another (m): |d_1| - |d_2|. A difference of arrival times, times the
@@ -13,13 +11,11 @@ import dev.estimation.filters.model.DifferentiableSensor;
  * arrival time; this sensor takes each with noise of its own. At either place derivatives are NaN, and an update by
  * linearisation is refused with a status. <i>Immutable.</i>
  */
-public final class RangeDifference implements DifferentiableSensor {
+public final class RangeDifference extends ReadySensor {
   private static final FlatSpace SPACE = Space.reals(1);
   private static final String NAME = "RangeDifference";
 
   private final Sight sight;
-  private final double variance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -29,24 +25,12 @@ public final class RangeDifference implements DifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public RangeDifference(Sight sight, double deviation) {
-    this.sight = sight.requireNoHeading(NAME);
-    this.variance = SensorSetUp.variance(deviation, "range difference deviation (m)", NAME);
-    this.structure = SensorSetUp.structure(sight.position().columns(), new int[0], NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return 2 * sight.width();
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
+    super(
+        SPACE,
+        2 * sight.requireNoHeading(NAME).width(),
+        sight.structure(NAME),
+        SensorSetUp.variance(deviation, "range difference deviation (m)", NAME));
+    this.sight = sight;
   }
 
   @Override
@@ -59,16 +43,13 @@ public final class RangeDifference implements DifferentiableSensor {
     int at = sight.width();
     double first = sight.distance(state, given, 0);
     double second = sight.distance(state, given, at);
-    sight.fillRow(
-        jacobian,
-        0,
-        sight.first(state, given, 0) / first - sight.first(state, given, at) / second,
-        sight.second(state, given, 0) / first - sight.second(state, given, at) / second,
-        sight.third(state, given, 0) / first - sight.third(state, given, at) / second);
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = variance;
+    sight
+        .columns()
+        .fillRow(
+            jacobian,
+            0,
+            sight.first(state, given, 0) / first - sight.first(state, given, at) / second,
+            sight.second(state, given, 0) / first - sight.second(state, given, at) / second,
+            sight.third(state, given, 0) / first - sight.third(state, given, at) / second);
   }
 }

@@ -1,9 +1,7 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
 import dev.estimation.core.space.Space;
-import dev.estimation.filters.model.DifferentiableSensor;
 
 /**
  * How fast a distance grows (m/s): u'v, u = d / |d| the direction of the sight and v the velocity of what is seen less that
@@ -14,14 +12,12 @@ import dev.estimation.filters.model.DifferentiableSensor;
  * the state. The derivative by d is (v - (u'v) u) / |d|. At a known height the state does not climb. At distance 0 measurement and
  * derivatives are NaN, and the update is refused with a status. <i>Immutable.</i>
  */
-public final class RangeRate implements DifferentiableSensor {
+public final class RangeRate extends ReadySensor {
   private static final FlatSpace SPACE = Space.reals(1);
   private static final String NAME = "RangeRate";
 
   private final Sight sight;
   private final Sight motion;
-  private final double variance;
-  private final Structure structure;
 
   /**
    * The sensor.
@@ -32,25 +28,13 @@ public final class RangeRate implements DifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public RangeRate(Sight sight, Components velocity, double deviation) {
-    this.sight = sight.requireNoHeading(NAME);
+    super(
+        SPACE,
+        2 * sight.requireNoHeading(NAME).width(),
+        SensorSetUp.structure(sight.position().columns(), velocity.columns(), NAME),
+        SensorSetUp.variance(deviation, "range rate deviation (m/s)", NAME));
+    this.sight = sight;
     this.motion = sight.ofVelocity(velocity, NAME);
-    this.variance = SensorSetUp.variance(deviation, "range rate deviation (m/s)", NAME);
-    this.structure = SensorSetUp.structure(sight.position().columns(), velocity.columns(), NAME);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return SPACE;
-  }
-
-  @Override
-  public int givenDimension() {
-    return 2 * sight.width();
-  }
-
-  @Override
-  public Structure structure() {
-    return structure;
   }
 
   @Override
@@ -76,13 +60,14 @@ public final class RangeRate implements DifferentiableSensor {
     double vy = motion.second(state, given, at);
     double vz = motion.third(state, given, at);
     double rate = ux * vx + uy * vy + uz * vz;
-    sight.fillRow(
-        jacobian, 0, (vx - rate * ux) / range, (vy - rate * uy) / range, (vz - rate * uz) / range);
-    motion.fillRow(jacobian, 0, ux, uy, uz);
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    covariance[0] = variance;
+    sight
+        .columns()
+        .fillRow(
+            jacobian,
+            0,
+            (vx - rate * ux) / range,
+            (vy - rate * uy) / range,
+            (vz - rate * uz) / range);
+    motion.columns().fillRow(jacobian, 0, ux, uy, uz);
   }
 }

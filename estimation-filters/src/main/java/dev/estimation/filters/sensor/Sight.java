@@ -1,5 +1,6 @@
 package dev.estimation.filters.sensor;
 
+import dev.estimation.core.function.Structure;
 import dev.estimation.core.internal.Checks;
 
 /**
@@ -30,10 +31,8 @@ public final class Sight {
   private final int x;
   private final int y;
   private final int z;
-  private final int xColumn;
-  private final int yColumn;
-  private final int zColumn;
   private final int headingIndex;
+  private final SightColumns columns;
 
   private Sight(
       Components position,
@@ -52,9 +51,7 @@ public final class Sight {
     this.x = position.index(0);
     this.y = position.index(1);
     this.z = upward ? position.index(2) : NONE;
-    this.xColumn = position.column(0);
-    this.yColumn = position.column(1);
-    this.zColumn = upward ? position.column(2) : NONE;
+    this.columns = new SightColumns(position, heading, sign);
     this.headingIndex = heading == null ? NONE : heading.index(0);
   }
 
@@ -153,9 +150,15 @@ public final class Sight {
     return headingGiven ? width + 1 : width;
   }
 
-  /** The columns of the heading: 0 or 1. */
-  int[] headingColumns() {
-    return heading == null ? new int[0] : heading.columns();
+  /** Linear in a heading of the state, if the sensor reads nothing else. */
+  Structure structure(String sensor) {
+    int[] linear = heading == null ? new int[0] : heading.columns();
+    return SensorSetUp.structure(position.columns(), linear, sensor);
+  }
+
+  /** Where derivatives by d and by the heading go. */
+  SightColumns columns() {
+    return columns;
   }
 
   /** The first coordinate of d, with the place beginning at an index of what is given. */
@@ -192,40 +195,5 @@ public final class Sight {
       return direction - state[headingIndex];
     }
     return headingGiven ? direction - given[width] : direction;
-  }
-
-  /** Fills a row of a Jacobian that begins at an index with the derivatives by d. */
-  void fillRow(double[] jacobian, int start, double byX, double byY, double byZ) {
-    jacobian[start + xColumn] = sign * byX;
-    jacobian[start + yColumn] = sign * byY;
-    if (zColumn != NONE) {
-      jacobian[start + zColumn] = sign * byZ;
-    }
-  }
-
-  /** Fills the derivative of a bearing by the heading, if that is in the state. */
-  void fillHeading(double[] jacobian, int start) {
-    if (heading != null) {
-      jacobian[start + heading.column(0)] = -1;
-    }
-  }
-
-  /** Fills the Hessian of one component with the second derivatives by the first two coordinates of d. */
-  void fillPlane(double[] hessians, int start, int columns, double byXx, double byXy, double byYy) {
-    hessians[start + xColumn * columns + xColumn] = byXx;
-    hessians[start + xColumn * columns + yColumn] = byXy;
-    hessians[start + yColumn * columns + xColumn] = byXy;
-    hessians[start + yColumn * columns + yColumn] = byYy;
-  }
-
-  /** Fills the Hessian of one component with the second derivatives by the third coordinate of d, if the state has it. */
-  void fillThird(double[] hessians, int start, int columns, double byXz, double byYz, double byZz) {
-    if (zColumn != NONE) {
-      hessians[start + xColumn * columns + zColumn] = byXz;
-      hessians[start + zColumn * columns + xColumn] = byXz;
-      hessians[start + yColumn * columns + zColumn] = byYz;
-      hessians[start + zColumn * columns + yColumn] = byYz;
-      hessians[start + zColumn * columns + zColumn] = byZz;
-    }
   }
 }

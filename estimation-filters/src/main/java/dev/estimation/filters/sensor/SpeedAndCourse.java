@@ -1,7 +1,7 @@
 package dev.estimation.filters.sensor;
 
-import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.FlatSpace;
+import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.TwiceDifferentiableSensor;
 
 /**
@@ -12,7 +12,8 @@ import dev.estimation.filters.model.TwiceDifferentiableSensor;
  * near rest, at speeds of a few of their standard deviations, a course tells next to nothing and is far from linear.
  * <i>Immutable.</i>
  */
-public final class SpeedAndCourse implements TwiceDifferentiableSensor {
+public final class SpeedAndCourse extends ReadySensor implements TwiceDifferentiableSensor {
+  private static final FlatSpace SPACE = Space.reals(1).and(Space.angles(1));
   private static final String NAME = "SpeedAndCourse";
 
   private final RangeAndBearing polar;
@@ -27,20 +28,14 @@ public final class SpeedAndCourse implements TwiceDifferentiableSensor {
    * @throws IllegalArgumentException if an argument is not so
    */
   public SpeedAndCourse(Components velocity, double speedDeviation, double courseDeviation) {
+    super(
+        SPACE,
+        0,
+        SensorSetUp.structure(velocity.columns(), new int[0], NAME),
+        SensorSetUp.variance(speedDeviation, "speed deviation (m/s)", NAME),
+        SensorSetUp.variance(courseDeviation, "course deviation (rad)", NAME));
     velocity.requireCount(2, "a velocity", "sensor model " + NAME);
-    SensorSetUp.variance(speedDeviation, "speed deviation (m/s)", NAME);
-    SensorSetUp.variance(courseDeviation, "course deviation (rad)", NAME);
     this.polar = new RangeAndBearing(Sight.fromGiven(velocity), speedDeviation, courseDeviation);
-  }
-
-  @Override
-  public FlatSpace measurementSpace() {
-    return polar.measurementSpace();
-  }
-
-  @Override
-  public Structure structure() {
-    return polar.structure();
   }
 
   @Override
@@ -56,10 +51,5 @@ public final class SpeedAndCourse implements TwiceDifferentiableSensor {
   @Override
   public void measureHessian(double[] state, double[] given, double[] hessians) {
     polar.measureHessian(state, rest, hessians);
-  }
-
-  @Override
-  public void measurementNoise(double[] state, double[] given, double[] covariance) {
-    polar.measurementNoise(state, rest, covariance);
   }
 }

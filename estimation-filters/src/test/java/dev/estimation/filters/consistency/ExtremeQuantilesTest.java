@@ -6,7 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.filters.filter.FilterPlan;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import org.apache.commons.math3.distribution.ChiSquaredDistribution;
 import org.junit.jupiter.api.function.Executable;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -61,7 +61,7 @@ class ExtremeQuantilesTest {
     assertRefused(() -> ChiSquareBounds.upperLimit(bad, 3), words);
     assertRefused(() -> ChiSquareBounds.twoSided(bad, 3), words);
     assertRefused(() -> ChiSquareBounds.ofAverage(bad, 3, 10), words);
-    FilterPlan plan = FilterPlan.extended(new RandomWalk(1, 1));
+    FilterPlan plan = FilterPlan.extended(new PlainWalk(1, 1));
     assertRefused(() -> plan.withGate(bad), words);
   }
 

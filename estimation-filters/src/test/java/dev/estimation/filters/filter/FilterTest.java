@@ -16,8 +16,9 @@ import dev.estimation.filters.testing.ChainMotion;
 import dev.estimation.filters.testing.ChainSight;
 import dev.estimation.filters.testing.FaultySensor;
 import dev.estimation.filters.testing.Matchings;
-import dev.estimation.filters.testing.Position;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.Models;
+import dev.estimation.filters.testing.PlainPosition;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.Callable;
@@ -47,7 +48,7 @@ class FilterTest extends BothForms {
   @MethodSource("matchings")
   void independentRowsMayComeOneAfterAnother(MomentMatching matching) {
     Gaussian prior = Gaussian.of(new double[] {1, 2}, new double[][] {{2, 0.7}, {0.7, 3}});
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(2, 1), matching));
     Estimate together = plan.start(0, prior);
     SensorPort both = plan.workspace().port(new FaultySensor());
     assertEquals(StepStatus.APPLIED, both.update(together, new double[] {1.4, 1.1}));
@@ -76,7 +77,7 @@ class FilterTest extends BothForms {
   void anglesCrossTheirSeam(MomentMatching matching) {
     FilterPlan plan = formed(FilterPlan.of(new Heading(0.2), matching));
     FilterWorkspace work = plan.workspace();
-    SensorPort compass = work.port(new Compass());
+    SensorPort compass = work.port(new Models.Compass());
     Estimate heading = plan.start(0, Gaussian.independent(new double[] {3.1}, new double[] {0.1}));
     assertEquals(StepStatus.APPLIED, work.predict(heading, 1));
     // 3.1 + 0.2 = 3.3, past pi: 3.3 - 2 pi.
@@ -97,8 +98,8 @@ class FilterTest extends BothForms {
 
   @Test
   void gateIsTheChiSquareQuantile() {
-    FilterPlan plan = formed(FilterPlan.extended(new RandomWalk(1, 1))).withGate(0.95);
-    SensorPort port = plan.workspace().port(new Position(1, 1));
+    FilterPlan plan = formed(FilterPlan.extended(new PlainWalk(1, 1))).withGate(0.95);
+    SensorPort port = plan.workspace().port(new PlainPosition(1, 1));
     // S = 2; the 0.95 quantile with 1 degree of freedom is 3.84145882069413 (NIST tables).
     double limit = Math.sqrt(2 * 3.84145882069413);
     Estimate inside = plan.start(0, standard(0));
@@ -165,7 +166,7 @@ class FilterTest extends BothForms {
 
   @Test
   void anEstimateIsNotTheGaussianItStartedFrom() {
-    FilterPlan plan = formed(FilterPlan.extended(new RandomWalk(1, 1)));
+    FilterPlan plan = formed(FilterPlan.extended(new PlainWalk(1, 1)));
     Gaussian start = standard(5);
     Estimate estimate = plan.start(0, start);
     assertEquals(StepStatus.APPLIED, plan.workspace().predict(estimate, 1));
@@ -218,28 +219,5 @@ class FilterTest extends BothForms {
     @Override
     public void processNoise(
         double[] state, double[] control, double time, double dt, double[] covariance) {}
-  }
-
-  /** Sees the angle, sigma 0.1 rad. */
-  private record Compass() implements DifferentiableSensor {
-    @Override
-    public Space measurementSpace() {
-      return Space.angles(1);
-    }
-
-    @Override
-    public void measure(double[] state, double[] given, double[] measurement) {
-      measurement[0] = state[0];
-    }
-
-    @Override
-    public void measureJacobian(double[] state, double[] given, double[] jacobian) {
-      jacobian[0] = 1;
-    }
-
-    @Override
-    public void measurementNoise(double[] state, double[] given, double[] covariance) {
-      covariance[0] = 0.01;
-    }
   }
 }

@@ -6,7 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.RandomGaussians;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -43,7 +43,7 @@ class IteratedFarPlacesTest {
 
   private static Estimate updated(
       IteratedUpdate iteration, Distances sensor, Gaussian prior, double[] measurement, int seed) {
-    FilterPlan plan = FilterPlan.iteratedExtended(new RandomWalk(3, 1), iteration);
+    FilterPlan plan = FilterPlan.iteratedExtended(new PlainWalk(3, 1), iteration);
     Estimate estimate = plan.start(0, prior);
     SensorPort port = plan.workspace().port(sensor);
     StepStatus status = port.update(estimate, measurement);

@@ -10,10 +10,13 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.RangeAndBearing;
+import dev.estimation.filters.sensor.Sight;
 import dev.estimation.filters.testing.Bits;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Models;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -27,6 +30,9 @@ class IteratedUpdateTest extends BothForms {
   private static final Gaussian PLANE =
       Gaussian.of(new double[] {10, 5}, new double[][] {{4, 1}, {1, 9}});
   private static final double[] SIGHT = {12.3, 0.6};
+  private static final double[] ORIGIN = {0, 0};
+  private static final RangeAndBearing RADAR =
+      new RangeAndBearing(Sight.fromGiven(Components.of(0, 1)), 0.1, 0.02);
   private static final Gaussian SCALAR = Gaussian.of(new double[] {1}, new double[][] {{0.5}});
 
   static List<IteratedUpdate> settings() {
@@ -36,13 +42,13 @@ class IteratedUpdateTest extends BothForms {
   }
 
   private SensorPort port(int dimension, IteratedUpdate iteration, DifferentiableSensor s) {
-    return formed(FilterPlan.iteratedExtended(new RandomWalk(dimension, 1), iteration))
+    return formed(FilterPlan.iteratedExtended(new PlainWalk(dimension, 1), iteration))
         .workspace()
         .port(s);
   }
 
   private Estimate start(Gaussian prior) {
-    return formed(FilterPlan.extended(new RandomWalk(prior.dimension(), 1))).start(0, prior);
+    return formed(FilterPlan.extended(new PlainWalk(prior.dimension(), 1))).start(0, prior);
   }
 
   /** 1e-12 standard deviations (2 m, 3 m): the tolerance asked of the iteration is 1e-14. */
@@ -50,8 +56,8 @@ class IteratedUpdateTest extends BothForms {
   @MethodSource("settings")
   void rangeAndBearing(IteratedUpdate iteration) {
     Estimate estimate = start(PLANE);
-    SensorPort port = port(2, iteration, new Models.RangeBearing(0.01, 0.0004));
-    assertEquals(StepStatus.APPLIED, port.update(estimate, SIGHT));
+    SensorPort port = port(2, iteration, RADAR);
+    assertEquals(StepStatus.APPLIED, port.update(estimate, SIGHT, ORIGIN));
     assertWithin("east", 10.157116827533569, estimate.mean(0), 1e-12, 2);
     assertWithin("north", 6.9351242595186475, estimate.mean(1), 1e-12, 3);
     assertWithin("P11", 0.025788992911124325, estimate.covariance(0, 0), 1e-12, 1);
@@ -82,8 +88,8 @@ class IteratedUpdateTest extends BothForms {
       double stop = i == 0 ? 2 : i == 1 ? 0.2 : 1e-3;
       IteratedUpdate iteration = IteratedUpdate.undamped().withTolerance(stop);
       Estimate estimate = start(PLANE);
-      SensorPort port = port(2, iteration, new Models.RangeBearing(0.01, 0.0004));
-      assertEquals(StepStatus.APPLIED, port.update(estimate, SIGHT));
+      SensorPort port = port(2, iteration, RADAR);
+      assertEquals(StepStatus.APPLIED, port.update(estimate, SIGHT, ORIGIN));
       assertWithin("round " + i, iterates[i][0], estimate.mean(0), 1e-12, 2);
       assertWithin("round " + i, iterates[i][1], estimate.mean(1), 1e-12, 3);
     }
@@ -92,12 +98,11 @@ class IteratedUpdateTest extends BothForms {
   /** Gate, NIS and likelihood come from the first linearisation. */
   @Test
   void innovationIsThatOfThePrediction() {
-    SensorPort once = formed(FilterPlan.extended(new RandomWalk(2, 1)))
-        .workspace()
-        .port(new Models.RangeBearing(0.01, 0.0004));
-    SensorPort often = port(2, IteratedUpdate.undamped(), new Models.RangeBearing(0.01, 0.0004));
-    assertEquals(StepStatus.APPLIED, once.update(start(PLANE), SIGHT));
-    assertEquals(StepStatus.APPLIED, often.update(start(PLANE), SIGHT));
+    SensorPort once =
+        formed(FilterPlan.extended(new PlainWalk(2, 1))).workspace().port(RADAR);
+    SensorPort often = port(2, IteratedUpdate.undamped(), RADAR);
+    assertEquals(StepStatus.APPLIED, once.update(start(PLANE), SIGHT, ORIGIN));
+    assertEquals(StepStatus.APPLIED, often.update(start(PLANE), SIGHT, ORIGIN));
     assertEquals(once.normalisedInnovationSquared(), often.normalisedInnovationSquared());
     assertEquals(once.logLikelihood(), often.logLikelihood());
     assertArrayEquals(once.innovation(), often.innovation());

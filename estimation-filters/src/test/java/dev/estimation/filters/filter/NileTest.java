@@ -7,8 +7,8 @@ import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.core.matching.MomentMatching;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
-import dev.estimation.filters.testing.Position;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainPosition;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.ReferenceTable;
 import java.util.List;
 import org.junit.jupiter.api.Named;
@@ -55,7 +55,7 @@ class NileTest extends BothForms {
   }
 
   private FilterPlan plan(MomentMatching matching) {
-    return formed(FilterPlan.of(new RandomWalk(1, 1469.1), matching));
+    return formed(FilterPlan.of(new PlainWalk(1, 1469.1), matching));
   }
 
   private double follow(
@@ -68,7 +68,7 @@ class NileTest extends BothForms {
   private static double follow(
       FilterPlan plan, Estimate level, List<ReferenceTable.Row> rows, String column) {
     FilterWorkspace work = plan.workspace();
-    SensorPort gauge = work.port(new Position(1, 15099));
+    SensorPort gauge = work.port(new PlainPosition(1, 15099));
     double logLikelihood = 0;
     for (ReferenceTable.Row row : rows) {
       String year = row.text("year");

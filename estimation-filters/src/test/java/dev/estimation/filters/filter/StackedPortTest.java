@@ -12,8 +12,8 @@ import dev.estimation.filters.testing.Bits;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
-import dev.estimation.filters.testing.Position;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainPosition;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.List;
 import org.junit.jupiter.api.Named;
 import org.junit.jupiter.api.Test;
@@ -37,9 +37,9 @@ class StackedPortTest extends BothForms {
   @ParameterizedTest
   @MethodSource("matchings")
   void linearRowsMayBeStacked(MomentMatching matching) {
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
-    StackedPort stacked = plan.workspace().port(new Position(2, 0.5), 3);
-    SensorPort single = plan.workspace().port(new Position(2, 0.5));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(2, 1), matching));
+    StackedPort stacked = plan.workspace().port(new PlainPosition(2, 0.5), 3);
+    SensorPort single = plan.workspace().port(new PlainPosition(2, 0.5));
     Estimate together = plan.start(0, prior());
     Estimate apart = plan.start(0, prior());
     double sum = 0;
@@ -61,7 +61,7 @@ class StackedPortTest extends BothForms {
   @ParameterizedTest
   @MethodSource("matchings")
   void rowsMayVary(MomentMatching matching) {
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(2, 1), matching));
     StackedPort port = plan.workspace().port(new Models.Distance(), 3);
     Estimate one = plan.start(0, prior());
     Estimate two = plan.start(0, prior());
@@ -81,7 +81,7 @@ class StackedPortTest extends BothForms {
   @ParameterizedTest
   @MethodSource("matchings")
   void oneRowIsAPlainUpdate(MomentMatching matching) {
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(2, 1), matching));
     Estimate stacked = plan.start(0, prior());
     Estimate plain = plan.start(0, prior());
     double[] place = {40, 0, 0.09};
@@ -95,7 +95,7 @@ class StackedPortTest extends BothForms {
 
   @Test
   void badRowsAreToldApart() {
-    FilterPlan plan = formed(FilterPlan.cubature(new RandomWalk(2, 1)));
+    FilterPlan plan = formed(FilterPlan.cubature(new PlainWalk(2, 1)));
     StackedPort port = plan.workspace().port(new Models.Distance(), 3);
     Estimate estimate = plan.start(0, prior());
     long[] before = Bits.of(estimate, 2);

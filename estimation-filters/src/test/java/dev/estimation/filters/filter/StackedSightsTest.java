@@ -14,7 +14,7 @@ import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.testing.Bits;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Named;
@@ -41,7 +41,7 @@ class StackedSightsTest extends BothForms {
   }
 
   private FilterPlan plan(MomentMatching matching) {
-    return formed(FilterPlan.of(new RandomWalk(3, 1), matching));
+    return formed(FilterPlan.of(new PlainWalk(3, 1), matching));
   }
 
   private static Gaussian prior() {

@@ -115,8 +115,7 @@ class ToleranceFilterTest extends BothForms {
   /** A straight motion and a range seen from afar take no more than the first points. */
   @Test
   void whatIsNearlyLinearIsCheap() {
-    FilterPlan plan =
-        formed(FilterPlan.withinTolerance(new ConstantVelocity(0.1, 0.1), 0.01));
+    FilterPlan plan = formed(FilterPlan.withinTolerance(new ConstantVelocity(0.1, 0.1), 0.01));
     Estimate estimate = plan.start(
         0, Gaussian.independent(new double[] {5000, 0, 3, 4}, new double[] {5, 5, 1, 1}));
     FilterWorkspace work = plan.workspace();

@@ -14,10 +14,10 @@ import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.model.SensorModel;
 import dev.estimation.filters.testing.BothForms;
-import dev.estimation.filters.testing.ConstantVelocity;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Pendulum;
-import dev.estimation.filters.testing.Position;
+import dev.estimation.filters.testing.PlainLine;
+import dev.estimation.filters.testing.PlainPosition;
 import dev.estimation.testing.OnceDifferentiable;
 import dev.estimation.testing.PlainFunction;
 import dev.estimation.testing.ReferenceTable;
@@ -66,7 +66,7 @@ class TraceTest extends BothForms {
   void constantVelocityIsTheSameForEveryMatching(MomentMatching matching) {
     Gaussian prior = Gaussian.of(new double[] {0, 1}, new double[][] {{10, 0}, {0, 4}});
     double logLikelihood = follow(
-        "cv1d", "KF", matching, new ConstantVelocity(0.5), new Position(2, 2), prior, 1, TOLERANCE);
+        "cv1d", "KF", matching, new PlainLine(0.5), new PlainPosition(2, 2), prior, 1, TOLERANCE);
     assertRelative("log-likelihood", -77.19600739568106, logLikelihood, 1e-12);
   }
 

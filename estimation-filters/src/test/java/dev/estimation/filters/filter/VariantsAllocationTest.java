@@ -13,7 +13,7 @@ import dev.estimation.filters.testing.ChainMotion;
 import dev.estimation.filters.testing.ChainSight;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.AllocationMeter;
 import java.util.List;
 import org.junit.jupiter.api.Named;
@@ -39,7 +39,7 @@ class VariantsAllocationTest extends BothForms {
   @ParameterizedTest
   @MethodSource("matchings")
   void stackedRowsOfVaryingNumber(MomentMatching matching) {
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(2, 1), matching));
     FilterWorkspace work = plan.workspace();
     StackedPort port = work.port(new Models.Distance(), 3);
     Estimate estimate =

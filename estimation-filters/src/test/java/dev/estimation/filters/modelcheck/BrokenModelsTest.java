@@ -15,6 +15,7 @@ import static dev.estimation.filters.modelcheck.FindingKind.NOT_DETERMINISTIC;
 import static dev.estimation.filters.modelcheck.FindingKind.NOT_FINITE;
 import static dev.estimation.filters.modelcheck.FindingKind.NOT_LINEAR;
 import static dev.estimation.filters.modelcheck.FindingKind.OUTPUT_UNFILLED;
+import static dev.estimation.filters.modelcheck.FindingKind.THREAD_COPY;
 import static dev.estimation.filters.modelcheck.FindingKind.UNDECLARED_INPUT;
 import static dev.estimation.filters.modelcheck.FindingKind.UNDECLARED_SEAM;
 import static dev.estimation.filters.modelcheck.FindingKind.UNEQUAL_SCALES;
@@ -24,15 +25,21 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import dev.estimation.core.space.Space;
+import dev.estimation.filters.guide.Guide;
 import dev.estimation.filters.model.Motion;
 import dev.estimation.filters.model.NoiseDrivenMotion;
 import dev.estimation.filters.model.SensorModel;
 import java.io.IOException;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.EnumMap;
 import java.util.EnumSet;
 import java.util.List;
+import java.util.Map;
 import java.util.Set;
+import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
@@ -111,7 +118,12 @@ class BrokenModelsTest {
         of(new BrokenSensors.RootOfNegative(), NOT_FINITE, 1, "measurement[0] must be finite"),
         of(new BrokenSensors.Simulates(), NOT_DETERMINISTIC, 1, "measurement[0]"),
         of(new BrokenSensors.KnowsTheArray(), EARLIER_CALL, 1, "measurement[0]"),
-        of(new BrokenSensors.NoiseOfLastRange(), EARLIER_CALL, 1, "covariance[0][0]", "measure at"),
+        of(
+            new BrokenSensors.NoiseOfLastRange(),
+            EARLIER_CALL,
+            1,
+            "covariance[0][0]",
+            "before measure"),
         of(new BrokenSensors.WritesLater(), EARLIER_CALL, 1, "must stay"),
         of(new BrokenSensors.Allocates(), ALLOCATION, 1, "measure: a call must allocate nothing"),
         of(new BrokenSensors.Unread(), UNREAD_INPUT, 1, "hint: ", "state[2]"),
@@ -138,6 +150,8 @@ class BrokenModelsTest {
         of(new BrokenMotions.LastStep(), EARLIER_CALL, 1, "next[0]"),
         of(new BrokenMotions.Counts(), NOT_DETERMINISTIC, 1, "processNoise: covariance[1][1]"),
         of(new BrokenMotions.LiftNotFinite(), NOT_FINITE, 1, "jacobian[0][1]", "got NaN"),
+        of(new BrokenMotions.ForgetsFriction(0.2), THREAD_COPY, 1, "move: next[1] must be -0.8"),
+        of(new BrokenMotions.TakesAnother(), THREAD_COPY, 1, "must give", "moveJacobian"),
         of(new BrokenMotions.LiftAllocates(), ALLOCATION, 1, "processNoise: a call must"));
   }
 
@@ -168,6 +182,25 @@ class BrokenModelsTest {
     String list = cases.stream().map(each -> each.report() + "\n").collect(Collectors.joining());
     Files.writeString(Path.of("target", "modelcheck-broken.txt"), list);
     assertAll(cases.stream().map(each -> each::check));
+  }
+
+  /** The first model of each kind, numbers to four digits. */
+  @Test
+  void theGuideHasAnExampleOfEachKind() throws IOException {
+    Map<FindingKind, String> examples = new EnumMap<>(FindingKind.class);
+    for (Case each : cases()) {
+      String message = each.report().findings().get(0).message();
+      examples.putIfAbsent(each.kind(), "| " + each.kind() + " | " + shortened(message) + " |\n");
+    }
+    String head = "| finding | message, for example |\n|---|---|\n";
+    Guide.assertHolds("modelcheck-kinds.md", head + String.join("", examples.values()));
+  }
+
+  private static String shortened(String message) {
+    return Pattern.compile("-?\\d+\\.\\d+(E-?\\d+)?")
+        .matcher(message)
+        .replaceAll(number -> Double.toString(
+            new BigDecimal(number.group()).round(new MathContext(4)).doubleValue()));
   }
 
   @Test

@@ -136,6 +136,34 @@ final class BrokenMotions {
     }
   }
 
+  /** For one thread without the friction that it was built with. */
+  static class ForgetsFriction extends CleanModels.Lift {
+    private final double friction;
+
+    ForgetsFriction(double friction) {
+      this.friction = friction;
+    }
+
+    @Override
+    public void move(double[] x, double[] control, double t, double dt, double[] next) {
+      super.move(x, control, t, dt, next);
+      next[1] -= friction * dt;
+    }
+
+    @Override
+    public ForgetsFriction forOneThread() {
+      return new ForgetsFriction(0);
+    }
+  }
+
+  /** Quite another motion for one thread. */
+  static class TakesAnother extends CleanModels.Lift {
+    @Override
+    public CleanModels.Mooring forOneThread() {
+      return new CleanModels.Mooring();
+    }
+  }
+
   /** A heading among the reals, which the model wraps. */
   static class HeadingAsReal extends CleanModels.Cart {
     @Override

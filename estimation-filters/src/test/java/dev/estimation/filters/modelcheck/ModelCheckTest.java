@@ -74,7 +74,7 @@ class ModelCheckTest {
     ModelReport report = ModelCheck.over(SIGHT).examine(new BrokenSensors.Unfilled());
     String message = assertThrows(AssertionError.class, report::assertClean).getMessage();
     assertEquals(report.toString(), message);
-    assertTrue(message.startsWith("sensor model Unfilled: 1 faults, 0 hints at 200 places\n"));
+    assertTrue(message.startsWith("sensor model Unfilled: 1 fault, 0 hints at 200 places\n"));
     assertTrue(message.contains("note: derivatives, inputs, seams and composition were not"));
   }
 

@@ -87,6 +87,21 @@ class FallingBodyTest extends MotionContract {
     }
   }
 
+  /**
+   * Along the path of the mean noise composes though the motion is not linear: two steps of h from where each begins, and one of
+   * 2 h. To 1e-6 of the deviations: each of three integrations is right to 1e-9 of its entries, and large ones cancel.
+   */
+  @Test
+  void noiseComposesAlongThePath() {
+    for (double[] state : states()) {
+      double[] half = MotionFunctions.moved(model(), state, NONE, 1.5);
+      double[] f = MotionFunctions.jacobian(model(), half, NONE, 1.5);
+      double[] first = MotionFunctions.noise(model(), state, NONE, 1.5);
+      double[] second = MotionFunctions.noise(model(), half, NONE, 1.5);
+      checkComposes(f, first, second, MotionFunctions.noise(model(), state, NONE, 3), 3, 1e-6);
+    }
+  }
+
   /** Without drag: a stone. */
   @Test
   void fallsFreelyWithoutDrag() {

@@ -57,13 +57,31 @@ class GyroscopeAttitudeTest extends MotionContract {
     assertArrayEquals(new double[] {0.5, -0.5, -0.5, 0.5, 0, 0, 0}, turned, 2e-16);
   }
 
+  /** Without a turn that of a constant velocity on each axis, the bias being taken off, with n dt besides. */
   @Test
   void noiseIsThatOfTheTangentSpace() {
-    double[] noise = MotionFunctions.noise(model(), states()[0], control(), 0.5);
+    double dt = 0.5;
+    double[] noise = MotionFunctions.noise(model(), states()[0], control(), dt);
     double[] expected = new double[36];
-    for (int i = 0; i < 6; i++) {
-      expected[7 * i] = i < 3 ? 5e-7 : 5e-9;
+    for (int i = 0; i < 3; i++) {
+      expected[7 * i] = 1e-6 * dt + 1e-8 * dt * dt * dt / 3;
+      expected[7 * i + 3] = -1e-8 * dt * dt / 2;
+      expected[7 * i + 18] = expected[7 * i + 3];
+      expected[7 * i + 21] = 1e-8 * dt;
     }
     assertArrayEquals(expected, noise, 1e-22); // a rounding of 5e-7
+  }
+
+  /** At a rate that stays, however far it turns: to roundings of numbers not above the deviations of both components. */
+  @Test
+  void noiseComposesOverTime() {
+    for (double[] state : states()) {
+      for (double h : new double[] {1e-9, 0.01, 0.6, 1, 40}) {
+        double[] f = MotionFunctions.jacobian(model(), state, control(), h);
+        double[] q = MotionFunctions.noise(model(), state, control(), h);
+        double[] both = MotionFunctions.noise(model(), state, control(), 2 * h);
+        checkComposes(f, q, q, both, 6, 1e-14);
+      }
+    }
   }
 }

@@ -113,7 +113,7 @@ class IntegratedMotionTest {
     assertTrue(coarse < 1e-2 && coarse > 10 * fine, "coarse " + coarse);
   }
 
-  /** Of x after 60 s in one step, against the exact e^-3 times 100, x' = -x / 20. */
+  /** Of x after 200 s in one step, against the exact 100 e^-10, x' = -x / 20. */
   private static double error(double tolerance) {
     DifferentiableMotion decay = IntegratedMotion.of(new Flows.Stiff(0.05), tolerance, tolerance);
     double[] end = MotionFunctions.moved(decay, new double[] {100}, NONE, 200);

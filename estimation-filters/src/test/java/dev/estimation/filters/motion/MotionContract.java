@@ -149,14 +149,24 @@ abstract class MotionContract {
           for (int j = 0; j < n; j++) {
             double transition = twice[i * n + j];
             assertEquals(transition, product(f, f, i, j, n), 1e-13 * Math.abs(transition));
-            double limit = 1e-13 * Math.sqrt(both[i * n + i] * both[j * n + j]);
-            double carried = q[i * n + j];
-            for (int k = 0; k < n; k++) {
-              carried += product(f, q, i, k, n) * f[j * n + k];
-            }
-            assertEquals(both[i * n + j], carried, limit, "Q[" + i + "][" + j + "], h " + h);
           }
         }
+        checkComposes(f, q, q, both, n, 1e-13);
+      }
+    }
+  }
+
+  /** F Q1 F' + Q2 is that over both steps, relative to the deviations of both components. */
+  static void checkComposes(
+      double[] f, double[] q1, double[] q2, double[] both, int n, double relative) {
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < n; j++) {
+        double carried = q2[i * n + j];
+        for (int k = 0; k < n; k++) {
+          carried += product(f, q1, i, k, n) * f[j * n + k];
+        }
+        double limit = relative * Math.sqrt(both[i * n + i] * both[j * n + j]);
+        assertEquals(both[i * n + j], carried, limit, "Q[" + i + "][" + j + "]");
       }
     }
   }

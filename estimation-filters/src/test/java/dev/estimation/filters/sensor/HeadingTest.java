@@ -7,7 +7,7 @@ import dev.estimation.filters.filter.Estimate;
 import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableSensor;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 
@@ -33,7 +33,7 @@ class HeadingTest extends SensorContract {
   /** A state that has turned many times meets a compass at its seam: half way, by equal variances. */
   @Test
   void goesTheShortWay() {
-    FilterPlan plan = FilterPlan.cubature(new RandomWalk(1, 1));
+    FilterPlan plan = FilterPlan.cubature(new PlainWalk(1, 1));
     double turned = 6 * Math.PI + Math.PI - 0.1;
     Estimate estimate =
         plan.start(0, Gaussian.independent(new double[] {turned}, new double[] {1}));

@@ -8,7 +8,7 @@ import dev.estimation.filters.filter.Estimate;
 import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableSensor;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 
@@ -43,7 +43,7 @@ class PositionTest extends SensorContract {
   /** Linear in all: one evaluation, whatever the rule, and the Kalman update: 4 of 4 + 1 of the way. */
   @Test
   void noPointsAreDrawn() {
-    FilterPlan plan = FilterPlan.cubature(new RandomWalk(5, 1));
+    FilterPlan plan = FilterPlan.cubature(new PlainWalk(5, 1));
     Estimate estimate =
         plan.start(0, Gaussian.independent(new double[5], new double[] {2, 2, 2, 2, 2}));
     var port = plan.workspace().port(new Position(States.FIRST_TWO, 1, 1));

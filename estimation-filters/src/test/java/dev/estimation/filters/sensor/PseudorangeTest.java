@@ -9,7 +9,7 @@ import dev.estimation.filters.filter.Estimate;
 import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableSensor;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 
@@ -71,7 +71,7 @@ class PseudorangeTest extends SensorContract {
 
   @Test
   void aGivenDeviationThatIsNoneIsRefusedByTheFilter() {
-    FilterPlan plan = FilterPlan.cubature(new RandomWalk(4, 1));
+    FilterPlan plan = FilterPlan.cubature(new PlainWalk(4, 1));
     Estimate estimate =
         plan.start(0, Gaussian.independent(new double[4], new double[] {1, 1, 1, 1}));
     var port = plan.workspace().port(Pseudorange.ofGivenDeviation(SPATIAL, CLOCK));

@@ -12,7 +12,7 @@ import dev.estimation.filters.filter.FilterWorkspace;
 import dev.estimation.filters.filter.IteratedUpdate;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableSensor;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.Arrays;
 import java.util.List;
 import org.junit.jupiter.api.Test;
@@ -83,7 +83,7 @@ class RangeAndBearingTest extends SensorContract {
   void iteratedUpdateFindsTheMaximumOfThePosterior() {
     Gaussian prior = Gaussian.of(new double[] {10, 5}, new double[][] {{4, 1}, {1, 9}});
     FilterPlan plan = FilterPlan.iteratedExtended(
-        new RandomWalk(2, 1), IteratedUpdate.undamped().withTolerance(1e-14));
+        new PlainWalk(2, 1), IteratedUpdate.undamped().withTolerance(1e-14));
     Estimate estimate = plan.start(0, prior);
     StepStatus status = plan.workspace()
         .port(new RangeAndBearing(PLAIN, 0.1, 0.02))
@@ -114,7 +114,7 @@ class RangeAndBearingTest extends SensorContract {
     Arrays.fill(deviations, 2);
     mean[dimension - 2] = 8;
     mean[dimension - 1] = 6;
-    FilterPlan plan = FilterPlan.unscented(new RandomWalk(dimension, 1), 1, 2, 0);
+    FilterPlan plan = FilterPlan.unscented(new PlainWalk(dimension, 1), 1, 2, 0);
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, Gaussian.independent(mean, deviations));
     StepStatus status = work.port(new RangeAndBearing(Sight.fromGiven(position), 0.5, 0.1))
@@ -130,7 +130,7 @@ class RangeAndBearingTest extends SensorContract {
   /** Rows stacked by a port keep it too: points are drawn over the two components read, once for all rows. */
   @Test
   void stackedRowsKeepTheStructure() {
-    FilterPlan plan = FilterPlan.unscented(new RandomWalk(5, 1), 1, 2, 0);
+    FilterPlan plan = FilterPlan.unscented(new PlainWalk(5, 1), 1, 2, 0);
     Estimate estimate = plan.start(
         0, Gaussian.independent(new double[] {8, 6, 0, 0, 0}, new double[] {1, 1, 1, 1, 1}));
     var port = plan.workspace().port(new RangeAndBearing(PLAIN, 0.5, 0.1), 3);
@@ -149,7 +149,7 @@ class RangeAndBearingTest extends SensorContract {
   @Test
   void innovationsGoTheShortWay() {
     for (FilterPlan plan : List.of(
-        FilterPlan.extended(new RandomWalk(2, 1)), FilterPlan.cubature(new RandomWalk(2, 1)))) {
+        FilterPlan.extended(new PlainWalk(2, 1)), FilterPlan.cubature(new PlainWalk(2, 1)))) {
       Estimate estimate =
           plan.start(0, Gaussian.independent(new double[] {-10, -0.1}, new double[] {0.1, 0.1}));
       StepStatus status = plan.workspace()

@@ -17,7 +17,7 @@ import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.model.TwiceDifferentiableSensor;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.AllocationMeter;
 import java.util.Arrays;
 import java.util.List;
@@ -231,7 +231,7 @@ abstract class SensorContract {
       DifferentiableSensor sensor, double[] state, double[] given, double... measurement) {
     double[] deviations = new double[state.length];
     Arrays.fill(deviations, 1);
-    FilterPlan plan = FilterPlan.extended(new RandomWalk(state.length, 1));
+    FilterPlan plan = FilterPlan.extended(new PlainWalk(state.length, 1));
     SensorPort port = plan.workspace().port(sensor);
     Estimate estimate = plan.start(0, Gaussian.independent(state, deviations));
     StepStatus status = port.update(estimate, measurement, given);

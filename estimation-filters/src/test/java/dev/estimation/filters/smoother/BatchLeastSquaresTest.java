@@ -15,7 +15,7 @@ import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.RandomGaussians;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
@@ -135,7 +135,7 @@ class BatchLeastSquaresTest extends BothForms {
 
   @Test
   void everyPredictionMustBeRecorded() {
-    FilterPlan plan = formed(FilterPlan.extended(new RandomWalk(1, 1)));
+    FilterPlan plan = formed(FilterPlan.extended(new PlainWalk(1, 1)));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, Gaussian.of(new double[] {0}, new double[][] {{1}}));
     FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(estimate);
@@ -150,7 +150,7 @@ class BatchLeastSquaresTest extends BothForms {
   /** A step over no time replaces the last record: the update counts, the prediction stays. */
   @Test
   void stepsOverNoTimeJoinTheLast() {
-    FilterPlan plan = formed(FilterPlan.extended(new RandomWalk(1, 1)));
+    FilterPlan plan = formed(FilterPlan.extended(new PlainWalk(1, 1)));
     FilterWorkspace work = plan.workspace();
     Estimate estimate = plan.start(0, Gaussian.of(new double[] {0}, new double[][] {{1}}));
     FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(estimate);

@@ -15,7 +15,9 @@ import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StackedPort;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.Motion;
-import dev.estimation.filters.testing.Models;
+import dev.estimation.filters.sensor.Components;
+import dev.estimation.filters.sensor.RangeAndBearing;
+import dev.estimation.filters.sensor.Sight;
 import dev.estimation.filters.testing.Turns;
 import dev.estimation.testing.AllocationMeter;
 import org.junit.jupiter.api.Test;
@@ -28,6 +30,9 @@ class LinearInputTrackTest {
   private static final double[] PLACES = {-40, 10, 20, -50};
   private static final Gaussian PRIOR =
       Gaussian.independent(new double[] {100, 60, -8, 3, 0.15}, new double[] {5, 5, 2, 2, 0.05});
+  private static final double[] ORIGIN = {0, 0};
+  private static final RangeAndBearing RADAR =
+      new RangeAndBearing(Sight.fromGiven(Components.of(0, 1)), 2, 0.02);
   private static final MomentMatching SIX = PointMatching.of(GaussHermiteRule.product(6));
 
   /** A track with range, bearing and two range rates, measured without errors, and its likelihood. */
@@ -40,7 +45,7 @@ class LinearInputTrackTest {
 
     Run(FilterPlan plan) {
       FilterWorkspace work = plan.workspace();
-      SensorPort radar = work.port(new Models.RangeBearing(4, 4e-4));
+      SensorPort radar = work.port(RADAR);
       StackedPort rates = work.port(new Turns.RangeRate(), 2);
       Estimate estimate = plan.start(0, PRIOR);
       FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(estimate);
@@ -53,8 +58,8 @@ class LinearInputTrackTest {
         System.arraycopy(next, 0, truth, 0, 5);
         assertEquals(StepStatus.APPLIED, work.predict(estimate, k + 1.0), work::failure);
         predictions += work.evaluations();
-        new Models.RangeBearing(4, 4e-4).measure(truth, new double[0], seen);
-        assertEquals(StepStatus.APPLIED, radar.update(estimate, seen), radar::failure);
+        RADAR.measure(truth, ORIGIN, seen);
+        assertEquals(StepStatus.APPLIED, radar.update(estimate, seen, ORIGIN), radar::failure);
         for (int i = 0; i < 2; i++) {
           double x = truth[0] - PLACES[2 * i];
           double y = truth[1] - PLACES[2 * i + 1];

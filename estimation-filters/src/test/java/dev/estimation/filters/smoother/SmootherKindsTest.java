@@ -13,14 +13,13 @@ import dev.estimation.filters.filter.FilterWorkspace;
 import dev.estimation.filters.filter.SensorPort;
 import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.DifferentiableMotion;
-import dev.estimation.filters.model.DifferentiableSensor;
 import dev.estimation.filters.model.Motion;
 import dev.estimation.filters.model.SensorModel;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
-import dev.estimation.filters.testing.Position;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainPosition;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.RandomGaussians;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
@@ -145,7 +144,7 @@ class SmootherKindsTest extends BothForms {
     }
     double start = Math.IEEEremainder(centre - 0.02, 2 * Math.PI);
     Gaussian prior = Gaussian.independent(new double[] {start, 0.01}, new double[] {0.3, 0.05});
-    return smoothed(new Turning(), matching, prior, new Compass(), z);
+    return smoothed(new Turning(), matching, prior, new Models.Compass(), z);
   }
 
   /** The second component is a speed of 0.5 m/s, known exactly and never disturbed. */
@@ -161,10 +160,10 @@ class SmootherKindsTest extends BothForms {
     }
     Gaussian prior = Gaussian.independent(new double[] {0, 0.5}, new double[] {2, 0});
     SmoothedTrack got =
-        smoothed(new Models.LinearMotion(f, q), matching, prior, new Position(2, 0.3), z);
+        smoothed(new Models.LinearMotion(f, q), matching, prior, new PlainPosition(2, 0.3), z);
     Gaussian scalar = Gaussian.independent(new double[] {0}, new double[] {2});
     SmoothedTrack wanted =
-        smoothed(new RandomWalk(1, 1), matching, scalar, new Position(1, 0.3), still);
+        smoothed(new PlainWalk(1, 1), matching, scalar, new PlainPosition(1, 0.3), still);
     for (int k = 0; k <= STEPS; k++) {
       assertEquals(0.5, got.mean(k, 1));
       assertEquals(0.0, Math.abs(got.covariance(k, 1, 1)));
@@ -201,29 +200,6 @@ class SmootherKindsTest extends BothForms {
         double[] state, double[] control, double time, double dt, double[] covariance) {
       covariance[0] = 0.01;
       covariance[3] = 0.001;
-    }
-  }
-
-  /** Sees the heading, sigma 0.1 rad. */
-  private record Compass() implements DifferentiableSensor {
-    @Override
-    public Space measurementSpace() {
-      return Space.angles(1);
-    }
-
-    @Override
-    public void measure(double[] state, double[] given, double[] measurement) {
-      measurement[0] = state[0];
-    }
-
-    @Override
-    public void measureJacobian(double[] state, double[] given, double[] jacobian) {
-      jacobian[0] = 1;
-    }
-
-    @Override
-    public void measurementNoise(double[] state, double[] given, double[] covariance) {
-      covariance[0] = 0.01;
     }
   }
 }

@@ -19,11 +19,11 @@ import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.model.SensorModel;
 import dev.estimation.filters.testing.BothForms;
-import dev.estimation.filters.testing.ConstantVelocity;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Pendulum;
-import dev.estimation.filters.testing.Position;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainLine;
+import dev.estimation.filters.testing.PlainPosition;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.ReferenceTable;
 import java.util.List;
 import org.junit.jupiter.api.Named;
@@ -64,9 +64,9 @@ class SmootherTruthTest extends BothForms {
   }
 
   private void checkNile(MomentMatching matching, String file, String column) {
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(1, 1469.1), matching));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(1, 1469.1), matching));
     FilterWorkspace work = plan.workspace();
-    SensorPort gauge = work.port(new Position(1, 15099));
+    SensorPort gauge = work.port(new PlainPosition(1, 15099));
     Estimate level = plan.start(1871, Gaussian.of(new double[] {0}, new double[][] {{1e7}}));
     FixedIntervalSmoother smoother = FixedIntervalSmoother.startingAt(level);
     List<ReferenceTable.Row> rows = ReferenceTable.read(file).rows();
@@ -92,7 +92,7 @@ class SmootherTruthTest extends BothForms {
   @MethodSource("matchings")
   void constantVelocity(MomentMatching matching) {
     Gaussian prior = Gaussian.of(new double[] {0, 1}, new double[][] {{10, 0}, {0, 4}});
-    check("cv1d", "KF", matching, new ConstantVelocity(0.5), new Position(2, 2), prior, 1);
+    check("cv1d", "KF", matching, new PlainLine(0.5), new PlainPosition(2, 2), prior, 1);
   }
 
   @ParameterizedTest

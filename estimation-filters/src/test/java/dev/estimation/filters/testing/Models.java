@@ -102,39 +102,26 @@ public final class Models {
     }
   }
 
-  /** Range and bearing of a plane position from the origin, with given variances. */
-  public record RangeBearing(double rangeVariance, double bearingVariance)
-      implements DifferentiableSensor {
+  /** Sees the first component, an angle, sigma 0.1 rad. It does not tell that it is linear. */
+  public record Compass() implements DifferentiableSensor {
     @Override
     public Space measurementSpace() {
-      return Space.reals(1).and(Space.angles(1));
+      return Space.angles(1);
     }
 
     @Override
     public void measure(double[] state, double[] given, double[] measurement) {
-      measurement[0] = Math.hypot(state[0], state[1]);
-      measurement[1] = Math.atan2(state[1], state[0]);
+      measurement[0] = state[0];
     }
 
     @Override
     public void measureJacobian(double[] state, double[] given, double[] jacobian) {
-      int columns = jacobian.length / 2;
-      double range = Math.hypot(state[0], state[1]);
-      jacobian[0] = state[0] / range;
-      jacobian[1] = state[1] / range;
-      jacobian[columns] = -state[1] / (range * range);
-      jacobian[columns + 1] = state[0] / (range * range);
+      jacobian[0] = 1;
     }
 
     @Override
     public void measurementNoise(double[] state, double[] given, double[] covariance) {
-      covariance[0] = rangeVariance;
-      covariance[3] = bearingVariance;
-    }
-
-    @Override
-    public Structure structure() {
-      return Structure.UNKNOWN.withActiveInputs(0, 1);
+      covariance[0] = 0.01;
     }
   }
 

@@ -49,7 +49,7 @@ public final class Pendulum implements TwiceDifferentiableMotion {
   @Override
   public void processNoise(
       double[] state, double[] control, double time, double dt, double[] covariance) {
-    new ConstantVelocity(DENSITY).processNoise(state, control, time, dt, covariance);
+    new PlainLine(DENSITY).processNoise(state, control, time, dt, covariance);
   }
 
   /** The sine of the angle, variance 0.1. */

@@ -13,8 +13,8 @@ import dev.estimation.filters.filter.StepStatus;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.Matchings;
 import dev.estimation.filters.testing.Models;
-import dev.estimation.filters.testing.Position;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainPosition;
+import dev.estimation.filters.testing.PlainWalk;
 import dev.estimation.testing.RandomGaussians;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
@@ -51,8 +51,8 @@ class AccurateMeasurementTest extends BothForms {
   @ParameterizedTest
   @MethodSource("matchings")
   void clonedStates(MomentMatching matching) {
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(2, 1), matching));
-    SensorPort port = plan.workspace().port(new Position(2, 1));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(2, 1), matching));
+    SensorPort port = plan.workspace().port(new PlainPosition(2, 1));
     SensorPort whole = undeclared(plan);
     for (int seed = 0; seed < DRAWS; seed++) {
       RandomGaussians random = new RandomGaussians(seed);
@@ -90,8 +90,8 @@ class AccurateMeasurementTest extends BothForms {
   @MethodSource("matchings")
   void scalar(MomentMatching matching) {
     double noise = 1e-8;
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(1, 1), matching));
-    SensorPort port = plan.workspace().port(new Position(1, noise));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(1, 1), matching));
+    SensorPort port = plan.workspace().port(new PlainPosition(1, noise));
     for (int seed = 0; seed < DRAWS; seed++) {
       RandomGaussians random = new RandomGaussians(seed);
       double variance = 1e10 * random.uniform(0.5, 2);

@@ -19,8 +19,8 @@ import dev.estimation.filters.testing.Bits;
 import dev.estimation.filters.testing.BothForms;
 import dev.estimation.filters.testing.FaultySensor;
 import dev.estimation.filters.testing.FaultySensor.Fault;
-import dev.estimation.filters.testing.Position;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainPosition;
+import dev.estimation.filters.testing.PlainWalk;
 import java.util.List;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
@@ -56,7 +56,7 @@ class BadMeasurementTest {
   }
 
   private FilterPlan plan() {
-    return BothForms.formed(FilterPlan.of(new RandomWalk(3, 1), matching), form);
+    return BothForms.formed(FilterPlan.of(new PlainWalk(3, 1), matching), form);
   }
 
   @BeforeEach
@@ -164,7 +164,7 @@ class BadMeasurementTest {
             () -> port.update(estimate, new double[2], new double[3]))
         .getMessage();
     assertEquals("given must have length 0, got 3", message);
-    Estimate foreign = FilterPlan.of(new RandomWalk(2, 1), matching)
+    Estimate foreign = FilterPlan.of(new PlainWalk(2, 1), matching)
         .start(0, Gaussian.independent(new double[2], new double[2]));
     message = assertThrows(
             IllegalArgumentException.class, () -> port.update(foreign, new double[2]))
@@ -189,14 +189,14 @@ class BadMeasurementTest {
   void linearisationWithoutJacobianIsRefusedAtSetUp() {
     String message = assertThrows(
             IllegalArgumentException.class,
-            () -> FilterPlan.extended(new RandomWalk(3, 1)).workspace().port(new NoJacobian()))
+            () -> FilterPlan.extended(new PlainWalk(3, 1)).workspace().port(new NoJacobian()))
         .getMessage();
     assertTrue(message.contains("Jacobian"), message);
   }
 
   /** A sensor that knows no derivative. */
   private static final class NoJacobian implements dev.estimation.filters.model.SensorModel {
-    private final Position position = new Position(3, 1);
+    private final PlainPosition position = new PlainPosition(3, 1);
 
     @Override
     public dev.estimation.core.space.Space measurementSpace() {

@@ -19,7 +19,7 @@ import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.model.SensorModel;
 import dev.estimation.filters.testing.Bits;
 import dev.estimation.filters.testing.BothForms;
-import dev.estimation.filters.testing.RandomWalk;
+import dev.estimation.filters.testing.PlainWalk;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -38,7 +38,7 @@ class IndefiniteCovarianceTest extends BothForms {
 
   @Test
   void innovationCovariance() {
-    FilterPlan plan = formed(FilterPlan.of(new RandomWalk(N, 1), KURTOSIS));
+    FilterPlan plan = formed(FilterPlan.of(new PlainWalk(N, 1), KURTOSIS));
     SensorPort port = plan.workspace().port(new SquaredLength(0.5));
     Estimate estimate = plan.start(0, standard());
     long[] before = Bits.of(estimate, N);

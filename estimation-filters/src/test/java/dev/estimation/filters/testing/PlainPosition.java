@@ -4,13 +4,13 @@ import dev.estimation.core.function.Structure;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableSensor;
 
-/** The first component of a state, seen with a given variance. */
-public final class Position implements DifferentiableSensor {
+/** The first component of a state, seen with a given variance. It does not tell that it is linear. */
+public final class PlainPosition implements DifferentiableSensor {
   private final int stateDimension;
   private final double variance;
 
   /** A sensor for states of the given dimension. */
-  public Position(int stateDimension, double variance) {
+  public PlainPosition(int stateDimension, double variance) {
     this.stateDimension = stateDimension;
     this.variance = variance;
   }

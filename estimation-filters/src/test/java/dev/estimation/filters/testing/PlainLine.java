@@ -3,12 +3,15 @@ package dev.estimation.filters.testing;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
 
-/** Position and velocity on one line, driven by white acceleration of a given spectral density. */
-public final class ConstantVelocity implements DifferentiableMotion {
+/**
+ * Position and velocity on one line, driven by white acceleration of a given spectral density. It tells nothing of its
+ * structure, so that matchings draw points over it.
+ */
+public final class PlainLine implements DifferentiableMotion {
   private final double density;
 
   /** The spectral density of the acceleration, m^2/s^3. */
-  public ConstantVelocity(double density) {
+  public PlainLine(double density) {
     this.density = density;
   }
 

@@ -3,13 +3,16 @@ package dev.estimation.filters.testing;
 import dev.estimation.core.space.Space;
 import dev.estimation.filters.model.DifferentiableMotion;
 
-/** Independent components that wander: variance of the step = rate times dt. */
-public final class RandomWalk implements DifferentiableMotion {
+/**
+ * Independent components that wander: variance of the step = rate times dt. It tells nothing of its structure, so
+ * that matchings draw points over it.
+ */
+public final class PlainWalk implements DifferentiableMotion {
   private final int dimension;
   private final double rate;
 
   /** A walk in the given dimension, variance rate in unit^2/s. */
-  public RandomWalk(int dimension, double rate) {
+  public PlainWalk(int dimension, double rate) {
     this.dimension = dimension;
     this.rate = rate;
   }

@@ -48,11 +48,13 @@ public final class Measurement {
     return new Measurement(sensor, rows, values.clone(), givens.clone());
   }
 
-  SensorModel sensor() {
+  /** {@return the model of one row} */
+  public SensorModel sensor() {
     return sensor;
   }
 
-  boolean isStacked() {
+  /** {@return whether this is one or more stacked rows} */
+  public boolean isStacked() {
     return rows != UNSTACKED;
   }
 

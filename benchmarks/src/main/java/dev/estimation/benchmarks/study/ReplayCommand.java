@@ -1,8 +1,6 @@
 package dev.estimation.benchmarks.study;
 
-import dev.estimation.benchmarks.log.BadInputException;
 import dev.estimation.benchmarks.replay.LoadedVariant;
-import dev.estimation.benchmarks.replay.ReplayCase;
 import java.io.PrintWriter;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
@@ -19,17 +17,8 @@ import picocli.CommandLine.Spec;
     name = "replay",
     description = "Replays a log with several methods; without arguments, a simulated flight.")
 final class ReplayCommand implements Callable<Integer> {
-  @Option(
-      names = "--case",
-      paramLabel = "NAME",
-      description = "vessel, uwb, robot, gnss or demo (the default)")
-  private String caseName = CaseOpener.DEMO;
-
-  @Option(names = "--variant", paramLabel = "NAME", description = "repeatable; all if not given")
-  private List<String> variants = new ArrayList<>();
-
-  @Option(names = "--log", paramLabel = "FOLDER", description = "the recorded log")
-  private String log;
+  @Mixin
+  private CaseOptions cases = new CaseOptions();
 
   @Option(
       names = "--method",
@@ -56,23 +45,19 @@ final class ReplayCommand implements Callable<Integer> {
       description = "for results.json (default results)")
   private String out = "results";
 
-  @Mixin
-  private UwbOptions uwb = new UwbOptions();
-
   @Spec
   private CommandSpec spec;
 
   @Override
   public Integer call() {
     List<Method> chosenMethods = chosenMethods();
-    ReplayCase replayed = new CaseOpener(caseName, log, uwb).open();
-    List<LoadedVariant> loaded = load(replayed);
+    List<LoadedVariant> loaded = cases.load();
     ResultsFolder folder = ResultsFolder.prepare(out);
     Comparison comparison = new Comparison(loaded, chosenMethods, wholeState, squareRoot, smooth);
     PrintWriter console = spec.commandLine().getOut();
     ResultTable table =
         new ResultTable(console, LabelledRun.longestName(chosenMethods, squareRoot));
-    ResultsDocument document = new ResultsDocument(caseName, log);
+    ResultsDocument document = new ResultsDocument(cases.name(), cases.log());
     comparison.run(run -> {
       table.print(run);
       document.add(run);
@@ -86,16 +71,5 @@ final class ReplayCommand implements Callable<Integer> {
   private List<Method> chosenMethods() {
     List<String> typed = methods.isEmpty() ? MethodParser.DEFAULT : methods;
     return new LinkedHashSet<>(typed).stream().map(MethodParser::parse).toList();
-  }
-
-  private List<LoadedVariant> load(ReplayCase replayed) {
-    List<String> names = variants.isEmpty() ? replayed.variants() : variants;
-    for (String name : names) {
-      if (!replayed.variants().contains(name)) {
-        throw new BadInputException("--variant of case " + caseName + " must be one of "
-            + String.join(", ", replayed.variants()) + "; got '" + name + "'");
-      }
-    }
-    return new LinkedHashSet<>(names).stream().map(replayed::load).toList();
   }
 }

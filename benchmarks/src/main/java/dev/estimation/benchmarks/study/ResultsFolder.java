@@ -41,10 +41,15 @@ final class ResultsFolder {
     }
   }
 
-  /** Writes aside, then moves into place over any earlier file. Returns the file. */
+  /** Writes {@code results.json}; see the other method. */
   Path write(JsonNode document) {
-    Path file = folder.resolve(NAME);
-    Path aside = folder.resolve(NAME + "." + ProcessHandle.current().pid() + ".part");
+    return write(NAME, document);
+  }
+
+  /** Writes aside, then moves into place over any earlier file. Returns the file. */
+  Path write(String name, JsonNode document) {
+    Path file = folder.resolve(name);
+    Path aside = folder.resolve(name + "." + ProcessHandle.current().pid() + ".part");
     try {
       Files.writeString(
           aside,

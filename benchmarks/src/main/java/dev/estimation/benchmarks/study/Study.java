@@ -9,11 +9,15 @@ import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.ParseResult;
 import picocli.CommandLine.Spec;
 
-/** The study program. Exit codes: 0 done, 2 bad input (told in one line), 1 a fault of its own. */
+/**
+ * The study program. Exit codes: 0 done, 2 bad input (told in one line), 1 a fault of its own, or that a comparison found a
+ * loss.
+ */
 @Command(
     name = "study",
-    description = "Compares filters on a recorded log.",
-    subcommands = ReplayCommand.class)
+    description = "Compares filters and methods on a recorded log.",
+    subcommands = {ReplayCommand.class, WeighCommand.class, SweepCommand.class, CompareCommand.class
+    })
 public final class Study implements Runnable {
   @Spec
   private CommandSpec spec;
@@ -44,7 +48,8 @@ public final class Study implements Runnable {
 
   @Override
   public void run() {
-    throw new ParameterException(spec.commandLine(), "a command is wanted: replay; see --help");
+    throw new ParameterException(
+        spec.commandLine(), "a command is wanted: replay, weigh, sweep or compare; see --help");
   }
 
   private static int handle(Exception error, CommandLine command, ParseResult parsed)

@@ -15,14 +15,16 @@ final class ErrorScale {
   private final int rows;
   private final double[] covariance;
   private final double[] factor;
-  private final double[] deviations;
+  private final double[] inverseDeviations;
+  private final double[] inversePivots;
   private final double[] unit;
 
   ErrorScale(int rows) {
     this.rows = rows;
     this.covariance = new double[rows * rows];
     this.factor = new double[rows * rows];
-    this.deviations = new double[rows];
+    this.inverseDeviations = new double[rows];
+    this.inversePivots = new double[rows];
     this.unit = new double[rows];
   }
 
@@ -54,25 +56,21 @@ final class ErrorScale {
   void factor() {
     for (int i = 0; i < rows; i++) {
       double deviation = Math.sqrt(covariance[i * rows + i]);
-      deviations[i] = deviation > 0 ? deviation : 1;
+      inverseDeviations[i] = deviation > 0 ? 1 / deviation : 1;
     }
     for (int j = 0; j < rows; j++) {
       for (int i = j; i < rows; i++) {
-        double sum = covariance[i * rows + j] / (deviations[i] * deviations[j]);
+        double sum = covariance[i * rows + j] * inverseDeviations[i] * inverseDeviations[j];
         for (int c = 0; c < j; c++) {
           sum -= factor[i * rows + c] * factor[j * rows + c];
         }
-        factor[i * rows + j] = i == j ? pivot(sum) : divided(sum, factor[j * rows + j]);
+        if (i == j) {
+          // Of a direction without variance, nothing is divided by 0: it is left out.
+          inversePivots[j] = sum > LEAST_PIVOT * rows ? 1 / Math.sqrt(sum) : 0;
+        }
+        factor[i * rows + j] = sum * inversePivots[j];
       }
     }
-  }
-
-  private double pivot(double value) {
-    return value > LEAST_PIVOT * rows ? Math.sqrt(value) : 0;
-  }
-
-  private static double divided(double value, double pivot) {
-    return pivot == 0 ? 0 : value / pivot;
   }
 
   /** The squared length of v, the components a stride apart. */
@@ -89,15 +87,16 @@ final class ErrorScale {
   double fillUnit(double[] v, int start, int stride, double[] result, int to) {
     double square = 0;
     for (int i = 0; i < rows; i++) {
-      double rest = v[start + i * stride] / deviations[i];
+      double rest = v[start + i * stride] * inverseDeviations[i];
       for (int j = 0; j < i; j++) {
         rest -= factor[i * rows + j] * result[to + j];
       }
-      double pivot = factor[i * rows + i];
-      result[to + i] = divided(rest, pivot);
-      square += pivot == 0 && Math.abs(rest) > ROUNDING
-          ? Double.POSITIVE_INFINITY
-          : result[to + i] * result[to + i];
+      double unitPart = rest * inversePivots[i];
+      result[to + i] = unitPart;
+      square += unitPart * unitPart;
+      if (inversePivots[i] == 0 && Math.abs(rest) > ROUNDING) {
+        square = Double.POSITIVE_INFINITY;
+      }
     }
     return square;
   }

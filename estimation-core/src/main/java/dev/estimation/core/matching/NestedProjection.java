@@ -11,8 +11,15 @@ final class NestedProjection {
   private final NestedNodes nodes = NestedNodes.standardNormal();
   private final int levels = nodes.levels();
   private final double[][] changes = new double[levels][];
+  private final int[] counts = new int[levels + 1];
+  private final int[] degrees = new int[levels + 1];
 
   NestedProjection() {
+    degrees[0] = -1;
+    for (int level = 0; level < levels; level++) {
+      counts[level + 1] = nodes.count(level);
+      degrees[level + 1] = nodes.degree(level) / 2;
+    }
     for (int level = 0; level < levels; level++) {
       changes[level] = projection(level);
       if (level > 0) {
@@ -60,7 +67,7 @@ final class NestedProjection {
 
   /** The number of nodes of a level, those of the levels before first; 0 for level -1. */
   int nodes(int level) {
-    return level < 0 ? 0 : nodes.count(level);
+    return counts[level + 1];
   }
 
   double node(int index) {
@@ -69,7 +76,7 @@ final class NestedProjection {
 
   /** The highest degree of a level: 0, 2, 7, 14, 25; -1 for level -1. */
   int degree(int level) {
-    return level < 0 ? -1 : nodes.degree(level) / 2;
+    return degrees[level + 1];
   }
 
   /**

@@ -71,12 +71,11 @@ final class UnitFunction implements NestedExpansion.Source {
   /** Whether an axis moves no input: the variance along it is zero. */
   boolean isStill(int axis) {
     int n = displacement.length;
-    for (int input : inputs) {
-      if (owner.active.factor().data[input * n + axis] != 0) {
-        return false;
-      }
+    boolean still = true;
+    for (int i = 0; still && i < inputs.length; i++) {
+      still = owner.active.factor().data[inputs[i] * n + axis] == 0;
     }
-    return true;
+    return still;
   }
 
   /** The coefficients of degree 1 of z, a row for each axis, from which turns of angles are foretold. */

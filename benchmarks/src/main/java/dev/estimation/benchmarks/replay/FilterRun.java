@@ -18,6 +18,7 @@ final class FilterRun {
   private final MeasurementPorts ports;
   private final Estimate estimate;
   private final Optional<TrackSmoother> smoother;
+  private final RunFollower follower;
   private final Optional<AccuracyTally> accuracy;
   private final InnovationTally innovations = new InnovationTally();
   private final SkippedUpdates skipped = new SkippedUpdates();
@@ -26,18 +27,22 @@ final class FilterRun {
   private long evaluations;
   private long jacobians;
   private long nanos;
+  private boolean belowTolerance;
+  private int stepsBelowTolerance;
 
   FilterRun(
       Scenario scenario,
       FilterWorkspace workspace,
       MeasurementPorts ports,
       Estimate start,
-      Optional<TrackSmoother> smoother) {
+      Optional<TrackSmoother> smoother,
+      RunFollower follower) {
     this.scenario = scenario;
     this.workspace = workspace;
     this.ports = ports;
     this.estimate = start;
     this.smoother = smoother;
+    this.follower = follower;
     this.accuracy = scenario.accuracy();
   }
 
@@ -56,13 +61,17 @@ final class FilterRun {
         history,
         Optional.of(innovations.summary()),
         accuracy.map(AccuracyTally::summary).orElse(Accuracy.NONE),
-        new Effort(evaluations, jacobians, nanos));
+        new Effort(evaluations, jacobians, nanos),
+        stepsBelowTolerance);
   }
 
   private boolean predict(Step step) {
+    follower.predicting(history.size(), step, estimate);
     StepStatus status = workspace.predict(estimate, step.time(), step.sharedControl());
+    follower.predicted(history.size(), step, status, workspace);
     evaluations += workspace.evaluations();
     jacobians += workspace.jacobians();
+    belowTolerance = status == StepStatus.APPLIED_BELOW_TOLERANCE;
     if (!status.isApplied()) {
       failure = workspace.failure();
       return false;
@@ -82,8 +91,11 @@ final class FilterRun {
   /** Updates with a row, or skips it; false if the run cannot go on. */
   private boolean update(Measurement measurement) {
     MeasurementPort port = ports.of(measurement);
+    follower.updating(history.size(), measurement, estimate);
     StepStatus status = port.update(estimate, measurement);
     SensorPort told = port.last();
+    follower.updated(history.size(), measurement, status, told);
+    belowTolerance |= status == StepStatus.APPLIED_BELOW_TOLERANCE;
     evaluations += told.evaluations();
     jacobians += told.jacobians();
     switch (status) {
@@ -105,7 +117,9 @@ final class FilterRun {
     Snapshot snapshot = new Snapshot(history.size(), time, estimate.toGaussian());
     history.add(snapshot);
     accuracy.ifPresent(tally -> tally.add(time, snapshot.estimate()));
-    smoother.ifPresent(follower -> follower.record(workspace, estimate));
+    smoother.ifPresent(behind -> behind.record(workspace, estimate));
+    stepsBelowTolerance += belowTolerance ? 1 : 0;
+    follower.done(snapshot);
   }
 
   private String status() {

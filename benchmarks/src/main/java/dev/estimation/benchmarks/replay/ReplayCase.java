@@ -13,4 +13,13 @@ public interface ReplayCase {
    * @param variant one of {@link #variants()}
    */
   LoadedVariant load(String variant);
+
+  /**
+   * {@return what the components of a variant's state and measurements are, for readers of results}
+   *
+   * @param variant one of {@link #variants()}
+   */
+  default VariableNames names(String variant) {
+    return VariableNames.NONE;
+  }
 }

@@ -40,14 +40,24 @@ public final class Replayer {
 
   /** Runs all steps, up to the first that fails. */
   public RunResult run() {
-    return run(start(), Optional.empty());
+    return run(RunFollower.NONE);
+  }
+
+  /** Runs all steps, up to the first that fails, and tells a follower about them. */
+  public RunResult run(RunFollower follower) {
+    return run(start(), Optional.empty(), follower);
   }
 
   /** Runs all steps, up to the first that fails, and then smooths what was done. */
   public FilteredAndSmoothed runAndSmooth() {
+    return runAndSmooth(RunFollower.NONE);
+  }
+
+  /** Runs and smooths, and tells a follower about the run. */
+  public FilteredAndSmoothed runAndSmooth(RunFollower follower) {
     Estimate start = start();
     TrackSmoother smoother = new TrackSmoother(scenario, start);
-    RunResult filtered = run(start, Optional.of(smoother));
+    RunResult filtered = run(start, Optional.of(smoother), follower);
     return new FilteredAndSmoothed(filtered, smoother.smooth(filtered));
   }
 
@@ -55,7 +65,7 @@ public final class Replayer {
     return plan.start(scenario.startTime(), scenario.start());
   }
 
-  private RunResult run(Estimate start, Optional<TrackSmoother> smoother) {
-    return new FilterRun(scenario, workspace, ports, start, smoother).complete();
+  private RunResult run(Estimate start, Optional<TrackSmoother> smoother, RunFollower follower) {
+    return new FilterRun(scenario, workspace, ports, start, smoother, follower).complete();
   }
 }

@@ -12,13 +12,15 @@ import java.util.Optional;
  * @param innovations what the measurements said; empty for a smoothed run, which has none
  * @param accuracy against truth, over the steps done
  * @param effort what it cost, a failed step included
+ * @param stepsBelowTolerance steps done with a prediction or an update whose moments are not within the tolerance asked for
  */
 public record RunResult(
     String status,
     List<Snapshot> history,
     Optional<Innovations> innovations,
     Accuracy accuracy,
-    Effort effort) {
+    Effort effort,
+    int stepsBelowTolerance) {
   /** The status of a run that came to its end. */
   public static final String OK = "ok";
 

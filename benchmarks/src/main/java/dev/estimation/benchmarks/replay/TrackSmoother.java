@@ -66,6 +66,7 @@ final class TrackSmoother {
         history,
         Optional.empty(),
         accuracy.map(AccuracyTally::summary).orElse(Accuracy.NONE),
-        new Effort(0, 0, nanos));
+        new Effort(0, 0, nanos),
+        0);
   }
 }

@@ -47,7 +47,11 @@ final class CaseOptions {
 
   /** Reads the log, and makes the variants that were asked for. */
   List<LoadedVariant> load() {
-    ReplayCase opened = open();
+    return load(open());
+  }
+
+  /** Makes the variants that were asked for of a case. */
+  List<LoadedVariant> load(ReplayCase opened) {
     List<String> known = opened.variants();
     List<String> names = variants.isEmpty() ? known : variants;
     for (String name : names) {
@@ -59,7 +63,8 @@ final class CaseOptions {
     return new LinkedHashSet<>(names).stream().map(opened::load).toList();
   }
 
-  private ReplayCase open() {
+  /** Reads the log. */
+  ReplayCase open() {
     if (caseClass == null) {
       return new CaseOpener(name(), log, uwb).open();
     }

@@ -6,6 +6,7 @@ import dev.estimation.benchmarks.replay.FilteredAndSmoothed;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.Replayer;
 import dev.estimation.benchmarks.replay.RunResult;
+import dev.estimation.benchmarks.replay.RunTrace;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
@@ -59,38 +60,90 @@ final class Comparison {
   }
 
   private Optional<Replayer> replayer(LoadedVariant variant, Method method) {
-    FilterKind points = wholeState ? method.kind().overWholeState() : method.kind();
-    FilterKind kind = squareRoot ? points.inSquareRootForm() : points;
-    return variant.scenario().map(scenario -> new Replayer(scenario, kind));
+    return variant.scenario().map(scenario -> new Replayer(scenario, kind(method)));
   }
 
-  /** Runs all, one after another, and hands each on as soon as it is done. */
-  void run(Consumer<LabelledRun> consumer) {
+  private FilterKind kind(Method method) {
+    FilterKind points = wholeState ? method.kind().overWholeState() : method.kind();
+    return squareRoot ? points.inSquareRootForm() : points;
+  }
+
+  /** {@return how many runs there will be} */
+  int size() {
+    return variants.size() * methods.size() * (smooth ? 2 : 1);
+  }
+
+  /**
+   * Runs all, one after another, and hands each on as soon as it is done. Of the two passes of a run the first one is
+   * traced and compiles what the second one, which is timed, runs.
+   */
+  void run(Progress progress, Consumer<LabelledRun> consumer) {
     for (LoadedVariant variant : variants) {
       for (Method method : methods) {
-        if (smooth) {
-          runAndSmooth(variant, method, consumer);
+        Optional<Replayer> replayer = replayer(variant, method);
+        if (replayer.isEmpty()) {
+          consumeAbsent(variant, method, consumer);
+        } else if (smooth) {
+          runAndSmooth(variant, method, replayer.get(), progress, consumer);
         } else {
-          Optional<Replayer> replayer = replayer(variant, method);
-          replayer.ifPresent(
-              Replayer::run); // untimed: the first pass compiles what the second runs
-          Optional<RunResult> result = replayer.map(Replayer::run);
-          consumer.accept(labelled(variant, method, false, result));
+          run(variant, method, replayer.get(), progress, consumer);
         }
       }
     }
   }
 
-  private void runAndSmooth(LoadedVariant variant, Method method, Consumer<LabelledRun> consumer) {
-    Optional<Replayer> replayer = replayer(variant, method);
-    replayer.ifPresent(Replayer::runAndSmooth);
-    Optional<FilteredAndSmoothed> both = replayer.map(Replayer::runAndSmooth);
-    consumer.accept(labelled(variant, method, false, both.map(FilteredAndSmoothed::filtered)));
-    consumer.accept(labelled(variant, method, true, both.map(FilteredAndSmoothed::smoothed)));
+  private void consumeAbsent(LoadedVariant variant, Method method, Consumer<LabelledRun> consumer) {
+    consumer.accept(labelled(variant, method, false, Optional.empty(), Optional.empty()));
+    if (smooth) {
+      consumer.accept(labelled(variant, method, true, Optional.empty(), Optional.empty()));
+    }
+  }
+
+  private void run(
+      LoadedVariant variant,
+      Method method,
+      Replayer replayer,
+      Progress progress,
+      Consumer<LabelledRun> consumer) {
+    RunTrace trace = new RunTrace();
+    RunResult result;
+    try (Progress.Bar bar = begin(progress, variant, method)) {
+      replayer.run(new Followers(trace, bar));
+      result = replayer.run(bar);
+    }
+    consumer.accept(labelled(variant, method, false, Optional.of(result), Optional.of(trace)));
+  }
+
+  private void runAndSmooth(
+      LoadedVariant variant,
+      Method method,
+      Replayer replayer,
+      Progress progress,
+      Consumer<LabelledRun> consumer) {
+    RunTrace trace = new RunTrace();
+    FilteredAndSmoothed both;
+    try (Progress.Bar bar = begin(progress, variant, method)) {
+      replayer.runAndSmooth(new Followers(trace, bar));
+      both = replayer.runAndSmooth(bar);
+    }
+    consumer.accept(
+        labelled(variant, method, false, Optional.of(both.filtered()), Optional.of(trace)));
+    consumer.accept(
+        labelled(variant, method, true, Optional.of(both.smoothed()), Optional.empty()));
+  }
+
+  private static Progress.Bar begin(Progress progress, LoadedVariant variant, Method method) {
+    int steps = variant.scenario().orElseThrow().steps().size();
+    return progress.begin(variant.name() + " " + method.typed(), 2 * steps);
   }
 
   private LabelledRun labelled(
-      LoadedVariant variant, Method method, boolean smoothed, Optional<RunResult> result) {
-    return new LabelledRun(variant, method.typed(), wholeState, squareRoot, smoothed, result);
+      LoadedVariant variant,
+      Method method,
+      boolean smoothed,
+      Optional<RunResult> result,
+      Optional<RunTrace> trace) {
+    return new LabelledRun(
+        variant, method.typed(), wholeState, squareRoot, smoothed, kind(method), result, trace);
   }
 }

@@ -1,7 +1,9 @@
 package dev.estimation.benchmarks.study;
 
+import dev.estimation.benchmarks.replay.FilterKind;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.RunResult;
+import dev.estimation.benchmarks.replay.RunTrace;
 import java.util.Optional;
 
 /**
@@ -12,7 +14,9 @@ import java.util.Optional;
  * @param wholeState whether points were drawn over the whole state
  * @param squareRoot whether the filter worked in square-root form
  * @param smoothed whether the track was smoothed
+ * @param kind the kind of filter that ran
  * @param result empty if the log does not have the variant
+ * @param trace what each update told; empty for a smoothed run and where there is no result
  */
 record LabelledRun(
     LoadedVariant variant,
@@ -20,7 +24,9 @@ record LabelledRun(
     boolean wholeState,
     boolean squareRoot,
     boolean smoothed,
-    Optional<RunResult> result) {
+    FilterKind kind,
+    Optional<RunResult> result,
+    Optional<RunTrace> trace) {
   private static final String SQUARE_ROOT = " square-root";
   private static final String SMOOTHED = " smoothed";
 

@@ -1,7 +1,9 @@
 package dev.estimation.benchmarks.study;
 
 import dev.estimation.benchmarks.replay.LoadedVariant;
+import dev.estimation.benchmarks.replay.ReplayCase;
 import java.io.PrintWriter;
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -42,7 +44,7 @@ final class ReplayCommand implements Callable<Integer> {
   @Option(
       names = "--out",
       paramLabel = "FOLDER",
-      description = "for results.json (default results)")
+      description = "for results.json, replay.html and the steps of each run (default results)")
   private String out = "results";
 
   @Spec
@@ -51,19 +53,23 @@ final class ReplayCommand implements Callable<Integer> {
   @Override
   public Integer call() {
     List<Method> chosenMethods = chosenMethods();
-    List<LoadedVariant> loaded = cases.load();
+    ReplayCase replayed = cases.open();
+    List<LoadedVariant> loaded = cases.load(replayed);
     ResultsFolder folder = ResultsFolder.prepare(out);
     Comparison comparison = new Comparison(loaded, chosenMethods, wholeState, squareRoot, smooth);
     PrintWriter console = spec.commandLine().getOut();
     ResultTable table =
         new ResultTable(console, LabelledRun.longestName(chosenMethods, squareRoot));
-    ResultsDocument document = new ResultsDocument(cases.name(), cases.log());
-    comparison.run(run -> {
+    RunOutputs outputs =
+        new RunOutputs(cases.name(), cases.log(), replayed, folder, comparison.size());
+    comparison.run(Progress.onTerminal(), run -> {
       table.print(run);
-      document.add(run);
+      outputs.add(run);
     });
     table.printNotes();
-    console.println("Results: " + folder.write(document.root()));
+    Path page = outputs.writePage();
+    console.println("Results: " + outputs.writeResults() + " and " + outputs.stepsFiles());
+    console.println("Page: " + page);
     console.flush();
     return 0;
   }

@@ -6,6 +6,8 @@ import dev.estimation.benchmarks.replay.RunResult;
 import dev.estimation.benchmarks.replay.Score;
 import dev.estimation.filters.consistency.ChiSquareBounds;
 import java.io.PrintWriter;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 
@@ -19,6 +21,7 @@ final class ResultTable {
   private String title = "";
   private boolean headed;
   private int degreesOfFreedom;
+  private final List<String> remarks = new ArrayList<>();
 
   /**
    * A table.
@@ -33,6 +36,7 @@ final class ResultTable {
   void print(LabelledRun run) {
     String next = run.variant().label() + " (variant " + run.variant().name() + ")";
     if (!next.equals(title)) {
+      printRemarks();
       title = next;
       headed = run.result().map(RunResult::accuracy).flatMap(Accuracy::heading).isPresent();
       printHead();
@@ -40,6 +44,10 @@ final class ResultTable {
     if (run.result().isPresent()) {
       printRow(run.name(), run.result().get());
     }
+    run.result()
+        .filter(result -> result.stepsBelowTolerance() > 0)
+        .ifPresent(result -> remarks.add("  " + run.name() + ": " + result.stepsBelowTolerance()
+            + " of " + result.steps() + " steps below tolerance"));
     if (!run.status().equals(RunResult.OK)) {
       out.println("  " + run.name() + ": " + run.status());
     }
@@ -90,8 +98,15 @@ final class ResultTable {
     out.printf(" %10s %8s %10s %6s %12s %10s %10s%n", cells);
   }
 
+  /** What is to be said under the table of a variant. */
+  private void printRemarks() {
+    remarks.forEach(out::println);
+    remarks.clear();
+  }
+
   /** Prints how to read the columns. */
   void printNotes() {
+    printRemarks();
     out.println();
     if (degreesOfFreedom > 0) {
       ChiSquareBounds bounds = ChiSquareBounds.twoSided(0.95, degreesOfFreedom);

@@ -30,11 +30,17 @@ final class ResultsDocument {
     this.runs = root.putArray("runs");
   }
 
+  /** The document, to which runs may still be added. */
   ObjectNode root() {
     return root;
   }
 
-  void add(LabelledRun run) {
+  /**
+   * Adds a run.
+   *
+   * @param stepsFile the name of the file with its steps; null if there is none
+   */
+  void add(LabelledRun run, String stepsFile) {
     ObjectNode node = runs.addObject();
     node.put("label", run.variant().label());
     node.put("variant", run.variant().name());
@@ -43,12 +49,18 @@ final class ResultsDocument {
     node.put("squareRoot", run.squareRoot());
     node.put("smoothed", run.smoothed());
     node.put("status", run.status());
+    node.put("stepsFile", stepsFile);
     run.result()
         .ifPresentOrElse(result -> fill(node, result), () -> fillAbsent(node, run.smoothed()));
   }
 
   private static void fill(ObjectNode node, RunResult result) {
     node.put("steps", result.steps());
+    if (result.innovations().isPresent()) {
+      node.put("stepsBelowTolerance", result.stepsBelowTolerance());
+    } else {
+      node.putNull("stepsBelowTolerance");
+    }
     node.put("evaluations", result.effort().evaluations());
     node.put("jacobians", result.effort().jacobians());
     putNumber(node, "nanosPerStep", result.nanosPerStep());
@@ -82,6 +94,7 @@ final class ResultsDocument {
 
   private static void fillAbsent(ObjectNode node, boolean smoothed) {
     node.put("steps", 0);
+    node.putNull("stepsBelowTolerance");
     node.putNull("evaluations");
     node.putNull("jacobians");
     node.putNull("nanosPerStep");

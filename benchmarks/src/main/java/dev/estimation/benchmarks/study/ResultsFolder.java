@@ -2,8 +2,10 @@ package dev.estimation.benchmarks.study;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.ObjectMapper;
+import com.fasterxml.jackson.databind.ObjectWriter;
 import dev.estimation.benchmarks.log.BadInputException;
 import java.io.IOException;
+import java.io.Writer;
 import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.Files;
 import java.nio.file.InvalidPathException;
@@ -12,9 +14,12 @@ import java.nio.file.StandardCopyOption;
 
 /** The folder for results. A file appears in it whole or not at all. */
 final class ResultsFolder {
-  private static final String NAME = "results.json";
-
   private final Path folder;
+
+  /** What a file shall hold. */
+  interface Content {
+    void writeTo(Writer out) throws IOException;
+  }
 
   private ResultsFolder(Path folder) {
     this.folder = folder;
@@ -41,19 +46,20 @@ final class ResultsFolder {
     }
   }
 
-  /** Writes {@code results.json}; see the other method. */
-  Path write(JsonNode document) {
-    return write(NAME, document);
+  /** Writes a document; see the other method. */
+  Path write(String name, JsonNode document) {
+    ObjectWriter pretty = new ObjectMapper().writerWithDefaultPrettyPrinter();
+    return write(name, out -> out.write(pretty.writeValueAsString(document) + "\n"));
   }
 
   /** Writes aside, then moves into place over any earlier file. Returns the file. */
-  Path write(String name, JsonNode document) {
+  Path write(String name, Content content) {
     Path file = folder.resolve(name);
     Path aside = folder.resolve(name + "." + ProcessHandle.current().pid() + ".part");
     try {
-      Files.writeString(
-          aside,
-          new ObjectMapper().writerWithDefaultPrettyPrinter().writeValueAsString(document) + "\n");
+      try (Writer out = Files.newBufferedWriter(aside)) {
+        content.writeTo(out);
+      }
       return Files.move(
           aside, file, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
     } catch (IOException refused) {

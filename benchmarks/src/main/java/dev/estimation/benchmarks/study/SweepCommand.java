@@ -53,7 +53,14 @@ final class SweepCommand implements Callable<Integer> {
     LabelledRun run() {
       Replayer replayer = Trial.of(variant.name(), scenario, method);
       return new LabelledRun(
-          variant, method.typed(), false, false, false, Optional.of(replayer.run()));
+          variant,
+          method.typed(),
+          false,
+          false,
+          false,
+          method.kind(),
+          Optional.of(replayer.run()),
+          Optional.empty());
     }
   }
 
@@ -110,7 +117,7 @@ final class SweepCommand implements Callable<Integer> {
     for (int i = 0; i < runs.size(); i++) {
       ScenarioChange change = cells.get(i).change();
       table.print(change, runs.get(i));
-      document.add(runs.get(i));
+      document.add(runs.get(i), null);
       ObjectNode node = (ObjectNode) document.root().get("runs").get(i);
       node.put("noiseScale", change.noiseScale());
       node.put("extraLag", change.lag());

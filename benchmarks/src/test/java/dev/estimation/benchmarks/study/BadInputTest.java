@@ -109,8 +109,27 @@ class BadInputTest {
   void leavesNothingHalfWritten() throws IOException {
     Files.createDirectories(out.resolve("results.json").resolve("in the way"));
     assertRefused(replay("uwb", uwb, "--method", "linear"), "results.json");
+    assertNothingAside();
+  }
+
+  @Test
+  void leavesNoPageHalfWritten() throws IOException {
+    Files.createDirectories(out.resolve("replay.html").resolve("in the way"));
+    assertRefused(replay("uwb", uwb, "--method", "linear"), "replay.html");
+    assertNothingAside();
+  }
+
+  @Test
+  void leavesNoStepsHalfWritten() throws IOException {
+    Files.createDirectories(out.resolve("steps-yard-linear.csv").resolve("in the way"));
+    assertRefused(replay("uwb", uwb, "--method", "linear"), "steps-yard-linear.csv");
+    assertNothingAside();
+  }
+
+  private void assertNothingAside() throws IOException {
     try (var entries = Files.list(out)) {
-      assertEquals(1, entries.count());
+      assertEquals(
+          0, entries.filter(entry -> entry.toString().endsWith(".part")).count());
     }
   }
 

@@ -22,7 +22,9 @@ class ReplayCommandTest {
       "squareRoot",
       "smoothed",
       "status",
+      "stepsFile",
       "steps",
+      "stepsBelowTolerance",
       "evaluations",
       "jacobians",
       "nanosPerStep",
@@ -145,7 +147,9 @@ class ReplayCommandTest {
     assertEquals(0, StudyRun.of("replay", "--out", out, "--method", "linear").code());
     assertEquals(1, StudyRun.results(out).get("runs").size());
     try (var entries = Files.list(out)) {
-      assertEquals(1, entries.count());
+      assertEquals(
+          List.of("replay.html", "results.json", "steps-demo-linear.csv"),
+          entries.map(entry -> entry.getFileName().toString()).sorted().toList());
     }
   }
 

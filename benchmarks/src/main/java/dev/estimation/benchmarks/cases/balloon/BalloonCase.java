@@ -2,6 +2,7 @@ package dev.estimation.benchmarks.cases.balloon;
 
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.ReplayCase;
+import dev.estimation.benchmarks.replay.VariableNames;
 import java.util.List;
 
 /**
@@ -42,5 +43,20 @@ public final class BalloonCase implements ReplayCase {
       throw new IllegalArgumentException("variant must be " + FLIGHT + ", got " + variant);
     }
     return LoadedVariant.of(FLIGHT, "demo", new BalloonFlight(SEED).fly());
+  }
+
+  @Override
+  public VariableNames names(String variant) {
+    return VariableNames.ofState(
+            "east [m]",
+            "north [m]",
+            "up [m]",
+            "east velocity [m/s]",
+            "north velocity [m/s]",
+            "up velocity [m/s]")
+        .withMeasurement("range [m]", "azimuth [rad]", "elevation [rad]")
+        .withPlane(0, 1)
+        .withPlane(0, 2)
+        .withPlane(1, 2);
   }
 }

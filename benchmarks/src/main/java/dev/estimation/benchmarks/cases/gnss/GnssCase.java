@@ -5,6 +5,7 @@ import dev.estimation.benchmarks.replay.ConstantTruth;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
+import dev.estimation.benchmarks.replay.VariableNames;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.motion.MotionBlocks;
@@ -63,6 +64,15 @@ public final class GnssCase implements ReplayCase {
         .map(place -> LoadedVariant.of(FAR, logName, scenario(place)))
         .orElseGet(() -> LoadedVariant.absent(
             FAR, logName, "no start: truth.csv does not tell where the receiver is"));
+  }
+
+  @Override
+  public VariableNames names(String variant) {
+    return VariableNames.ofState("x [m]", "y [m]", "z [m]", "clock [m]", "clock drift [m/s]")
+        .withMeasurement("pseudorange [m]")
+        .withPlane(0, 1)
+        .withPlane(0, 2)
+        .withPlane(1, 2);
   }
 
   private Scenario scenario(double[] place) {

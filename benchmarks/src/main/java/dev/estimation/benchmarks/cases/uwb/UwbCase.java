@@ -4,6 +4,7 @@ import dev.estimation.benchmarks.log.LogFolder;
 import dev.estimation.benchmarks.replay.LoadedVariant;
 import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
+import dev.estimation.benchmarks.replay.VariableNames;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.motion.ConstantVelocity;
 import dev.estimation.filters.sensor.Components;
@@ -52,6 +53,13 @@ public final class UwbCase implements ReplayCase {
         throw new IllegalArgumentException(
             "variant must be one of " + VARIANTS + ", got " + variant);
     };
+  }
+
+  @Override
+  public VariableNames names(String variant) {
+    return VariableNames.ofState("x [m]", "y [m]", "x velocity [m/s]", "y velocity [m/s]")
+        .withMeasurement("range [m]")
+        .withPlane(0, 1);
   }
 
   private LoadedVariant start(

@@ -6,6 +6,7 @@ import dev.estimation.benchmarks.replay.Measurement;
 import dev.estimation.benchmarks.replay.ReplayCase;
 import dev.estimation.benchmarks.replay.Scenario;
 import dev.estimation.benchmarks.replay.Step;
+import dev.estimation.benchmarks.replay.VariableNames;
 import dev.estimation.core.gaussian.Gaussian;
 import dev.estimation.filters.model.MotionModel;
 import dev.estimation.filters.motion.ConstantVelocity;
@@ -63,6 +64,20 @@ public final class VesselCase implements ReplayCase {
           variant, label, "target " + target + " has no radar detection in this log");
     }
     return LoadedVariant.of(variant, label, scenario(plots, variant.endsWith("ct"), target));
+  }
+
+  @Override
+  public VariableNames names(String variant) {
+    VariableNames state = variant.endsWith("ct")
+        ? VariableNames.ofState(
+            "north [m]",
+            "east [m]",
+            "north velocity [m/s]",
+            "east velocity [m/s]",
+            "turn rate [rad/s]")
+        : VariableNames.ofState(
+            "north [m]", "east [m]", "north velocity [m/s]", "east velocity [m/s]");
+    return state.withMeasurement("range [m]", "bearing [rad]").withPlane(1, 0);
   }
 
   private Scenario scenario(List<RadarPlot> plots, boolean turning, long target) {

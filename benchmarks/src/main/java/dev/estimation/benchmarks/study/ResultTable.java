@@ -61,12 +61,12 @@ final class ResultTable {
     if (headed) {
       out.printf(" %10s %11s", "heading", "error (rad)");
     }
-    end("NEES", "inside", "NIS per", "gated", "", "", "time per");
+    end("NEES", "inside", "NIS per", "gated", "evaluations", "Jacobians", "time per");
     begin("method", "rmse", "max");
     if (headed) {
       out.printf(" %10s %11s", "rmse", "max");
     }
-    end("mean", "95 %", "degree", "rows", "evaluations", "Jacobians", "step (us)");
+    end("mean", "95 %", "degree", "rows", "a step", "a step", "step (us)");
   }
 
   private void printRow(String name, RunResult result) {
@@ -85,8 +85,8 @@ final class ResultTable {
         percent(accuracy.insideFraction()),
         number(innovations.map(Innovations::meanPerDegree).orElse(Double.NaN)),
         innovations.map(said -> "" + said.rejectedRows().size()).orElse("-"),
-        result.effort().evaluations(),
-        result.effort().jacobians(),
+        number((double) result.effort().evaluations() / result.steps()),
+        number((double) result.effort().jacobians() / result.steps()),
         number(result.nanosPerStep() / 1000));
   }
 

@@ -114,7 +114,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
       if (values.isStill(axis)) {
         expansion.set().close(0, axis);
       } else if (expansion.add(0, axis) < 0) {
-        return MatchingStatus.FUNCTION_NOT_FINITE;
+        return values.slopes().fault();
       } else {
         moving++;
       }

@@ -64,6 +64,11 @@ abstract class BaseWorkspace implements MatchingWorkspace {
     return status;
   }
 
+  /** Whether the last call gave moments. */
+  final boolean hasResult() {
+    return status.hasResult();
+  }
+
   private MatchingStatus carryChecked(
       Moments input, double[] given, Covariance additiveNoise, Use use) {
     double[] mean = input.mean();

@@ -5,8 +5,9 @@ import java.util.Arrays;
 
 /**
  * Lengths in standard deviations of a covariance that may be singular: a vector that leaves its range is of infinite
- * length, beyond rounding. Each component is brought to a deviation of 1 first. <i>Confined to one thread</i>; allocates
- * only when built.
+ * length, beyond rounding. Each component is brought to a deviation of 1 first; a direction of which less than a millionth
+ * of that is left counts as none, and parts below 1e-5 in it are not seen. Lengths are NaN if the sum overflows. <i>Confined
+ * to one thread</i>; allocates only when built.
  */
 final class ErrorScale {
   private static final double LEAST_PIVOT = 1e-12;
@@ -56,7 +57,8 @@ final class ErrorScale {
   void factor() {
     for (int i = 0; i < rows; i++) {
       double deviation = Math.sqrt(covariance[i * rows + i]);
-      inverseDeviations[i] = deviation > 0 ? 1 / deviation : 1;
+      double inverse = deviation > 0 ? 1 / deviation : 1;
+      inverseDeviations[i] = Double.isFinite(deviation) ? inverse : Double.NaN;
     }
     for (int j = 0; j < rows; j++) {
       for (int i = j; i < rows; i++) {

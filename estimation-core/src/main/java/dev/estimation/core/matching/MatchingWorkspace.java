@@ -92,7 +92,8 @@ public interface MatchingWorkspace {
    * The estimated error of the last call's moments where they are used, the largest of mean, covariance and cross-covariance
    * in the sense of {@code MatchingError} in {@code core.accuracy}.
    *
-   * @return the estimate, infinite if there is nothing to go by; NaN from all matchings but {@link ToleranceMatching}
+   * @return the estimate, infinite if there is no result or nothing to go by; NaN from all matchings but {@link
+   *     ToleranceMatching}
    */
   default double estimatedError() {
     return Double.NaN;

@@ -30,6 +30,7 @@ final class ProbePairs {
   private final double[] even;
   private final double[] odd;
   private int singleAxis;
+  private double singleReach;
   private int size;
   private int tried;
 
@@ -63,21 +64,21 @@ final class ProbePairs {
     return tried < MOST;
   }
 
-  /** Evaluates a further pair; one with a value that is not finite is left out. */
-  void add() {
+  /** Evaluates a further pair; false if a value is not finite: it is left out. */
+  boolean add() {
     int plus = 2 * size * width;
     aim(tried++);
     if (!source.fill(unit, values, plus)) {
-      return;
+      return false;
     }
     for (int axis = 0; axis < axes; axis++) {
       int start = (size * axes + axis) * stride;
       NestedProjection.fillPolynomials(unit[axis], polynomials, start, stride);
       unit[axis] = -unit[axis];
     }
-    if (source.fill(unit, values, plus + width)) {
-      size++;
-    }
+    boolean finite = source.fill(unit, values, plus + width);
+    size += finite ? 1 : 0;
+    return finite;
   }
 
   private void aim(int pair) {
@@ -87,7 +88,8 @@ final class ProbePairs {
       unit[axis] = Integer.bitCount(axis & pair) % 2 == 0 ? reach : -reach;
     }
     if (singleAxis >= 0) {
-      unit[singleAxis] = farNode() * (1 + pair * SHIFT);
+      singleReach = farNode() * (1 + pair * SHIFT);
+      unit[singleAxis] = singleReach;
     }
   }
 
@@ -97,7 +99,7 @@ final class ProbePairs {
 
   /** Fills a block with what is known already at a point of a single axis; false if nothing is. */
   boolean fillKnown(double[] point, double[] block, int start) {
-    if (singleAxis < 0 || size == 0 || Math.abs(point[singleAxis]) != farNode()) {
+    if (singleAxis < 0 || size == 0 || Math.abs(point[singleAxis]) != singleReach) {
       return false;
     }
     int from = point[singleAxis] > 0 ? 0 : width;
@@ -112,7 +114,7 @@ final class ProbePairs {
     for (int pair = 0; pair < size; pair++) {
       int first = pair * axes * stride;
       expansion.addAt(polynomials, first, stride, even, odd, pair * width);
-      double x = farNode();
+      double x = singleReach;
       double cubic = x * (x * x - 3) / Math.sqrt(6);
       double quartic = x * x * (x * x - 3) / Math.sqrt(24);
       boolean scaled = singleAxis >= 0 && pair == 0;

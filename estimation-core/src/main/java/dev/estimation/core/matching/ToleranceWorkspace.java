@@ -67,7 +67,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
 
   @Override
   MatchingStatus match(double[] mean, double[] given, Use use, double[] outputMean) {
-    error = 0;
+    error = Double.POSITIVE_INFINITY;
     reason = "";
     if (noise() != null && !SymmetricMatrix.allFinite(noise().matrix())) {
       return faultOf(noise(), MatchingStatus.NOISE_NOT_FINITE);
@@ -78,7 +78,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
     if (!expansion.begin()) {
       return values.slopes().fault();
     }
-    MatchingStatus status = axes == 0 ? MatchingStatus.MATCHED : start(mean, given, use);
+    MatchingStatus status = axes == 0 ? withoutError() : start(mean, given, use);
     if (!status.hasResult()) {
       return status;
     }
@@ -120,7 +120,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
       }
     }
     if (moving == 0) {
-      return MatchingStatus.MATCHED;
+      return withoutError();
     }
     double[] linear = values.changeLinear();
     for (int i = 0; i < linear.length; i++) {
@@ -128,6 +128,11 @@ final class ToleranceWorkspace extends BaseWorkspace {
     }
     probes.add();
     return refine(use, moving > AXES_WITHOUT_FRESH_PROBE);
+  }
+
+  private MatchingStatus withoutError() {
+    error = 0;
+    return MatchingStatus.MATCHED;
   }
 
   private void compareSlopes(double[] mean, double[] given) {
@@ -145,7 +150,8 @@ final class ToleranceWorkspace extends BaseWorkspace {
     while (!values.turned()) {
       error = estimateError(use);
       if (Double.isNaN(error)) {
-        return below("the estimated error is NaN");
+        error = Double.POSITIVE_INFINITY;
+        return below("the estimate overflows");
       }
       boolean passes = error <= tolerance;
       if (passes && (fresh || !freshProbes || !probes.hasNext())) {
@@ -154,15 +160,14 @@ final class ToleranceWorkspace extends BaseWorkspace {
       int rest = (budget - evaluations()) / costOfNode;
       if (passes || (probes.size() == 0 && probes.hasNext())) {
         if (rest < 2) {
-          return below("the budget has ended");
+          return below("the budget has no room for a further pair of probes");
         }
-        probes.add();
-        fresh = true;
+        fresh = probes.add();
       } else if (refinement.choose(rest)) {
         expansion.add(refinement.member(), refinement.axis());
         fresh = false;
       } else {
-        return below("the budget has room for no further term");
+        return below("there is no further term with finite values that the budget has room for");
       }
     }
     error = estimateError(use);
@@ -206,7 +211,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
 
   @Override
   public double estimatedError() {
-    return error;
+    return hasResult() ? error : Double.POSITIVE_INFINITY;
   }
 
   @Override
@@ -216,7 +221,8 @@ final class ToleranceWorkspace extends BaseWorkspace {
 
   @Override
   String toleranceFailure() {
-    return "estimated error " + error + " is above the tolerance of " + tolerance + " after "
+    String where = error <= tolerance ? ", not confirmed, is within" : " is above";
+    return "estimated error " + error + where + " the tolerance of " + tolerance + " after "
         + evaluations() + " of at most " + budget + " evaluations: " + reason;
   }
 }

@@ -9,6 +9,7 @@ import java.util.Arrays;
  */
 final class UnitFunction implements NestedExpansion.Source {
   private static final double TURN_ROUNDING = 1e-9;
+  private static final double CENTRE_ROUNDING = 4 * 0x1p-52;
 
   private final BaseWorkspace owner;
   private final LinearSlopes slopes;
@@ -89,7 +90,7 @@ final class UnitFunction implements NestedExpansion.Source {
     return turned;
   }
 
-  /** The largest deviation of a component so far. */
+  /** The largest deviation of a component so far, or slope. */
   double largest(int component) {
     return largest[component];
   }
@@ -114,9 +115,15 @@ final class UnitFunction implements NestedExpansion.Source {
     owner.outputSpace.difference(output, owner.centre, deviation);
     for (int c = 0; c < deviation.length; c++) {
       values[start + c * columns] = deviation[c];
-      largest[c] = Math.max(largest[c], Math.abs(deviation[c]));
     }
-    return columns == 1 || slopes.fill(start + 1, point, given, output, values, columns);
+    if (columns > 1 && !slopes.fill(start + 1, point, given, output, values, columns)) {
+      return false;
+    }
+    for (int at = 0; at < deviation.length * columns; at++) {
+      int c = at / columns;
+      largest[c] = Math.max(largest[c], Math.abs(values[start + at]));
+    }
+    return true;
   }
 
   /** Whether the linear part of a deviation is more than the space of the output can tell from less. */
@@ -129,13 +136,22 @@ final class UnitFunction implements NestedExpansion.Source {
     }
     owner.outputSpace.displace(owner.centre, expected, image);
     owner.outputSpace.difference(image, owner.centre, deviation);
+    double rounding = TURN_ROUNDING + CENTRE_ROUNDING * centreSize();
     for (int c = 0; c < deviation.length; c++) {
-      double scale = 1 + Math.abs(expected[c]);
-      if (!(Math.abs(deviation[c] - expected[c]) <= TURN_ROUNDING * scale)) {
+      double allowed = rounding + TURN_ROUNDING * Math.abs(expected[c]);
+      if (!(Math.abs(deviation[c] - expected[c]) <= allowed)) {
         return true;
       }
     }
     return false;
+  }
+
+  private double centreSize() {
+    double size = 0;
+    for (double value : owner.centre) {
+      size = Math.max(size, Math.abs(value));
+    }
+    return size;
   }
 
   /** Places the point; false if it is the mean. */

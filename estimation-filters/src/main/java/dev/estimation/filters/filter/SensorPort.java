@@ -35,6 +35,7 @@ public final class SensorPort {
   private final InputCheck input = new InputCheck();
   private StepStatus status = StepStatus.APPLIED;
   private double estimatedError = Double.NaN;
+  private boolean belowTolerance;
   private boolean interrupted;
   private double estimateTime;
   private int evaluations;
@@ -131,6 +132,7 @@ public final class SensorPort {
     evaluations = matching.evaluations();
     jacobians = matching.jacobians();
     estimatedError = matching.estimatedError();
+    belowTolerance = matched == MatchingStatus.BELOW_TOLERANCE;
     StepStatus judged = plan.judge(StepStatus.of(matched));
     if (!judged.isApplied()) {
       return judged;
@@ -224,14 +226,19 @@ public final class SensorPort {
     };
   }
 
+  /** Whether the matching gave moments: what was wrong is then not what it says of their accuracy. */
+  private boolean hasMoments() {
+    return belowTolerance || matching.failure().isEmpty();
+  }
+
   private String notFinite() {
-    return matching.failure().isEmpty()
+    return hasMoments()
         ? "updated mean or covariance is not finite: the innovation overflows"
         : matching.failure();
   }
 
   private String indefinite() {
-    if (!matching.failure().isEmpty()) {
+    if (!hasMoments()) {
       return matching.failure();
     }
     if (Double.isNaN(innovation.squared())) {

@@ -45,7 +45,7 @@ public final class StackedPort {
   /**
    * Updates an estimate with several rows of its own time.
    *
-   * @param estimate updated if the status is {@code APPLIED}
+   * @param estimate updated if the status {@code isApplied()}
    * @param rows how many, from 1 to the maximum
    * @param rowMeasurements row after row, at least {@code rows} of them; read
    * @param rowGivens what is given with each, row after row, at least {@code rows} of them; read

@@ -48,6 +48,16 @@ class ToleranceFilterTest extends BothForms {
     assertTrue(estimate.mean(0) != 0.5, "the estimate has changed");
   }
 
+  /** What is said is why the step was not applied, not that its moments were below the tolerance too. */
+  @Test
+  void aMeasurementThatOverflowsIsTold() {
+    FilterPlan plan = walking(ToleranceMatching.within(1e-3).withBudget(60));
+    SensorPort port = plan.workspace().port(range(0.1));
+    StepStatus status = port.update(atTheOrigin(plan), new double[] {1e300}, STATION);
+    assertEquals(StepStatus.RESULT_NOT_FINITE, status);
+    assertTrue(port.failure().contains("overflows"), port.failure());
+  }
+
   @Test
   void aPlanMayRefuseSuchSteps() {
     FilterPlan plan =

@@ -88,7 +88,7 @@ final class ProbePairs {
       unit[axis] = Integer.bitCount(axis & pair) % 2 == 0 ? reach : -reach;
     }
     if (singleAxis >= 0) {
-      singleReach = farNode() * (1 + pair * SHIFT);
+      singleReach = farNode() / (1 + pair * SHIFT);
       unit[singleAxis] = singleReach;
     }
   }

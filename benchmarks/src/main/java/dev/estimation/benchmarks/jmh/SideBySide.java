@@ -104,7 +104,7 @@ public final class SideBySide {
   private static void print(List<Row> rows, double nativeTime) {
     System.out.printf(
         Locale.ROOT,
-        "%n%-12s %-24s %9s %7s %9s %12s %10s%n",
+        "%n%-12s %-32s %9s %7s %9s %12s %10s%n",
         "JVM",
         "step",
         "ns",
@@ -112,11 +112,11 @@ public final class SideBySide {
         "B/step",
         "of native",
         "of plain");
-    System.out.printf(Locale.ROOT, "%-12s %-24s %9.1f%n", "-", "native", nativeTime);
+    System.out.printf(Locale.ROOT, "%-12s %-32s %9.1f%n", "-", "native", nativeTime);
     for (Row row : rows) {
       System.out.printf(
           Locale.ROOT,
-          "%-12s %-24s %9.1f %7.1f %9.3f %12.3f %10.3f%n",
+          "%-12s %-32s %9.1f %7.1f %9.3f %12.3f %10.3f%n",
           row.jvm,
           row.name,
           row.time,
@@ -141,10 +141,13 @@ public final class SideBySide {
       Result<?> primary = run.getPrimaryResult();
       String benchmark = run.getParams().getBenchmark();
       String method = run.getParams().getParam("method");
+      String form = run.getParams().getParam("form");
       String name = benchmark.substring(benchmark.lastIndexOf('.') + 1);
       return new Row(
           run.getParams().getJdkVersion(),
-          method == null ? name : name + " " + method,
+          method == null
+              ? name
+              : name + " " + method + (form.equals("square-root") ? " " + form : ""),
           primary.getScore(),
           primary.getScoreError(),
           run.getSecondaryResults().get("gc.alloc.rate.norm").getScore());

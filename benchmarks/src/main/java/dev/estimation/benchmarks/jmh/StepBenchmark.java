@@ -1,11 +1,5 @@
 package dev.estimation.benchmarks.jmh;
 
-import dev.estimation.core.matching.Linearisation;
-import dev.estimation.core.matching.MomentMatching;
-import dev.estimation.core.matching.PointMatching;
-import dev.estimation.core.points.CubatureRule;
-import dev.estimation.core.points.GaussHermiteRule;
-import dev.estimation.core.points.UnscentedRule;
 import dev.estimation.filters.filter.Estimate;
 import dev.estimation.filters.filter.FilterPlan;
 import dev.estimation.filters.filter.FilterWorkspace;
@@ -34,6 +28,8 @@ import org.openjdk.jmh.annotations.State;
 public class StepBenchmark {
   static final int STEPS = 20_000;
 
+  static final int SAMPLED_STEPS = 100;
+
   /** The measurements that every benchmark follows. */
   @State(Scope.Thread)
   public static class Track {
@@ -45,16 +41,12 @@ public class StepBenchmark {
   @State(Scope.Thread)
   public static class Filter {
     /** The method; {@code whole} marks points over the whole state, as in the textbook. */
-    @Param({
-      "linear",
-      "unscented",
-      "unscented-square-root",
-      "unscented-whole",
-      "cubature",
-      "hermite3",
-      "hermite3-whole"
-    })
+    @Param({"linear", "unscented", "unscented-whole", "cubature", "hermite3", "hermite3-whole"})
     String method = "linear";
+
+    /** What is carried from step to step. */
+    @Param({"covariance", "square-root"})
+    String form = "covariance";
 
     private FilterPlan plan;
     private FilterWorkspace workspace;
@@ -63,29 +55,14 @@ public class StepBenchmark {
     /** Makes plan and workspaces. */
     @Setup
     public void make() {
-      FilterPlan inCovarianceForm = FilterPlan.of(TurnProblem.motion(), matching());
-      plan =
-          method.endsWith("square-root") ? inCovarianceForm.inSquareRootForm() : inCovarianceForm;
+      plan = StepMethod.plan(method, form);
       workspace = plan.workspace();
       port = workspace.port(TurnProblem.sensor());
     }
 
-    private MomentMatching matching() {
-      MomentMatching unscented = PointMatching.of(UnscentedRule.scaled(1, 2, 0));
-      return switch (method) {
-        case "linear" -> Linearisation.firstOrder();
-        case "unscented", "unscented-square-root" -> unscented;
-        case "unscented-whole" -> unscented.overWholeInput();
-        case "cubature" -> PointMatching.of(CubatureRule.degreeThree());
-        case "hermite3" -> PointMatching.of(GaussHermiteRule.product(3));
-        case "hermite3-whole" -> PointMatching.of(GaussHermiteRule.product(3)).overWholeInput();
-        default -> throw new IllegalArgumentException("no method " + method);
-      };
-    }
-
-    Estimate follow(Track track) {
+    Estimate follow(Track track, int steps) {
       Estimate estimate = plan.start(0, TurnProblem.start());
-      for (int k = 0; k < STEPS; k++) {
+      for (int k = 0; k < steps; k++) {
         StepStatus predicted = workspace.predict(estimate, k + 1.0);
         StepStatus updated = port.update(estimate, track.measurements[k]);
         if (predicted != StepStatus.APPLIED || updated != StepStatus.APPLIED) {
@@ -99,7 +76,14 @@ public class StepBenchmark {
   /** The library. */
   @Benchmark
   public double step(Filter filter, Track track) {
-    return filter.follow(track).mean(0);
+    return filter.follow(track, STEPS).mean(0);
+  }
+
+  /** The library with 10 000 draws over the whole state, fewer steps. */
+  @Benchmark
+  @OperationsPerInvocation(SAMPLED_STEPS)
+  public double monteCarlo(Draws draws, Track track) {
+    return draws.filter.follow(track, SAMPLED_STEPS).mean(0);
   }
 
   /** The same step written plainly with a matrix library. */
@@ -121,6 +105,19 @@ public class StepBenchmark {
       }
     }
     return sum;
+  }
+
+  /** The filter by random draws. */
+  @State(Scope.Thread)
+  public static class Draws {
+    final Filter filter = new Filter();
+
+    /** Draws, and makes plan and workspaces. */
+    @Setup
+    public void make() {
+      filter.method = "random10000-whole";
+      filter.make();
+    }
   }
 
   /** The step in matrix operations. */

@@ -89,7 +89,7 @@ final class WeighCommand implements Callable<Integer> {
     variants.forEach(variant -> scales.forEach(scale -> jobs.add(job(variant, scale, tracking))));
     if (jobs.stream().allMatch(job -> job.weighing == null || job.weighing.points() == 0)) {
       throw new BadInputException(
-          "no operating point is left: " + cases.name() + " has none" + " in the steps asked for");
+          "no operating point is left: " + cases.name() + " has none in the steps asked for");
     }
     ResultsFolder folder = ResultsFolder.prepare(out);
     PrintWriter console = spec.commandLine().getOut();

@@ -67,7 +67,7 @@ final class Examiner {
       CarriedMoments truth,
       double uncertainty) {
     MatchingStatus status = work.carry(moments, point.given(), noise, use);
-    boolean matched = status == MatchingStatus.MATCHED || status == MatchingStatus.BELOW_TOLERANCE;
+    boolean matched = status.hasResult();
     double error = matched
         ? MatchingError.of(truth, CarriedMoments.of(work, moments), use).largest() + uncertainty
         : Double.POSITIVE_INFINITY;

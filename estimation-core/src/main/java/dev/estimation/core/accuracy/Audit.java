@@ -25,7 +25,8 @@ import java.util.Map;
  *     .run(points);
  * }</pre>
  *
- * <p>A matching that fails at a point has infinite errors there, and its failure is told. Cost: for each point a
+ * <p>A matching that fails at a point has infinite errors there, and its failure is told; moments that
+ * a matching knows to be below its tolerance are measured like any. Cost: for each point a
  * search, and one call of each matching; see {@link ReferenceSearch} for what a search takes. <i>Immutable</i>:
  * methods give a new audit; a run keeps its scratch to itself, so one audit serves many threads if the
  * function does.
@@ -156,7 +157,7 @@ public final class Audit {
       MatchingStatus status = work.carry(input, given, noise, use);
       evaluations += work.evaluations();
       jacobians += work.jacobians();
-      if (status == MatchingStatus.MATCHED) {
+      if (status.hasResult()) {
         errors.add(MatchingError.of(truth, CarriedMoments.of(work, input), use));
         return;
       }

@@ -71,7 +71,7 @@ final class ErrorEstimate {
     double odd = Math.max(largest(probes.odd()), cubics());
     double first = Math.hypot(evenShare() * even, odd);
     double second = even * even + odd * odd + aliasShare() * Math.sqrt(norms.bent()) * even;
-    return CAUTION * Math.max(Math.max(first, second), pairs()) + TAIL * tails();
+    return CAUTION * Math.max(Math.max(first, second), pairs()) + tails();
   }
 
   private double largest(double[] missed) {
@@ -88,6 +88,15 @@ final class ErrorEstimate {
       sum += norms.square(slopes, axis * width);
     }
     return Math.sqrt(sum / SLOPE_OF_CUBIC);
+  }
+
+  /** How many axes bend by more than the least share. */
+  int bendingAxes() {
+    int count = 0;
+    for (int axis = 0; axis < axes; axis++) {
+      count += norms.bend(axis) > LEAST_EVEN_SHARE ? 1 : 0;
+    }
+    return count;
   }
 
   private double evenShare() {
@@ -118,17 +127,25 @@ final class ErrorEstimate {
     return sum;
   }
 
-  /** The last terms along axes from the second level on. */
+  /**
+   * What follows the last terms along axes from the second level on: in covariances their squares, in means what nodes
+   * take for the mean of degrees twice as high, where the series does not converge.
+   */
   private double tails() {
     LevelSet set = expansion.set();
     double sum = 0;
+    double taken = 0;
     for (int member = 1; member < set.size(); member++) {
       for (int axis = 0; axis < axes; axis++) {
         if (set.level(member, axis) >= 2 && set.above(member, axis) < 0) {
-          sum += norms.edge(member, axis);
+          double edge = norms.edge(member, axis);
+          sum += edge;
+          int pairsOfDegrees = (expansion.projection().degree(set.level(member, axis)) + 1) / 2;
+          double left = Math.min(1, Math.pow(norms.decay(member, axis), pairsOfDegrees));
+          taken += edge * left * left;
         }
       }
     }
-    return sum;
+    return TAIL * sum + Math.sqrt(taken);
   }
 }

@@ -141,18 +141,36 @@ final class ExpansionNorms {
     return sum;
   }
 
+  /**
+   * How much longer the two highest degrees on an axis, from the second level on, are than the two before them: below 1
+   * where the series converges.
+   */
+  double decay(int member, int axis) {
+    int count = expansion.degreesAdded(set.level(member, axis));
+    double last = ofDegrees(member, axis, count - 2, count);
+    double before = ofDegrees(member, axis, count - 4, count - 2);
+    return last == 0 ? 0 : Math.sqrt(last / before);
+  }
+
   /** The squares of those of its terms that are of the two highest degrees on an axis, of level 1 the highest. */
   double edge(int member, int axis) {
+    int count = expansion.degreesAdded(set.level(member, axis));
+    int top = set.level(member, axis) == 1 ? 1 : 2;
+    return ofDegrees(member, axis, count - top, count);
+  }
+
+  /** The squares of the terms whose degrees on an axis are some of those that a member brings. */
+  private double ofDegrees(int member, int axis, int from, int to) {
     int inner = 1;
     for (int other = axis + 1; other < axes; other++) {
       inner *= expansion.degreesAdded(set.level(member, other));
     }
     int count = expansion.degreesAdded(set.level(member, axis));
-    int top = set.level(member, axis) == 1 ? 1 : 2;
     double sum = 0;
     int first = set.firstCoefficient(member);
     for (int i = 0; i < set.coefficients(member); i++) {
-      sum += i / inner % count >= count - top ? squares[first + i] : 0;
+      int degree = i / inner % count;
+      sum += from <= degree && degree < to ? squares[first + i] : 0;
     }
     return sum;
   }

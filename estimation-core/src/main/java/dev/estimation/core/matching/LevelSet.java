@@ -19,6 +19,7 @@ final class LevelSet {
   private final int[] firstNode;
   private final int[] firstCoefficient;
   private int size;
+  private boolean deep;
 
   /** A set of so many nodes at most. */
   LevelSet(NestedProjection projection, int axes, int mostNodes) {
@@ -35,6 +36,7 @@ final class LevelSet {
   /** Begins anew, with the one member of level 0 on all axes. */
   void begin() {
     size = 1;
+    deep = false;
     Arrays.fill(levels, 0, axes, (byte) 0);
     Arrays.fill(below, 0, axes, NONE);
     Arrays.fill(above, 0, axes, NONE);
@@ -44,6 +46,21 @@ final class LevelSet {
 
   int size() {
     return size;
+  }
+
+  /** Whether a member has been added with levels on several axes that sum to 3 or more. */
+  boolean isDeep() {
+    return deep;
+  }
+
+  private boolean isDeep(int member) {
+    int sum = 0;
+    int highest = 0;
+    for (int axis = 0; axis < axes; axis++) {
+      sum += level(member, axis);
+      highest = Math.max(highest, level(member, axis));
+    }
+    return sum >= 3 && sum > highest;
   }
 
   int level(int member, int axis) {
@@ -117,6 +134,7 @@ final class LevelSet {
     int start = added * axes;
     System.arraycopy(levels, member * axes, levels, start, axes);
     levels[start + axis]++;
+    deep |= isDeep(added);
     Arrays.fill(above, start, start + axes, NONE);
     int coefficients = 1;
     for (int other = 0; other < axes; other++) {

@@ -29,9 +29,9 @@ public enum MatchingStatus {
   /** The output has no factor: negative weights left nothing to take a root of. Square-root form only. */
   OUTPUT_NOT_DEFINITE,
   /**
-   * The moments are there, but their estimated error is above the tolerance, or could not be confirmed: the budget of evaluations has ended, an angle
-   * would pass half a turn, or values further out are not finite. {@link MatchingWorkspace#estimatedError()} tells the
-   * error. Only {@link ToleranceMatching} ends so.
+   * The moments are there, but their estimated error is above the tolerance, or could not be confirmed: the budget of
+   * evaluations has ended, an angle would pass half a turn, or values further out are not finite. {@link
+   * MatchingWorkspace#estimatedError()} tells the error. Only {@link ToleranceMatching} ends so.
    */
   BELOW_TOLERANCE;
 

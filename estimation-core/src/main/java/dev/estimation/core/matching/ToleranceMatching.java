@@ -31,14 +31,15 @@ import dev.estimation.core.space.Space;
  * fresh pair of probes before it passes.
  *
  * <p><b>What it cannot see.</b> Features between its points; a misfit that vanishes at the probes by chance. On random
- * problems of sixteen kinds, without derivatives or linear inputs, at tolerances of 0.1, 0.01 and 0.001 the true error was inside the tolerance in 99 % of cases or
- * more, and the estimate not below the true error by more than a hundredth of the tolerance in 95 % or more; the repository's DEVELOPERS file has the table.
+ * problems of sixteen kinds, without derivatives or linear inputs, at tolerances of 0.1, 0.01 and 0.001 the true error was
+ * inside the tolerance in 99 % of cases or more, and the estimate not below the true error by more than a hundredth of the
+ * tolerance in 95 % or more; the repository's DEVELOPERS file has the table.
  *
  * <p><b>When it cannot.</b> The status is {@link MatchingStatus#BELOW_TOLERANCE}, the moments are the best there are, and {@link
- * MatchingWorkspace#failure()} says why: the budget of evaluations has ended, maybe before fresh probes; an angle of the output would pass half a turn
- * from the centre's; values further out are not finite. A function that is not smooth at the scale of the spread, such as a
- * range whose spread reaches its origin, ends so, and so does one whose Jacobian is wrong. Values that are not finite at the first points on the axes are {@link
- * MatchingStatus#FUNCTION_NOT_FINITE}.
+ * MatchingWorkspace#failure()} says why: the budget of evaluations has ended, maybe before fresh probes; an angle of the
+ * output would pass half a turn from the centre's; values further out are not finite. A function that is not smooth at the
+ * scale of the spread, such as a range whose spread reaches its origin, ends so, and so does one whose Jacobian is wrong. Values
+ * that are not finite at the first points on the axes are {@link MatchingStatus#FUNCTION_NOT_FINITE}.
  *
  * <p><b>Order of inputs.</b> Axis j of xi moves input j and those after it in the order of the active inputs. Where
  * inputs are correlated, name those first in which the function bends: fewer axes bend then.
@@ -51,8 +52,8 @@ import dev.estimation.core.space.Space;
  * <p>Cost: 2 k + 3 evaluations at least; where linear inputs have no Jacobian, each takes one more for each of
  * them. One Jacobian at the mean where there is one, or at every point if there are linear inputs. Arithmetic grows
  * with the square of the number of terms added. For each evaluation of the budget a workspace takes 32 bytes for
- * each output, times 1 + the linear inputs, and 5 for each input; nothing is allocated later. <i>Immutable.</i> Sources: Genz and Keister 1996, <i>Fully symmetric interpolatory
- * rules</i> (nodes); Gerstner and Griebel 2003, <i>Dimension-adaptive tensor-product quadrature</i>; Constantine, Eldred and
+ * each output, times 1 + the linear inputs, and 5 for each input; nothing is allocated later. <i>Immutable.</i> Sources: Genz
+ * and Keister 1996, <i>Fully symmetric interpolatory rules</i> (nodes); Gerstner and Griebel 2003, <i>Dimension-adaptive tensor-product quadrature</i>; Constantine, Eldred and
  * Phipps 2012, <i>Sparse pseudospectral approximation method</i> (the last from memory). Estimate and probes are our own.
  */
 public final class ToleranceMatching implements MomentMatching {

@@ -145,7 +145,7 @@ final class ToleranceWorkspace extends BaseWorkspace {
     }
   }
 
-  private MatchingStatus refine(Use use, boolean freshProbes) {
+  private MatchingStatus refine(Use use, boolean manyAxes) {
     boolean fresh = true;
     while (!values.turned()) {
       error = estimateError(use);
@@ -154,7 +154,8 @@ final class ToleranceWorkspace extends BaseWorkspace {
         return below("the estimate overflows");
       }
       boolean passes = error <= tolerance;
-      if (passes && (fresh || !freshProbes || !probes.hasNext())) {
+      boolean confirmed = fresh || !(manyAxes || hides()) || !probes.hasNext();
+      if (passes && confirmed) {
         return MatchingStatus.MATCHED;
       }
       int rest = (budget - evaluations()) / costOfNode;
@@ -174,6 +175,11 @@ final class ToleranceWorkspace extends BaseWorkspace {
     return error <= tolerance
         ? MatchingStatus.MATCHED
         : below("an angle of the output would pass half a turn from the centre's");
+  }
+
+  /** Whether two axes may hide something from one pair of probes: both bend, or products go beyond the first levels. */
+  private boolean hides() {
+    return expansion.set().isDeep() || estimate.bendingAxes() > 1;
   }
 
   private MatchingStatus below(String why) {
